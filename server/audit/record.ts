@@ -1,0 +1,60 @@
+import { type Db } from '#db/open-database';
+import { auditEntries } from '#db/schema/audit';
+import { desc } from 'drizzle-orm';
+import { createHash } from 'node:crypto';
+import { canonicalJson } from './canonical-json';
+
+/** What is written down of one change. */
+export interface Change {
+  at: Date;
+  /** Null when the program itself acted. */
+  person: { id: number; name: string } | null;
+  action: string;
+  subject: string;
+  subjectId: string | number;
+  before?: unknown;
+  after?: unknown;
+}
+
+/** The hash of an entry covers its content and the hash before it: SHA-256 of their canonical JSON. */
+export function entryHash(entry: {
+  at: string;
+  personId: number | null;
+  actor: string;
+  action: string;
+  subject: string;
+  subjectId: string;
+  before: string | null;
+  after: string | null;
+  previousHash: string;
+}): string {
+  const { at, personId, actor, action, subject, subjectId, before, after, previousHash } = entry;
+  const content = [previousHash, at, personId, actor, action, subject, subjectId, before, after];
+  return createHash('sha256').update(JSON.stringify(content)).digest('hex');
+}
+
+export const FIRST_HASH = '0'.repeat(64);
+
+/** Appends an audit entry; call it inside the transaction of the change it records. */
+export function record(db: Db, change: Change): void {
+  const last = db
+    .select({ hash: auditEntries.hash })
+    .from(auditEntries)
+    .orderBy(desc(auditEntries.id))
+    .limit(1)
+    .get();
+  const entry = {
+    at: change.at.toISOString(),
+    personId: change.person?.id ?? null,
+    actor: change.person?.name ?? 'Quietrail',
+    action: change.action,
+    subject: change.subject,
+    subjectId: String(change.subjectId),
+    before: change.before === undefined ? null : canonicalJson(change.before),
+    after: change.after === undefined ? null : canonicalJson(change.after),
+    previousHash: last?.hash ?? FIRST_HASH,
+  };
+  db.insert(auditEntries)
+    .values({ ...entry, hash: entryHash(entry) })
+    .run();
+}

@@ -1,0 +1,84 @@
+import { type Endpoint } from '#shared/contract/endpoint';
+import { type Request, type Response, type Router } from 'express';
+import * as z from 'zod';
+import { type Caller, hasRole } from './caller';
+import { Forbidden, Problem, Unauthenticated } from './problems';
+
+/** What a handler gets: parsed input, the version named by If-Match, and who calls. */
+export interface Input<E extends Endpoint> {
+  params: z.output<E['params']>;
+  query: z.output<E['query']>;
+  body: z.output<E['body']>;
+  version: number;
+  caller: Caller;
+  request: Request;
+  response: Response;
+}
+type Reply<E extends Endpoint> = z.input<E['reply']>;
+export type Handler<E extends Endpoint> = (input: Input<E>) => Reply<E> | Promise<Reply<E>>;
+
+declare module 'express-serve-static-core' {
+  // Express declares its request as an interface to be extended.
+  interface Request {
+    caller?: Caller;
+  }
+}
+
+function authorise(endpoint: Endpoint, request: Request): Caller | undefined {
+  const caller = request.caller;
+  if (endpoint.who === 'anyone') return caller;
+  if (!caller) throw new Unauthenticated();
+  if (endpoint.who !== 'signed-in' && !hasRole(caller, ...endpoint.who))
+    throw new Forbidden('Your roles do not allow this.');
+  return caller;
+}
+
+function namedVersion(endpoint: Endpoint, request: Request): number {
+  if (!endpoint.versioned) return 0;
+  const given = request.get('if-match');
+  if (given === undefined)
+    throw new Problem(428, 'version-missing', 'The request must name the version it changes (If-Match).');
+  const version = Number(given.replaceAll('"', ''));
+  if (!Number.isInteger(version) || version < 1)
+    throw new Problem(400, 'version-not-understood', 'If-Match must hold a version number.');
+  return version;
+}
+
+/** Parts of the request are told apart in the fault's path only where they are not the body. */
+function parse<S extends z.ZodType>(schema: S, value: unknown): z.output<S> {
+  return schema.parse(value);
+}
+
+function send(endpoint: Endpoint, response: Response, reply: unknown): void {
+  const parsed = endpoint.reply.parse(reply);
+  response.status(endpoint.status);
+  if (endpoint.media !== undefined) {
+    const { bytes, fileName } = parsed as { bytes: Uint8Array; fileName: string };
+    response.set('content-disposition', `inline; filename="${fileName.replaceAll(/[^\w.-]/g, '_')}"`);
+    response.type(endpoint.media).send(Buffer.from(bytes));
+    return;
+  }
+  if (typeof parsed === 'object' && parsed !== null && 'version' in parsed)
+    response.set('etag', `"${String(parsed.version)}"`);
+  response.json(parsed);
+}
+
+/** Binds one endpoint of the contract: authorises, validates, calls the handler, checks and sends its reply. */
+export function serve<E extends Endpoint>(router: Router, endpoint: E, handle: Handler<E>): void {
+  const method = endpoint.method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete';
+  router[method](endpoint.path, async (request: Request, response: Response) => {
+    const caller = authorise(endpoint, request);
+    const version = namedVersion(endpoint, request);
+    const reply = await handle({
+      params: parse(endpoint.params, request.params) as z.output<E['params']>,
+      query: parse(endpoint.query, request.query) as z.output<E['query']>,
+      body: parse(endpoint.body, request.body) as z.output<E['body']>,
+      version,
+      // Endpoints for anyone do not look at the caller; all others have one here.
+      caller: caller as Caller,
+      request,
+      response,
+    });
+    send(endpoint, response, reply);
+  });
+}

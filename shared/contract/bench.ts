@@ -1,0 +1,212 @@
+import * as z from 'zod';
+import { byId, done, endpoint } from './endpoint';
+import { id, moment, optionalLine, reason, version } from './fields';
+import { instrument } from './instruments';
+import { lotHead, lotSampling } from './lots';
+import { characteristic } from './plans';
+import { type Role } from './roles';
+
+const READERS = ['inspector', 'quality', 'engineering', 'auditor'] as const satisfies readonly Role[];
+const WRITERS = ['inspector', 'quality'] as const satisfies readonly Role[];
+
+/** Reasons for which a reading may be repeated. */
+export const REPEAT_REASONS = ['contact', 'wrong-range', 'warm-up', 'wrong-load', 'typing', 'other'] as const;
+export const REPEAT_REASON_TITLES: Record<(typeof REPEAT_REASONS)[number], string> = {
+  contact: 'Poor contact',
+  'wrong-range': 'Wrong range or scale',
+  'warm-up': 'Not warmed up',
+  'wrong-load': 'Wrong load or line voltage',
+  typing: 'Typing slip',
+  other: 'Other',
+};
+
+const divisions = z.number().positive('Must be more than 0.').max(100);
+const voltsPerDivision = z.number().positive('Must be more than 0.').max(1000);
+const probeFactor = z.number().positive('Must be more than 0.').max(10000);
+const coupling = z.enum(['ac', 'dc']);
+
+/** What the inspector typed. The server computes the value from it. */
+export const readingEntry = z.discriminatedUnion('kind', [
+  z.object({ kind: z.literal('direct'), text: z.string().trim().min(1).max(40), decimalComma: z.boolean() }),
+  z.object({
+    kind: z.literal('scope'),
+    scope: z.discriminatedUnion('form', [
+      z.object({ form: z.literal('whole'), divisions, voltsPerDivision, probeFactor, coupling }),
+      z.object({
+        form: z.literal('halves'),
+        upperDivisions: divisions,
+        lowerDivisions: divisions,
+        voltsPerDivision,
+        probeFactor,
+        coupling,
+      }),
+    ]),
+  }),
+  z.object({ kind: z.literal('attribute'), pass: z.boolean(), reason: optionalLine(120) }),
+]);
+export type ReadingEntry = z.infer<typeof readingEntry>;
+
+export const repeat = z.object({ reason: z.enum(REPEAT_REASONS), note: optionalLine(200) });
+
+export const readingBody = z.object({
+  unit: z.int().positive(),
+  characteristicKey: z.string().max(32),
+  entry: readingEntry,
+  instrumentId: id.nullable(),
+  note: optionalLine(300),
+  /** Present when the reading repeats an earlier one of the same unit and characteristic. */
+  repeat: repeat.nullable(),
+  /** When it was typed, by the clock of the bench. */
+  takenAt: moment,
+});
+export type ReadingBody = z.infer<typeof readingBody>;
+
+export const reading = z.object({
+  id: z.uuid(),
+  unit: z.int(),
+  characteristicKey: z.string(),
+  /** SI base unit; null for an attribute. */
+  value: z.number().nullable(),
+  pass: z.boolean().nullable(),
+  /** What was typed; null when a rack took it. */
+  entry: readingEntry.nullable(),
+  instrumentId: id.nullable(),
+  note: z.string(),
+  repeat: repeat.nullable(),
+  /** 1 for the first reading of its unit and characteristic, then 2, 3. */
+  attempt: z.int(),
+  withdrawn: z.boolean(),
+  takenBy: z.string().nullable(),
+  takenAt: moment,
+  receivedAt: moment,
+});
+export type Reading = z.infer<typeof reading>;
+
+export const sampleUnit = z.object({
+  unit: z.int(),
+  position: z.int(),
+  carton: z.int(),
+  setAside: z.string().nullable(),
+});
+
+/** Everything the bench needs of one lot. */
+export const bench = z.object({
+  lot: lotHead,
+  version,
+  sampling: lotSampling,
+  characteristics: z.array(characteristic),
+  units: z.array(sampleUnit),
+  readings: z.array(reading),
+  instruments: z.array(instrument),
+});
+export type Bench = z.infer<typeof bench>;
+
+const byReading = z.object({ id: z.coerce.number().int().positive(), reading: z.uuid() });
+
+export const readBench = endpoint({
+  method: 'GET',
+  path: '/api/lots/:id/bench',
+  who: READERS,
+  summary: 'Plan, sample and readings of a drawn lot.',
+  params: byId,
+  reply: bench,
+});
+
+/** What is acknowledged when a reading is kept; the verdicts are the server's. */
+export const kept = z.object({
+  reading,
+  verdict: z.enum(['conforming', 'conditional', 'nonconforming']),
+  unitVerdict: z.enum(['conforming', 'nonconforming', 'undecided', 'not judged']),
+  stop: z.boolean(),
+  lotReason: z.string(),
+});
+export type Kept = z.infer<typeof kept>;
+
+export const keepReading = endpoint({
+  method: 'PUT',
+  path: '/api/lots/:id/readings/:reading',
+  who: WRITERS,
+  summary: 'Keep a reading under an id made by the client; sending it twice changes nothing.',
+  params: byReading,
+  body: readingBody,
+  reply: kept,
+});
+export const withdrawReading = endpoint({
+  method: 'POST',
+  path: '/api/lots/:id/readings/:reading/withdrawal',
+  who: WRITERS,
+  summary: 'Undo a kept reading; it stays on record as withdrawn.',
+  params: byReading,
+  reply: done,
+});
+export const setUnitAside = endpoint({
+  method: 'PUT',
+  path: '/api/lots/:id/units/:unit/set-aside',
+  who: WRITERS,
+  summary: 'Set a unit aside as undecided, with a reason, or take it back (reason null).',
+  params: z.object({ id: z.coerce.number().int().positive(), unit: z.coerce.number().int().positive() }),
+  body: z.object({ reason: reason.nullable() }),
+  reply: done,
+});
+export const submitLot = endpoint({
+  method: 'POST',
+  path: '/api/lots/:id/submission',
+  who: WRITERS,
+  summary: 'Submit a measured lot for decision; refused while required readings are missing, unless stopped.',
+  params: byId,
+  versioned: true,
+  reply: done,
+});
+export const reopenLot = endpoint({
+  method: 'POST',
+  path: '/api/lots/:id/reopening',
+  who: ['quality'],
+  summary: 'Send a submitted lot back to the bench, with a reason.',
+  params: byId,
+  body: z.object({ reason }),
+  versioned: true,
+  reply: done,
+});
+
+const rackBody = z.object({
+  fileName: z.string().trim().min(1).max(200),
+  text: z.string().min(1, 'The file is empty.'),
+  /** Instruments the rack measured with, by kind. */
+  instrumentIds: z.array(id).max(10),
+});
+
+export const rackFault = z.object({ line: z.int(), column: z.string().nullable(), message: z.string() });
+export const rackPreview = z.object({
+  fileName: z.string(),
+  rows: z.int(),
+  columns: z.array(z.object({ header: z.string(), characteristicKey: z.string().nullable() })),
+  readings: z.int(),
+  faults: z.array(rackFault),
+  nonconformingUnits: z.array(z.object({ unit: z.int(), failed: z.array(z.string()) })),
+  groups: z.array(z.object({ class: z.string(), found: z.int(), acceptance: z.int(), rejection: z.int() })),
+  verdict: z.enum(['continue', 'accepted', 'rejected']),
+  reason: z.string(),
+});
+export type RackPreview = z.infer<typeof rackPreview>;
+
+export const previewRackFile = endpoint({
+  method: 'POST',
+  path: '/api/lots/:id/rack-file/preview',
+  who: WRITERS,
+  summary: 'What a rack file would bring: every bad row with line and reason; nothing is kept.',
+  params: byId,
+  body: rackBody,
+  large: true,
+  reply: rackPreview,
+});
+export const importRackFile = endpoint({
+  method: 'POST',
+  path: '/api/lots/:id/rack-file',
+  who: WRITERS,
+  summary: 'Import a rack file, all rows or none.',
+  params: byId,
+  body: rackBody,
+  large: true,
+  status: 201,
+  reply: rackPreview,
+});

@@ -1,0 +1,71 @@
+import { type NonconformityClass } from '../sampling/scheme';
+
+/** A person's signature under a paper: name, stamp and instant (UTC, ISO 8601). */
+export interface Signature {
+  name: string;
+  title: string;
+  stampNumber: string | null;
+  signedAt: string;
+}
+
+/** One line of a certificate's results; values in SI base units. */
+export interface CertificateResult {
+  name: string;
+  condition: string;
+  class: NonconformityClass;
+  kind: 'measured' | 'computed' | 'attribute';
+  unit: string | null;
+  decimals: number;
+  lowerLimit: number | null;
+  upperLimit: number | null;
+  requirement: string | null;
+  n: number;
+  found: number;
+  min: number | null;
+  mean: number | null;
+  max: number | null;
+  failReasons: string[];
+  acceptance: number;
+  rejection: number;
+}
+
+/** All that a certificate of conformance states; its digest is printed in the paper. */
+export interface CertificateData {
+  number: string;
+  issuer: { name: string; department: string; address: string };
+  lot: {
+    number: string;
+    size: number;
+    deliveryNumber: string;
+    orderNumber: string;
+    dateCode: string;
+    arrivedAt: string;
+  };
+  part: { number: string; name: string };
+  supplier: string;
+  plan: { number: string; revision: number; level: string; severity: string };
+  scheme: string;
+  sampleSize: number;
+  unitsJudged: number;
+  groups: {
+    class: NonconformityClass;
+    level: string;
+    aql: string;
+    codeLetter: string;
+    sampleSize: number;
+    acceptance: number;
+    rejection: number;
+    found: number;
+  }[];
+  results: CertificateResult[];
+  decisionRule: 'simple';
+  repeats: number;
+  unitsRemoved: number;
+  unitsReleased: number;
+  instruments: { assetNumber: string; kind: string; calibrationDue: string }[];
+  measuredFrom: string;
+  measuredTo: string;
+  inspector: Signature;
+  quality: Signature;
+  issuedAt: string;
+}
