@@ -1,0 +1,44 @@
+import { FORMULAS } from '../measurement/formula';
+import { demandFinite } from '../measurement/reading-not-finite';
+import { type JudgedCharacteristic } from './sample-verdict';
+
+/** The readings of one unit by characteristic key. */
+type Values = ReadonlyMap<string, number | boolean>;
+
+/** A computed characteristic on one unit: its value, an input that is missing, or readings its formula has no value for. */
+export type ComputedValue = { state: 'value'; value: number } | { state: 'missing' } | { state: 'no value' };
+
+/**
+ * Computes a characteristic from the readings of its unit.
+ *
+ * Readings may lie outside a formula's domain without being wrong: a dead output gives 0 V under load, and a regulation
+ * against 0 V does not exist. That is "no value", not an error.
+ *
+ * @param characteristic one of kind "computed", its inputs in SI base units
+ * @throws {RangeError} where the characteristic has no formula or binds no key to a formula input
+ * @throws {ReadingNotFinite} for a reading that is NaN or infinite
+ */
+export function computedValue(characteristic: JudgedCharacteristic, values: Values): ComputedValue {
+  const { formula, key } = characteristic;
+  if (formula === null) throw new RangeError(`characteristics: ${key} is computed and needs a formula.`);
+  const { inputs, compute } = FORMULAS[formula.key];
+  const given: Record<string, number> = {};
+  for (const { name } of inputs) {
+    const source = formula.inputs[name];
+    if (source === undefined) throw new RangeError(`characteristics: formula of ${key} binds nothing to ${name}.`);
+    const value = values.get(source);
+    if (typeof value !== 'number') return { state: 'missing' };
+    given[name] = value;
+  }
+  demandFinite(given);
+  return withinDomain(() => compute(given));
+}
+
+function withinDomain(compute: () => number): ComputedValue {
+  try {
+    return { state: 'value', value: compute() };
+  } catch (error) {
+    if (error instanceof RangeError) return { state: 'no value' };
+    throw error;
+  }
+}

@@ -1,0 +1,76 @@
+import { NONCONFORMITY_CLASSES, type NonconformityClass } from '../sampling/scheme';
+import { judgeCharacteristic } from './judge-characteristic';
+import { type JudgingRule, type JudgingRules } from './judging-rules';
+import { type CharacteristicVerdict, type UnitReadings, type UnitVerdict } from './sample-verdict';
+
+/** How a unit is judged. */
+export interface JudgingOptions {
+  /** Whether the sample is being submitted: a unit still undecided then counts as nonconforming. */
+  submitting?: boolean;
+}
+
+interface JudgedRule {
+  rule: JudgingRule;
+  verdict: CharacteristicVerdict;
+}
+
+const fails = ({ verdict }: JudgedRule) => verdict.verdict === 'nonconforming';
+const isConditional = ({ verdict }: JudgedRule) => verdict.verdict === 'conditional';
+const isOpen = (judged: JudgedRule) => judged.verdict.verdict === 'not judged' || isConditional(judged);
+const keyOf = ({ rule }: JudgedRule) => rule.characteristic.key;
+
+/** The worst class among failures that count on this unit; where none counts, the worst of all. */
+function worstClassOf(failures: readonly JudgedRule[], unit: number): NonconformityClass | null {
+  const counting = failures.filter(({ rule }) => unit <= rule.countsTo);
+  const ranks = (counting.length > 0 ? counting : failures).map(({ rule }) => rule.rank);
+  return NONCONFORMITY_CLASSES[Math.min(...ranks)] ?? null;
+}
+
+/**
+ * What an undecided unit is taken to fail in when the sample is submitted: its conditional readings and, where it was set
+ * aside, every characteristic left open on it, or all it was drawn for where none is. The worst of them gives its class.
+ */
+function takenAsFailed(required: readonly JudgedRule[], setAside: boolean): readonly JudgedRule[] {
+  const open = required.filter(setAside ? isOpen : isConditional);
+  return open.length > 0 || !setAside ? open : required;
+}
+
+function unitVerdict(failures: readonly JudgedRule[], undecided: boolean, missing: number): UnitVerdict['verdict'] {
+  if (failures.length > 0) return 'nonconforming';
+  if (undecided) return 'undecided';
+  return missing > 0 ? 'not judged' : 'conforming';
+}
+
+/**
+ * Judges one unit: nonconforming as soon as one characteristic fails, undecided when it was set aside or a reading is
+ * conditional, not judged while a required reading is missing.
+ *
+ * A characteristic is required only on the units its group covers. Measured beyond them it is judged and shown, and
+ * makes the unit nonconforming, but counts in no group unless it is critical.
+ *
+ * When the sample is submitted, an undecided unit becomes nonconforming in the characteristics left open on it (in all
+ * it was drawn for, where none is open) and counts at the worst class among them and what it failed in anyway.
+ *
+ * @throws {RangeError} for a unit number that is not a whole number of at least 1, or a value that cannot be judged
+ */
+export function judgeUnit(rules: JudgingRules, readings: UnitReadings, options: JudgingOptions = {}): UnitVerdict {
+  const { unit, values, setAside } = readings;
+  if (!Number.isSafeInteger(unit) || unit < 1) throw new RangeError(`unit must be a whole number from 1, not ${unit}.`);
+  const judged = rules.characteristics.map((rule) => ({
+    rule,
+    verdict: judgeCharacteristic(rule.characteristic, values),
+  }));
+  const required = judged.filter(({ rule }) => unit <= rule.requiredTo);
+  const undecided = setAside !== null || judged.some(isConditional);
+  const settled = undecided && options.submitting === true ? takenAsFailed(required, setAside !== null) : [];
+  const failures = judged.filter((each) => fails(each) || settled.includes(each));
+  const missing = setAside !== null ? [] : required.filter(({ verdict }) => verdict.verdict === 'not judged');
+  return {
+    unit,
+    verdict: unitVerdict(failures, undecided, missing.length),
+    failed: failures.map(keyOf),
+    worstClass: worstClassOf(failures, unit),
+    missing: missing.map(keyOf),
+    characteristics: new Map(judged.map((each) => [keyOf(each), each.verdict])),
+  };
+}
