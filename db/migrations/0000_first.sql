@@ -96,6 +96,7 @@ CREATE TABLE `lots` (
 	`drawn_at` text,
 	`drawn_by_id` integer,
 	`stopped` integer DEFAULT false NOT NULL,
+	`units_judged` integer DEFAULT 0 NOT NULL,
 	`submitted_at` text,
 	`submitted_by_id` integer,
 	`verdict` text,

@@ -1,5 +1,5 @@
 import { LOT_STATUSES } from '#shared/contract/lots';
-import { type SamplingGroup } from '#shared/sampling/lot-sampling';
+import { type SamplingGroup } from '#shared/sampling/sampling-group';
 import { SEVERITIES } from '#shared/sampling/scheme';
 import { sql } from 'drizzle-orm';
 import { check, index, integer, primaryKey, sqliteTable, text, unique } from 'drizzle-orm/sqlite-core';
@@ -46,6 +46,8 @@ export const lots = sqliteTable(
     drawnById: integer().references(() => people.id),
     /** Whether a rejection number is reached; kept in step by every reading. */
     stopped: flag().notNull().default(false),
+    /** Units on which nothing is left to measure; kept in step by every reading. */
+    unitsJudged: integer().notNull().default(0),
     submittedAt: moment(),
     submittedById: integer().references(() => people.id),
     verdict: text({ enum: VERDICTS }),
