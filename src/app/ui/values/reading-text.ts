@@ -1,4 +1,5 @@
-import { displayUnit, formatNumber, inDisplayUnit } from '#shared/quantities/format-quantity';
+import { formatNumber } from '#shared/quantities/format-number';
+import { displayUnit, inDisplayUnit } from '#shared/quantities/format-quantity';
 
 const SPACE = '\u00a0';
 

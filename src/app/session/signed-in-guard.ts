@@ -1,0 +1,19 @@
+import { inject } from '@angular/core';
+import { type CanMatchFn, RedirectCommand, Router } from '@angular/router';
+import { map } from 'rxjs';
+import { Session } from './session';
+
+/** Lets signed-in people pass; others sign in first and then come back to the address they wanted. */
+export const signedInGuard: CanMatchFn = () => {
+  const router = inject(Router);
+  const wanted = router.currentNavigation()?.extractedUrl.toString() ?? '/';
+  return inject(Session)
+    .restore()
+    .pipe(
+      map((me) => {
+        if (me !== null) return true;
+        const queryParams = wanted === '/' ? {} : { return: wanted };
+        return new RedirectCommand(router.createUrlTree(['/sign-in'], { queryParams }), { replaceUrl: true });
+      }),
+    );
+};
