@@ -1,0 +1,92 @@
+import { type Db } from '#db/open-database';
+import { messageAttempts, messages, receivedMessages } from '#db/schema/mail';
+import { NotFound } from '#server/problems';
+import { type Message, type MessageHead, type Received } from '#shared/contract/mail';
+import { asc, count, desc, eq, inArray, lt } from 'drizzle-orm';
+import { idOf, type Page, pageOfRows, type PageQuery } from './newest-first';
+
+const head = {
+  id: messages.id,
+  messageId: messages.messageId,
+  event: messages.event,
+  to: messages.recipients,
+  subject: messages.subject,
+  status: messages.status,
+  queuedAt: messages.queuedAt,
+  sentAt: messages.sentAt,
+};
+
+function attemptCounts(db: Db, ids: number[]): Map<number, number> {
+  const counts = db
+    .select({ id: messageAttempts.messageId, attempts: count() })
+    .from(messageAttempts)
+    .where(inArray(messageAttempts.messageId, ids))
+    .groupBy(messageAttempts.messageId)
+    .all();
+  return new Map(counts.map(({ id, attempts }) => [id, attempts]));
+}
+
+/** The outbox, newest first. */
+export function messagePage(db: Db, { after, limit }: PageQuery): Page<MessageHead> {
+  const rows = db
+    .select(head)
+    .from(messages)
+    .where(after === undefined ? undefined : lt(messages.id, idOf(after)))
+    .orderBy(desc(messages.id))
+    .limit(limit + 1)
+    .all();
+  const attempts = attemptCounts(
+    db,
+    rows.map((row) => row.id),
+  );
+  return pageOfRows(rows, limit, (row) => ({ ...row, attempts: attempts.get(row.id) ?? 0 }));
+}
+
+/** @throws {NotFound} when there is no such message */
+export function findMessage(db: Db, id: number): Message {
+  const found = db
+    .select({ ...head, text: messages.text, html: messages.html, nextAttemptAt: messages.nextAttemptAt })
+    .from(messages)
+    .where(eq(messages.id, id))
+    .get();
+  if (!found) throw new NotFound('This message');
+  const tries = db
+    .select({ at: messageAttempts.at, outcome: messageAttempts.outcome, detail: messageAttempts.detail })
+    .from(messageAttempts)
+    .where(eq(messageAttempts.messageId, id))
+    .orderBy(asc(messageAttempts.id))
+    .all();
+  return { ...found, tries, attempts: tries.length };
+}
+
+const receivedHead = {
+  id: receivedMessages.id,
+  messageId: receivedMessages.messageId,
+  from: receivedMessages.sender,
+  to: receivedMessages.recipients,
+  subject: receivedMessages.subject,
+  receivedAt: receivedMessages.receivedAt,
+};
+
+/** What the local mail server received, newest first. */
+export function receivedPage(db: Db, { after, limit }: PageQuery): Page<Omit<Received, 'text' | 'html'>> {
+  const rows = db
+    .select(receivedHead)
+    .from(receivedMessages)
+    .where(after === undefined ? undefined : lt(receivedMessages.id, idOf(after)))
+    .orderBy(desc(receivedMessages.id))
+    .limit(limit + 1)
+    .all();
+  return pageOfRows(rows, limit, (row) => row);
+}
+
+/** @throws {NotFound} when there is no such message */
+export function findReceived(db: Db, id: number): Received {
+  const found = db
+    .select({ ...receivedHead, text: receivedMessages.text, html: receivedMessages.html })
+    .from(receivedMessages)
+    .where(eq(receivedMessages.id, id))
+    .get();
+  if (!found) throw new NotFound('This received message');
+  return found;
+}
