@@ -2,16 +2,19 @@ import { ChangeDetectionStrategy, Component, inject, viewChild } from '@angular/
 import { MatSnackBar } from '@angular/material/snack-bar';
 import { Router } from '@angular/router';
 import { type Supplier } from '#shared/contract/suppliers';
+import { BackLink } from '../../shell/back-link';
 import { type HoldsTyping } from '../../shell/leave-guard';
-import { RecordHead } from '../../ui/record-head';
 import { SupplierForm } from '../supplier-form/supplier-form';
 
 /** Adds a supplier and opens it. */
 @Component({
   selector: 'qr-new-supplier-page',
-  imports: [RecordHead, SupplierForm],
+  imports: [BackLink, SupplierForm],
   template: `
-    <qr-record-head back="Suppliers" kind="Supplier" title="New supplier" />
+    <header class="record-head">
+      <qr-back-link to="/suppliers">Suppliers</qr-back-link>
+      <h1>New supplier</h1>
+    </header>
     <div class="page narrow">
       <section class="sheet pad"><qr-supplier-form (saved)="open($event)" /></section>
     </div>

@@ -1,9 +1,9 @@
-import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { addSupplier, listSuppliers } from '#shared/contract/suppliers';
 import { endpointResource } from '../../data/api';
-import { Session } from '../../session/session';
+import { may } from '../../session/may';
 import { Icon } from '../../ui/marks/icon';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
@@ -18,8 +18,6 @@ import { CountPipe } from '../../ui/values/count-pipe';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class SupplierListPage {
-  private readonly session = inject(Session);
-
   protected readonly suppliers = endpointResource(listSuppliers, () => ({}));
-  protected readonly mayAdd = computed(() => this.session.may(addSupplier));
+  protected readonly mayAdd = may(addSupplier);
 }
