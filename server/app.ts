@@ -1,0 +1,67 @@
+import compression from 'compression';
+import cookieParser from 'cookie-parser';
+import express, { Router, type Express, type RequestHandler } from 'express';
+import { type Context } from './context';
+import { countRoutes } from './counts/count-routes';
+import { eventRoutes } from './events/event-routes';
+import { mailRoutes } from './mail/mail-routes';
+import { problemHandler } from './problem-handler';
+import { NotFound, Problem } from './problems';
+import { attachCaller } from './sessions/attach-caller';
+import { sessionRoutes } from './sessions/session-routes';
+import { announceChanges } from './web/announce-changes';
+import { healthRoute } from './web/health-route';
+import { jsonBody } from './web/json-body';
+import { originCheck } from './web/origin-check';
+import { requestLog } from './web/request-log';
+import { securityHeaders } from './web/security-headers';
+import { staticApp } from './web/static-app';
+
+const AREAS: readonly ((router: Router, context: Context) => void)[] = [
+  sessionRoutes,
+  countRoutes,
+  eventRoutes,
+  mailRoutes,
+];
+
+/** An answer is as old as the moment it was given: its version tag names an edit, not everything it shows. */
+const neverCached: RequestHandler = (_request, response, next) => {
+  response.set('cache-control', 'no-store');
+  next();
+};
+
+const noSuchEndpoint: RequestHandler = (_request, _response, next) => {
+  next(new Problem(404, 'no-such-endpoint', 'This interface has no such endpoint.'));
+};
+
+const nothingHere: RequestHandler = (_request, _response, next) => {
+  next(new NotFound('This address'));
+};
+
+/** Events are sent as they happen, not when a compressor has enough of them. */
+const compressed = compression({
+  filter: (request, response) =>
+    !String(response.getHeader('content-type')).startsWith('text/event-stream') &&
+    compression.filter(request, response),
+});
+
+/** The application behind one port: interface, live counts and the browser's files. It does not listen. */
+export function createApp(context: Context): Express {
+  const { environment, log, stream } = context;
+  const app = express();
+  app.disable('x-powered-by');
+  app.set('trust proxy', environment.trustProxy);
+  app.use(requestLog(log), securityHeaders(environment), compressed);
+
+  app.use('/api', neverCached, originCheck(environment), cookieParser(), attachCaller(context), jsonBody());
+  app.use('/api', announceChanges(stream));
+  const router = Router();
+  for (const area of AREAS) area(router, context);
+  app.use(router);
+  app.use('/api', noSuchEndpoint);
+
+  app.get('/health', healthRoute(context));
+  app.use(staticApp(environment.root), nothingHere);
+  app.use(problemHandler(log));
+  return app;
+}

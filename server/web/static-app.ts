@@ -1,0 +1,37 @@
+import express, { type Request, type RequestHandler, type Response } from 'express';
+import path from 'node:path';
+
+/** Files with a hash in their name never change. */
+const HASHED = /-[A-Z0-9]{8}\.\w+$/;
+
+function setCaching(response: Response, file: string): void {
+  const caching = HASHED.test(file) ? 'public, max-age=31536000, immutable' : 'no-cache';
+  response.set('cache-control', path.basename(file) === 'index.html' ? 'no-store' : caching);
+}
+
+/** Whether the address is a page of the application rather than a file. */
+function asksForPage(request: Request): boolean {
+  return request.method === 'GET' && path.extname(request.path) === '' && request.accepts('html') === 'html';
+}
+
+/** The application was not built. */
+function isMissing(error: Error): boolean {
+  return 'code' in error && error.code === 'ENOENT';
+}
+
+/** The browser's application: its files, and its one page under every address of its own. */
+export function staticApp(root: string): RequestHandler[] {
+  const folder = path.join(root, 'dist', 'app');
+  const files = express.static(folder, { index: false, redirect: false, setHeaders: setCaching, cacheControl: false });
+  const page: RequestHandler = (request, response, next) => {
+    if (!asksForPage(request)) {
+      next();
+      return;
+    }
+    const headers = { 'cache-control': 'no-store' };
+    response.sendFile('index.html', { root: folder, cacheControl: false, headers }, (error) => {
+      if (error) next(isMissing(error) ? undefined : error);
+    });
+  };
+  return [files, page];
+}
