@@ -1,0 +1,44 @@
+import { ChangeDetectionStrategy, Component, inject, input, numberAttribute, viewChild } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MatSnackBar } from '@angular/material/snack-bar';
+import { RouterLink } from '@angular/router';
+import { changePart, FORM_TITLES, type Part, readPart } from '#shared/contract/parts';
+import { addPlan, listPlans } from '#shared/contract/plans';
+import { endpointResource } from '../../data/api';
+import { may } from '../../session/may';
+import { BackLink } from '../../shell/back-link';
+import { type HoldsTyping } from '../../shell/leave-guard';
+import { ElectricalFacts } from '../../ui/electrical-facts';
+import { Loaded } from '../../ui/page-state/loaded';
+import { PageState } from '../../ui/page-state/page-state';
+import { ReadOnlyNote } from '../../ui/states/read-only-note';
+import { PartForm } from '../part-form/part-form';
+
+/** One part: a form for quality, the values as text for everybody else, and the way to its plan. */
+@Component({
+  selector: 'qr-part-page',
+  imports: [BackLink, ElectricalFacts, Loaded, MatButton, PageState, PartForm, ReadOnlyNote, RouterLink],
+  templateUrl: './part-page.html',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class PartPage implements HoldsTyping {
+  private readonly snackBar = inject(MatSnackBar);
+  private readonly form = viewChild(PartForm);
+
+  readonly id = input.required({ transform: numberAttribute });
+
+  protected readonly part = endpointResource(readPart, () => ({ params: { id: this.id() } }));
+  protected readonly mayChange = may(changePart);
+  protected readonly mayPlan = may(addPlan);
+  protected readonly mayReadPlans = may(listPlans);
+  protected readonly forms = FORM_TITLES;
+
+  hasUnsaved(): boolean {
+    return this.form()?.hasUnsaved() ?? false;
+  }
+
+  protected show(part: Part): void {
+    this.part.set(part);
+    this.snackBar.open(`Part ${part.number} saved`);
+  }
+}
