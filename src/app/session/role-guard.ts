@@ -11,23 +11,22 @@ export function roleGuard(...roles: readonly Role[]): CanMatchFn {
 
 /**
  * An area that some roles may see: for them its own pages, for others, at the same address, a page that says who may. Who
- * may is what the contract says of the endpoint that the area shows.
+ * may is what the contract says of the endpoint that the area shows. An area without a path of its own names the `paths`
+ * it answers to.
  */
-export function areaFor(who: Who, area: Route & { title: string }): Routes {
+export function areaFor(who: Who, area: Route & { path: string; title: string }, paths = [area.path]): Routes {
   if (typeof who === 'string') return [area];
-  return [
-    { ...area, canMatch: [roleGuard(...who)] },
-    {
-      path: area.path,
-      title: area.title,
-      children: [
-        { path: '**', loadComponent: () => import('./forbidden-page').then((file) => file.ForbiddenPage), data: { who: whoSentence(area.title, who) } },
-      ],
-    },
-  ];
+  const told = { who: whoSentence(area.title, who) };
+  const loadComponent = () => import('./forbidden-page').then((file) => file.ForbiddenPage);
+  const closed = paths.map((path) => ({
+    path,
+    title: area.title,
+    children: [{ path: '**', loadComponent, data: told }],
+  }));
+  return [{ ...area, canMatch: [roleGuard(...who)] }, ...closed];
 }
 
-/** "Decision is for: inspector, quality engineer, auditor." */
+/** "Decision is for inspector, quality engineer, auditor." */
 function whoSentence(title: string, roles: readonly Role[]): string {
-  return `${title} is for: ${roles.map((role) => ROLE_TITLES[role].toLowerCase()).join(', ')}.`;
+  return `${title} is for ${roles.map((role) => ROLE_TITLES[role].toLowerCase()).join(', ')}.`;
 }

@@ -72,6 +72,6 @@ export class Session {
 
   private leave(returnTo?: string): void {
     this.person.set(null);
-    void this.router.navigate(['/sign-in'], { queryParams: { return: returnTo } });
+    void this.router.navigate(['/sign-in'], { queryParams: { back: returnTo } });
   }
 }

@@ -12,7 +12,7 @@ export const signedInGuard: CanMatchFn = () => {
     .pipe(
       map((me) => {
         if (me !== null) return true;
-        const queryParams = wanted === '/' ? {} : { return: wanted };
+        const queryParams = wanted === '/' ? {} : { back: wanted };
         return new RedirectCommand(router.createUrlTree(['/sign-in'], { queryParams }), { replaceUrl: true });
       }),
     );

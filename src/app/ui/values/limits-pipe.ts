@@ -1,5 +1,5 @@
 import { Pipe, type PipeTransform } from '@angular/core';
-import { formatLimits } from '#shared/quantities/format-quantity';
+import { formatLimits } from '#shared/quantities/format-limits';
 
 interface Limits {
   lower: number | null;

@@ -1,7 +1,6 @@
+import { inDisplayUnit } from '#shared/quantities/display-unit';
 import { formatNumber } from '#shared/quantities/format-number';
-import { displayUnit, inDisplayUnit } from '#shared/quantities/format-quantity';
-
-const SPACE = '\u00a0';
+import { withUnit } from '#shared/quantities/unit-label';
 
 /** A reading's digits in its characteristic's unit; `value` is in SI base units. */
 export function readingDigits(value: number, unit: string, decimals: number): string {
@@ -10,6 +9,5 @@ export function readingDigits(value: number, unit: string, decimals: number): st
 
 /** A reading with its unit: 1.85 V p-p. */
 export function readingText(value: number, unit: string, decimals: number): string {
-  const label = unit === '' ? '' : `${SPACE}${displayUnit(unit).label}`;
-  return `${readingDigits(value, unit, decimals)}${label}`;
+  return withUnit(readingDigits(value, unit, decimals), unit);
 }

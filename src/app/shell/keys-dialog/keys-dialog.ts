@@ -1,0 +1,69 @@
+import { ChangeDetectionStrategy, Component } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MatDialogModule } from '@angular/material/dialog';
+
+const EVERYWHERE = [
+  { keys: ['/'], does: 'Find a lot, part, supplier, certificate or nonconformance' },
+  { keys: ['Alt', '1 to 6'], does: 'Go to a station: arrivals, bench, decision, released, on hold, trends' },
+  { keys: ['?'], does: 'Show these keys' },
+];
+const BENCH = [
+  { keys: ['0 to 9'], does: 'Start or replace the reading' },
+  { keys: ['Enter'], does: 'Keep it, go to the next unit; a nonconforming reading needs it twice' },
+  { keys: ['Tab'], does: 'Next characteristic; with Shift the one before' },
+  { keys: ['Arrows', 'Home', 'End', 'PgUp', 'PgDn'], does: 'Move in the grid' },
+  { keys: ['P', 'F'], does: 'Pass or fail an attribute' },
+  { keys: ['F2'], does: 'Edit the reading' },
+  { keys: ['Esc'], does: 'Undo the edit; again leaves the grid' },
+  { keys: ['R'], does: 'Repeat a reading, with a reason' },
+  { keys: ['H'], does: 'Set the unit aside, with a reason' },
+];
+
+/** All keys of the product in one list. */
+@Component({
+  selector: 'qr-keys-dialog',
+  imports: [MatButton, MatDialogModule],
+  template: `
+    <h2 mat-dialog-title>Keys</h2>
+    <mat-dialog-content>
+      @for (group of groups; track group.title) {
+        <h3>{{ group.title }}</h3>
+        <dl class="kv">
+          @for (key of group.keys; track key.does) {
+            <dt>
+              @for (cap of key.keys; track cap) {
+                <kbd>{{ cap }}</kbd>
+              }
+            </dt>
+            <dd>{{ key.does }}</dd>
+          }
+        </dl>
+      }
+    </mat-dialog-content>
+    <mat-dialog-actions>
+      <button type="button" matButton mat-dialog-close>Close</button>
+    </mat-dialog-actions>
+  `,
+  styles: `
+    h3 {
+      margin: 12px 0 6px;
+      color: var(--qr-ink);
+    }
+    dt {
+      display: flex;
+      flex-wrap: wrap;
+      gap: 4px;
+      max-width: 150px;
+    }
+    dd {
+      font-weight: 400;
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class KeysDialog {
+  protected readonly groups = [
+    { title: 'Everywhere', keys: EVERYWHERE },
+    { title: 'At the bench', keys: BENCH },
+  ];
+}
