@@ -18,7 +18,7 @@ function ofZod(error: z.ZodError): ProblemDetails {
 }
 
 /** What the database refuses, told in words; anything else it says is our fault. */
-function ofSqlite(error: Sqlite.SqliteError): ProblemDetails | undefined {
+function ofSqlite(error: InstanceType<typeof Sqlite.SqliteError>): ProblemDetails | undefined {
   switch (error.code) {
     case 'SQLITE_CONSTRAINT_UNIQUE':
     case 'SQLITE_CONSTRAINT_PRIMARYKEY':

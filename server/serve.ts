@@ -1,6 +1,6 @@
-import { type Endpoint } from '#shared/contract/endpoint';
+import type { Endpoint } from '#shared/contract/endpoint';
 import { type Request, type Response, type Router } from 'express';
-import * as z from 'zod';
+import type * as z from 'zod';
 import { type Caller, hasRole } from './caller';
 import { Forbidden, Problem, Unauthenticated } from './problems';
 

@@ -1,5 +1,11 @@
 import { REVISION_STATUSES, type Characteristic } from '#shared/contract/plans';
-import { AQLS, INSPECTION_LEVELS, NONCONFORMITY_CLASSES, type Aql, type NonconformityClass } from '#shared/sampling/scheme';
+import {
+  AQLS,
+  INSPECTION_LEVELS,
+  NONCONFORMITY_CLASSES,
+  type Aql,
+  type NonconformityClass,
+} from '#shared/sampling/scheme';
 import { check, integer, primaryKey, sqliteTable, text, unique } from 'drizzle-orm/sqlite-core';
 import { moment, oneOf, version } from './columns';
 import { parts } from './parts';

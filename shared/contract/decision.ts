@@ -35,13 +35,21 @@ export const assessment = z.object({
   reason: z.string(),
   stoppedAtUnit: z.int().nullable(),
   unitsJudged: z.int(),
-  units: z.array(z.object({ unit: z.int(), state: unitState, failed: z.array(z.string()), serial: z.string().nullable() })),
+  units: z.array(
+    z.object({ unit: z.int(), state: unitState, failed: z.array(z.string()), serial: z.string().nullable() }),
+  ),
   groups: z.array(
     z.object({ group: samplingGroup, found: z.int(), undecided: z.int(), verdict: z.string(), reason: z.string() }),
   ),
   characteristics: z.array(characteristicResult),
   instruments: z.array(
-    z.object({ assetNumber: z.string(), kind: z.string(), description: z.string(), calibrationDue: z.string(), readings: z.int() }),
+    z.object({
+      assetNumber: z.string(),
+      kind: z.string(),
+      description: z.string(),
+      calibrationDue: z.string(),
+      readings: z.int(),
+    }),
   ),
   takenBy: z.array(z.string()),
   repeats: z.int(),

@@ -14,5 +14,5 @@ export const readDocumentation = endpoint({
   who: 'anyone',
   summary: 'This interface as a page to read.',
   media: 'text/html; charset=utf-8',
-  reply: z.object({ bytes: z.instanceof(Uint8Array), fileName: z.string() }),
+  reply: z.object({ bytes: z.custom<Uint8Array>((value) => value instanceof Uint8Array), fileName: z.string() }),
 });

@@ -46,7 +46,10 @@ type Nothing = typeof nothing;
 export const done = z.object({ done: z.literal(true) });
 
 /** The reply of an endpoint that answers with a file. */
-export const file = z.object({ bytes: z.instanceof(Uint8Array), fileName: z.string() });
+export const file = z.object({
+  bytes: z.custom<Uint8Array>((value) => value instanceof Uint8Array),
+  fileName: z.string(),
+});
 
 /** The usual path parameter. */
 export const byId = z.object({ id: z.coerce.number().int().positive() });

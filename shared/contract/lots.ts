@@ -6,15 +6,7 @@ import { pageOf, pageQuery } from './page';
 import { aql, inspectionLevel, nonconformityClass } from './plans';
 import { LOT_READERS, type Role } from './roles';
 
-export const LOT_STATUSES = [
-  'arrived',
-  'drawn',
-  'measuring',
-  'submitted',
-  'released',
-  'on-hold',
-  'cancelled',
-] as const;
+export const LOT_STATUSES = ['arrived', 'drawn', 'measuring', 'submitted', 'released', 'on-hold', 'cancelled'] as const;
 export const lotStatus = z.enum(LOT_STATUSES);
 export type LotStatus = z.infer<typeof lotStatus>;
 export const LOT_STATUS_TITLES: Record<LotStatus, string> = {
@@ -72,7 +64,8 @@ export const samplingGroup = z.object({
   aql,
   characteristicKeys: z.array(z.string()),
   codeLetter: z.enum(CODE_LETTERS),
-  planLetter: z.enum(CODE_LETTERS),
+  /** Letter of the plan after arrows; row S stands only in the tightened table. */
+  planLetter: z.enum([...CODE_LETTERS, 'S']),
   sampleSize: z.int(),
   acceptance: z.int(),
   rejection: z.int(),
@@ -209,7 +202,10 @@ export const previewSampling = endpoint({
   path: '/api/sampling',
   who: LOT_READERS,
   summary: 'How a lot of this part and size would be sampled now.',
-  query: z.object({ partId: z.coerce.number().int().positive(), lotSize: z.coerce.number().int().min(1).max(1_000_000) }),
+  query: z.object({
+    partId: z.coerce.number().int().positive(),
+    lotSize: z.coerce.number().int().min(1).max(1_000_000),
+  }),
   reply: lotSampling,
 });
 export const drawSample = endpoint({

@@ -49,4 +49,3 @@ export const changeSite = endpoint({
   versioned: true,
   reply: site,
 });
-

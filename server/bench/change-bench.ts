@@ -1,0 +1,136 @@
+import { type Db } from '#db/open-database';
+import { lots, sampleUnits } from '#db/schema/lots';
+import { readings } from '#db/schema/readings';
+import { record } from '#server/audit/record';
+import { hasRole, type Caller } from '#server/caller';
+import { type Context } from '#server/context';
+import { findLot } from '#server/lots/lot-rows';
+import { recordLot } from '#server/lots/record-lot';
+import { Conflict, Forbidden, holdVersion, NotFound } from '#server/problems';
+import { and, eq } from 'drizzle-orm';
+import { lotAtBench } from './bench-lot';
+import { countingReadings, unitOf } from '#server/judging/lot-judging';
+import { judgeSampleOf } from '#server/judging/sample-judging';
+import { rejudge, type RunningVerdicts } from '#server/judging/running-verdicts';
+
+const DONE = { done: true } as const;
+
+/** Runs an act on one unit of a lot at the bench, judges the lot again, and forgets what was held of it. */
+function onUnit(
+  context: Context,
+  verdicts: RunningVerdicts,
+  lotId: number,
+  change: (db: Db, at: Date) => number,
+): typeof DONE {
+  const at = context.clock.now();
+  context.db.transaction((tx) => {
+    const lot = lotAtBench(tx, lotId);
+    const held = verdicts.of(tx, lot);
+    rejudge(tx, lot, held, change(tx, at), at);
+  });
+  verdicts.drop(lotId);
+  return DONE;
+}
+
+/** Takes back the reading that counts in its cell; it stays on record as withdrawn. */
+export function withdrawReading(
+  context: Context,
+  verdicts: RunningVerdicts,
+  caller: Caller,
+  lotId: number,
+  readingId: string,
+) {
+  return onUnit(context, verdicts, lotId, (tx, at) => {
+    const found = tx
+      .select({ reading: readings, unit: sampleUnits.unit })
+      .from(readings)
+      .innerJoin(sampleUnits, eq(sampleUnits.id, readings.unitId))
+      .where(and(eq(readings.id, readingId), eq(readings.lotId, lotId)))
+      .get();
+    if (!found) throw new NotFound('This reading');
+    const { reading, unit } = found;
+    if (reading.takenById !== caller.id && !hasRole(caller, 'quality'))
+      throw new Forbidden('A reading is taken back by the person who took it, or by quality.', 'not-your-reading');
+    const counting = countingReadings(unitOf(tx, lotId, unit)?.readings ?? []).get(reading.characteristicId);
+    if (counting?.id !== readingId)
+      throw new Conflict('reading-does-not-count', 'This reading is withdrawn or was repeated already.');
+    tx.update(readings)
+      .set({ withdrawnAt: at.toISOString(), withdrawnById: caller.id })
+      .where(eq(readings.id, readingId))
+      .run();
+    record(tx, {
+      at,
+      person: caller,
+      action: 'withdrawn',
+      subject: 'reading',
+      subjectId: readingId,
+      before: { value: reading.value, pass: reading.pass },
+    });
+    return unit;
+  });
+}
+
+/** Sets a unit aside as undecided, with a reason, or takes it back. */
+export function setUnitAside(
+  context: Context,
+  verdicts: RunningVerdicts,
+  caller: Caller,
+  lotId: number,
+  unit: number,
+  reason: string | null,
+) {
+  return onUnit(context, verdicts, lotId, (tx, at) => {
+    const rows = unitOf(tx, lotId, unit);
+    if (!rows) throw new NotFound('This unit');
+    tx.update(sampleUnits).set({ setAsideReason: reason }).where(eq(sampleUnits.id, rows.unit.id)).run();
+    record(tx, {
+      at,
+      person: caller,
+      action: reason === null ? 'taken back' : 'set aside',
+      subject: 'unit',
+      subjectId: `${lotId}/${unit}`,
+      before: { setAside: rows.unit.setAsideReason },
+      after: { setAside: reason },
+    });
+    return unit;
+  });
+}
+
+/** Submits a lot for decision: everything required is judged, or a rejection number is reached. */
+export function submitLot(context: Context, verdicts: RunningVerdicts, caller: Caller, id: number, version: number) {
+  const at = context.clock.now();
+  context.db.transaction((tx) => {
+    const lot = lotAtBench(tx, id);
+    holdVersion(`Lot ${lot.number}`, lot.version, version);
+    const { verdict } = judgeSampleOf(tx, lot);
+    if (!verdict.lot.stop && !verdict.lot.complete) {
+      const missing = verdict.units.reduce((sum, unit) => sum + unit.missing.length, 0);
+      throw new Conflict('readings-missing', `${missing} readings are still missing.`);
+    }
+    tx.update(lots)
+      .set({ status: 'submitted', submittedAt: at.toISOString(), submittedById: caller.id, version: lot.version + 1 })
+      .where(eq(lots.id, id))
+      .run();
+    const settled = judgeSampleOf(tx, lot, { submitting: true }).verdict.lot;
+    recordLot(tx, { at, person: caller, action: 'submitted', lotId: id, note: settled.reason });
+  });
+  verdicts.drop(id);
+  return DONE;
+}
+
+/** Sends a submitted lot back to the bench. */
+export function reopenLot(context: Context, caller: Caller, id: number, version: number, reason: string) {
+  const at = context.clock.now();
+  context.db.transaction((tx) => {
+    const { lot } = findLot(tx, id);
+    holdVersion(`Lot ${lot.number}`, lot.version, version);
+    if (lot.status !== 'submitted')
+      throw new Conflict('lot-not-submitted', `Lot ${lot.number} is not waiting for a decision.`);
+    tx.update(lots)
+      .set({ status: 'measuring', submittedAt: null, submittedById: null, version: lot.version + 1 })
+      .where(eq(lots.id, id))
+      .run();
+    recordLot(tx, { at, person: caller, action: 'reopened', lotId: id, note: reason });
+  });
+  return DONE;
+}

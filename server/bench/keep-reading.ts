@@ -1,0 +1,155 @@
+import { type Db } from '#db/open-database';
+import { lots } from '#db/schema/lots';
+import { people } from '#db/schema/people';
+import { readings } from '#db/schema/readings';
+import { record } from '#server/audit/record';
+import { type Caller } from '#server/caller';
+import { type Context } from '#server/context';
+import { dayOf } from '#server/instruments/instrument-view';
+import { type LotRow } from '#server/lots/lot-rows';
+import { recordLot } from '#server/lots/record-lot';
+import { Conflict, Refused } from '#server/problems';
+import { type Kept, type ReadingBody } from '#shared/contract/bench';
+import { mayRepeat } from '#shared/verdict/counting-reading';
+import { eq } from 'drizzle-orm';
+import { lotAtBench } from './bench-lot';
+import { entryValue } from './entry-value';
+import { countingReadings, unitOf, type LotRules, type ReadingRow, type UnitRows } from '#server/judging/lot-judging';
+import { holdInstrument } from './reading-instrument';
+import { readingView } from './reading-view';
+import { rejudge, type RunningVerdict, type RunningVerdicts } from '#server/judging/running-verdicts';
+
+interface Cell {
+  characteristicId: number;
+  rows: UnitRows;
+  /** All readings of the cell, the withdrawn ones too, in the order they were taken. */
+  earlier: ReadingRow[];
+}
+
+function refuse(field: string, message: string): never {
+  throw new Refused('reading-refused', message, [{ path: [field], message }]);
+}
+
+function cellOf(db: Db, lot: LotRow, { characteristics }: LotRules, body: ReadingBody): Cell {
+  const characteristic = characteristics.find(({ content }) => content.key === body.characteristicKey);
+  if (!characteristic) return refuse('characteristicKey', `The plan has no characteristic ${body.characteristicKey}.`);
+  const rows = unitOf(db, lot.id, body.unit);
+  if (!rows) return refuse('unit', `Unit ${body.unit} is not in the sample of ${lot.sampleSize ?? 0}.`);
+  const earlier = rows.readings.filter((row) => row.characteristicId === characteristic.id);
+  return { characteristicId: characteristic.id, rows, earlier };
+}
+
+function nameOf(db: Db, personId: number | null): string {
+  const found = personId && db.select({ name: people.name }).from(people).where(eq(people.id, personId)).get();
+  return found ? found.name : 'a rack';
+}
+
+/** A cell that has a reading takes another one only as a repeat with its reason, and two of those at most. */
+function holdRepeat(db: Db, { rows, earlier, characteristicId }: Cell, body: ReadingBody): void {
+  const counting = countingReadings(rows.readings).get(characteristicId);
+  if (counting && !body.repeat)
+    throw new Conflict(
+      'reading-there-already',
+      `Unit ${body.unit} has this reading already, by ${nameOf(db, counting.takenById)}. Repeat it with a reason.`,
+    );
+  if (!counting && body.repeat) refuse('repeat', 'There is no reading to repeat.');
+  if (!mayRepeat(earlier.map((row) => ({ withdrawn: row.withdrawnAt !== null }))))
+    throw new Conflict('no-more-repeats', `Unit ${body.unit} has had this reading three times; set the unit aside.`);
+}
+
+/** The same reading sent twice is acknowledged twice; another one under the same id is refused. */
+function holdSame(row: ReadingRow, cell: Cell): void {
+  const same = row.unitId === cell.rows.unit.id && row.characteristicId === cell.characteristicId;
+  if (!same) throw new Conflict('reading-id-used', 'Another reading has this id already.');
+}
+
+function start(db: Db, lot: LotRow, caller: Caller, at: Date): void {
+  if (lot.status !== 'drawn') return;
+  db.update(lots).set({ status: 'measuring' }).where(eq(lots.id, lot.id)).run();
+  recordLot(db, { at, person: caller, action: 'started', lotId: lot.id, note: '' });
+}
+
+function insert(
+  db: Db,
+  lot: LotRow,
+  cell: Cell,
+  caller: Caller,
+  id: string,
+  body: ReadingBody,
+  rules: LotRules,
+  at: Date,
+) {
+  const content = rules.characteristics.find((one) => one.id === cell.characteristicId)?.content;
+  if (!content) throw new Error('A cell without characteristic.');
+  const worth = entryValue(body.entry, content);
+  holdInstrument(db, content, body.instrumentId, dayOf(at));
+  holdRepeat(db, cell, body);
+  const row = db
+    .insert(readings)
+    .values({
+      id,
+      lotId: lot.id,
+      unitId: cell.rows.unit.id,
+      characteristicId: cell.characteristicId,
+      attempt: cell.earlier.length + 1,
+      ...worth,
+      entry: body.entry,
+      instrumentId: body.instrumentId,
+      note: body.note,
+      repeatReason: body.repeat?.reason ?? null,
+      repeatNote: body.repeat?.note ?? null,
+      takenById: caller.id,
+      takenAt: body.takenAt,
+      receivedAt: at.toISOString(),
+    })
+    .returning()
+    .get();
+  record(db, {
+    at,
+    person: caller,
+    action: 'kept',
+    subject: 'reading',
+    subjectId: id,
+    after: { lot: lot.id, unit: body.unit, characteristic: content.key, ...worth, attempt: row.attempt },
+  });
+  return row;
+}
+
+function acknowledge(db: Db, row: ReadingRow, body: ReadingBody, running: RunningVerdict): Kept {
+  const verdict = running.unit.characteristics.get(body.characteristicKey)?.verdict;
+  return {
+    reading: readingView(row, body.unit, body.characteristicKey, nameOf(db, row.takenById)),
+    verdict: verdict === undefined || verdict === 'not judged' ? 'conforming' : verdict,
+    unitVerdict: running.unit.verdict,
+    stop: running.lot.stop,
+    lotReason: running.lot.reason,
+  };
+}
+
+/**
+ * Keeps a reading under the id its client made. When this returns, the reading is on the disk.
+ *
+ * @throws {Refused | Conflict} telling the inspector what to do
+ */
+export function keepReading(
+  context: Context,
+  verdicts: RunningVerdicts,
+  caller: Caller,
+  lotId: number,
+  id: string,
+  body: ReadingBody,
+): Kept {
+  const at = context.clock.now();
+  const { row, running } = context.db.transaction((tx) => {
+    const known = tx.select().from(readings).where(eq(readings.id, id)).get();
+    const lot = lotAtBench(tx, lotId);
+    const held = verdicts.of(tx, lot);
+    const cell = cellOf(tx, lot, held.rules, body);
+    if (known) holdSame(known, cell);
+    else start(tx, lot, caller, at);
+    const kept = known ?? insert(tx, lot, cell, caller, id, body, held.rules, at);
+    return { row: kept, running: rejudge(tx, lot, held, body.unit, at) };
+  });
+  verdicts.commit(lotId, running.unit);
+  return acknowledge(context.db, row, body, running);
+}

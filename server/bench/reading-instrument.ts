@@ -1,0 +1,52 @@
+import { type Db } from '#db/open-database';
+import { instruments } from '#db/schema/instruments';
+import { Refused } from '#server/problems';
+import { INSTRUMENT_KIND_TITLES } from '#shared/contract/instruments';
+import { type Characteristic } from '#shared/contract/plans';
+import { eq } from 'drizzle-orm';
+
+type InstrumentRow = typeof instruments.$inferSelect;
+
+/** Why an instrument may not be used on a day; undefined when it may. The due date itself is still good. */
+export function unusable(instrument: InstrumentRow, today: string): string | undefined {
+  if (instrument.status === 'withdrawn') return `${instrument.assetNumber} is withdrawn.`;
+  if (instrument.calibrationDue < today)
+    return `${instrument.assetNumber} is past its calibration date ${instrument.calibrationDue}.`;
+  return undefined;
+}
+
+/** @throws {Refused} when no such instrument exists or it may not be used today */
+export function usableInstrument(db: Db, id: number, today: string): InstrumentRow {
+  const refuse = (message: string): never => {
+    throw new Refused('instrument-refused', message, [{ path: ['instrumentId'], message }]);
+  };
+  const found = db.select().from(instruments).where(eq(instruments.id, id)).get();
+  if (!found) return refuse('This instrument does not exist.');
+  const why = unusable(found, today);
+  return why === undefined ? found : refuse(why);
+}
+
+/**
+ * Holds that a reading names an instrument of the kind the plan asks for, in service and not past its calibration date.
+ *
+ * @throws {Refused} naming the field
+ */
+export function holdInstrument(
+  db: Db,
+  characteristic: Characteristic,
+  instrumentId: number | null,
+  today: string,
+): void {
+  if (characteristic.kind === 'computed') return;
+  const kind = characteristic.instrumentKind;
+  const refuse = (message: string): never => {
+    throw new Refused('instrument-refused', message, [{ path: ['instrumentId'], message }]);
+  };
+  if (instrumentId === null) {
+    if (kind !== null) refuse(`Choose the ${INSTRUMENT_KIND_TITLES[kind].toLowerCase()} that took this reading.`);
+    return;
+  }
+  const instrument = usableInstrument(db, instrumentId, today);
+  if (kind !== null && instrument.kind !== kind)
+    refuse(`${instrument.assetNumber} is no ${INSTRUMENT_KIND_TITLES[kind].toLowerCase()}.`);
+}

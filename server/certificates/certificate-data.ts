@@ -1,0 +1,117 @@
+import { type Db } from '#db/open-database';
+import { site } from '#db/schema/site';
+import { type JudgedLot } from '#server/judging/sample-judging';
+import { type Caller } from '#server/caller';
+import { characteristicResults } from '#server/judging/characteristic-results';
+import { instrumentsUsed, readingsThatCount } from '#server/judging/counting';
+import { fixedSampling } from '#server/lots/lot-sampling-queries';
+import { signerOf } from '#server/lots/lot-queries';
+import { findLot, type LotRow } from '#server/lots/lot-rows';
+import { type CertificateData, type CertificateResult } from '#shared/papers/certificate-data';
+import { SCHEME_NAME } from '#shared/sampling/scheme';
+
+/** The lot to be certified, as it was judged, and who releases it. */
+export interface Release {
+  lot: LotRow;
+  judged: JudgedLot;
+  caller: Caller;
+  at: Date;
+  unitsReleased: number;
+}
+
+function resultOf(result: ReturnType<typeof characteristicResults>[number]): CertificateResult {
+  const { characteristic, n, found, min, mean, max, failReasons, acceptance, rejection } = result;
+  const { name, condition, class: nonconformityClass, kind } = characteristic;
+  const measured = characteristic.kind === 'attribute' ? null : characteristic;
+  return {
+    name,
+    condition,
+    class: nonconformityClass,
+    kind,
+    unit: measured?.unit ?? null,
+    decimals: measured?.decimals ?? 0,
+    lowerLimit: measured?.lowerLimit ?? null,
+    upperLimit: measured?.upperLimit ?? null,
+    requirement: characteristic.kind === 'attribute' ? characteristic.requirement : null,
+    n,
+    found,
+    min,
+    mean,
+    max,
+    failReasons,
+    acceptance,
+    rejection,
+  };
+}
+
+function groupsOf({ verdict }: JudgedLot): CertificateData['groups'] {
+  return verdict.groups.map(({ group, found }) => ({
+    class: group.class,
+    level: group.level,
+    aql: group.aql,
+    codeLetter: group.codeLetter,
+    sampleSize: group.sampleSize,
+    acceptance: group.acceptance,
+    rejection: group.rejection,
+    found,
+  }));
+}
+
+function signatures(db: Db, { lot, caller, at }: Release): Pick<CertificateData, 'inspector' | 'quality'> {
+  const inspector = signerOf(db, lot.submittedById);
+  if (!inspector || lot.submittedAt === null) throw new Error(`Lot ${lot.number} was submitted by nobody.`);
+  const { name, stampNumber } = caller;
+  return {
+    inspector: { ...inspector, title: 'Inspector', signedAt: lot.submittedAt },
+    quality: { name, stampNumber, title: 'Quality engineer', signedAt: at.toISOString() },
+  };
+}
+
+/** All that a certificate states of a lot, gathered at its release. */
+export function certificateData(db: Db, number: string, release: Release): CertificateData {
+  const { lot, judged, at, unitsReleased } = release;
+  const { part, supplier } = findLot(db, lot.id);
+  const sampling = fixedSampling(db, lot);
+  const issuer = db.select().from(site).get();
+  if (!sampling || !issuer) throw new Error(`Lot ${lot.number} cannot be certified: no sampling or no site.`);
+  const counting = readingsThatCount(judged);
+  const times = counting.map(({ takenAt }) => takenAt).sort();
+  return {
+    number,
+    issuer: { name: issuer.name, department: issuer.department, address: issuer.address },
+    lot: {
+      number: lot.number,
+      size: lot.countedQuantity,
+      deliveryNumber: lot.deliveryNumber,
+      orderNumber: lot.orderNumber,
+      dateCode: lot.dateCode,
+      arrivedAt: lot.arrivedAt,
+    },
+    part: { number: part.number, name: part.name },
+    supplier: supplier.name,
+    plan: {
+      number: sampling.planNumber,
+      revision: sampling.revision,
+      level: sampling.level,
+      severity: sampling.severity,
+    },
+    scheme: SCHEME_NAME,
+    sampleSize: sampling.sampleSize,
+    unitsJudged: lot.unitsJudged,
+    groups: groupsOf(judged),
+    results: characteristicResults(judged).map(resultOf),
+    decisionRule: 'simple',
+    repeats: judged.units.flatMap(({ readings }) => readings).filter((row) => row.repeatReason !== null).length,
+    unitsRemoved: lot.countedQuantity - unitsReleased,
+    unitsReleased,
+    instruments: instrumentsUsed(db, counting).map(({ assetNumber, kind, calibrationDue }) => ({
+      assetNumber,
+      kind,
+      calibrationDue,
+    })),
+    measuredFrom: times[0] ?? at.toISOString(),
+    measuredTo: times.at(-1) ?? at.toISOString(),
+    ...signatures(db, release),
+    issuedAt: at.toISOString(),
+  };
+}

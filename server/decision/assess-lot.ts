@@ -1,0 +1,103 @@
+import { type Db } from '#db/open-database';
+import { site } from '#db/schema/site';
+import { namesOf } from '#server/bench/bench-queries';
+import { type ReadingRow } from '#server/judging/lot-judging';
+import { judgeSampleOf, type JudgedLot } from '#server/judging/sample-judging';
+import { type Caller } from '#server/caller';
+import { readLot } from '#server/lots/lot-queries';
+import { findLot, type LotRow } from '#server/lots/lot-rows';
+import { Conflict } from '#server/problems';
+import { type Assessment } from '#shared/contract/decision';
+import { characteristicResults } from '#server/judging/characteristic-results';
+import { instrumentsUsed, readingsThatCount } from '#server/judging/counting';
+
+/** A drawn lot as it is judged now: undecided units count once it is submitted. */
+export function judgedLot(db: Db, lot: LotRow): JudgedLot {
+  const submitting = lot.status !== 'drawn' && lot.status !== 'measuring';
+  return judgeSampleOf(db, lot, { submitting });
+}
+
+/**
+ * Why this person may not release the lot: readings must not all be the releaser's own, unless the site waives that.
+ * Readings of a rack count as taken by nobody.
+ */
+export function releaseObjection(db: Db, counting: readonly ReadingRow[], caller: Caller): string | null {
+  const takers = new Set(counting.map((reading) => reading.takenById));
+  const onlyOwn = takers.size === 1 && takers.has(caller.id);
+  if (!onlyOwn || releaseOwnAllowed(db)) return null;
+  return 'You took all readings of this lot; somebody else of quality must release it.';
+}
+
+/** Whether the site waives the second person at release. */
+export function releaseOwnAllowed(db: Db): boolean {
+  return db.select({ waived: site.releaseOwnReadings }).from(site).get()?.waived ?? false;
+}
+
+function unitStates({ verdict }: JudgedLot): Assessment['units'] {
+  const states = {
+    conforming: 'conforming',
+    nonconforming: 'minor',
+    undecided: 'undecided',
+    'not judged': 'not-judged',
+  } as const;
+  return verdict.units.map(({ unit, verdict: word, worstClass, failed }) => ({
+    unit,
+    state: word === 'nonconforming' && worstClass ? worstClass : states[word],
+    failed,
+    serial: null,
+  }));
+}
+
+/** The unit at which the rejection became certain, in draw order; null while no rejection number is reached. */
+function stoppedAt({ verdict, rules }: JudgedLot): number | null {
+  if (!verdict.lot.stop) return null;
+  const found = verdict.groups.map(({ group }) => {
+    const failing = verdict.units.filter(
+      ({ unit, worstClass, failed }) =>
+        (unit <= group.sampleSize || group.class === 'critical') &&
+        worstClass === group.class &&
+        group.characteristicKeys.some((key) => failed.includes(key)),
+    );
+    return failing[group.rejection - 1]?.unit ?? Infinity;
+  });
+  const first = Math.min(...found);
+  return Number.isFinite(first) && first <= rules.rules.sampleSize ? first : null;
+}
+
+/** What the sample of a drawn lot shows. @throws {Conflict} before the draw */
+export function assessLot(db: Db, id: number, caller: Caller): Assessment {
+  const { lot } = findLot(db, id);
+  if (lot.revisionId === null) throw new Conflict('not-drawn', `The sample of lot ${lot.number} is not drawn yet.`);
+  const judged = judgedLot(db, lot);
+  const counting = readingsThatCount(judged);
+  const names = namesOf(db);
+  const times = counting.map(({ takenAt }) => takenAt).sort();
+  const { verdict } = judged;
+  return {
+    lot: readLot(db, id),
+    verdict: verdict.lot.verdict,
+    reason: verdict.lot.reason,
+    stoppedAtUnit: stoppedAt(judged),
+    unitsJudged: lot.unitsJudged,
+    units: unitStates(judged),
+    groups: verdict.groups.map(({ group, found, undecided, verdict: word, reason }) => ({
+      group,
+      found,
+      undecided,
+      verdict: word,
+      reason,
+    })),
+    characteristics: characteristicResults(judged),
+    instruments: instrumentsUsed(db, counting),
+    takenBy: [
+      ...new Set(counting.map(({ takenById }) => (takenById === null ? 'Rack' : (names.get(takenById) ?? '')))),
+    ],
+    repeats: judged.units.flatMap(({ readings }) => readings).filter((row) => row.repeatReason !== null).length,
+    setAside: judged.units.flatMap(({ unit }) =>
+      unit.setAsideReason === null ? [] : [{ unit: unit.unit, reason: unit.setAsideReason }],
+    ),
+    objection: releaseObjection(db, counting, caller),
+    measuredFrom: times[0] ?? null,
+    measuredTo: times.at(-1) ?? null,
+  };
+}
