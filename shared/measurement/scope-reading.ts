@@ -80,13 +80,13 @@ function checkCoupling(coupling: Coupling, quantity: ScopeQuantity): void {
  *     divisions × volts per division × probe factor
  *
  * A wave taller than the screen is read as two halves whose heights add. The product is rounded to twelve significant
- * digits, so that 4.1 divisions at 0.2 V give 0.82 V and not a trace of binary arithmetic.
+ * digits, so that 3 divisions at 0.1 V give 0.3 V without a trace of binary arithmetic.
  * Common practice, no source.
  *
- * @param quantity what is read, where the coupling is to be checked: ripple is AC-coupled, a DC level never is
+ * @param options.quantity what is read, where the coupling is to be checked: ripple is AC-coupled, a DC level never is
  * @throws {ScopeEntryRefused} naming the field, in words
  */
-export function scopeVolts(entry: ScopeEntry, quantity?: ScopeQuantity): number {
+export function scopeVolts(entry: ScopeEntry, { quantity }: { quantity?: ScopeQuantity } = {}): number {
   if (quantity !== undefined) checkCoupling(entry.coupling, quantity);
   const divisions =
     entry.form === 'whole'

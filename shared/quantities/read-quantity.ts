@@ -31,12 +31,12 @@ function refuseLetters(
   readings: readonly UnitReading[],
   wanted: UnitParts | null,
 ): never {
-  const typed = readings.find(({ unit }) => unit !== null)?.unit;
-  if (wanted === null || readings.length === 0) {
+  const [typed] = readings;
+  if (wanted === null || typed === undefined) {
     throw new QuantityNotUnderstood(text, `“${letters}” is no unit or prefix known here. ${EXAMPLES}`);
   }
-  if (typed)
-    throw new QuantityNotUnderstood(text, `this is in ${typed.symbol}, and ${unitName(wanted)} is wanted here.`);
+  const { unit } = typed;
+  if (unit) throw new QuantityNotUnderstood(text, `this is in ${unit.symbol}, and ${unitName(wanted)} is wanted here.`);
   throw new QuantityNotUnderstood(text, `a prefix does not go with ${unitName(wanted)}. Write the number without it.`);
 }
 

@@ -19,19 +19,27 @@ export type ComputedValue = { state: 'value'; value: number } | { state: 'missin
  * @throws {ReadingNotFinite} for a reading that is NaN or infinite
  */
 export function computedValue(characteristic: JudgedCharacteristic, values: Values): ComputedValue {
-  const { formula, key } = characteristic;
-  if (formula === null) throw new RangeError(`characteristics: ${key} is computed and needs a formula.`);
-  const { inputs, compute } = FORMULAS[formula.key];
+  const { inputs, compute, sources } = boundFormula(characteristic);
   const given: Record<string, number> = {};
-  for (const { name } of inputs) {
-    const source = formula.inputs[name];
-    if (source === undefined) throw new RangeError(`characteristics: formula of ${key} binds nothing to ${name}.`);
-    const value = values.get(source);
+  for (const [index, { name }] of inputs.entries()) {
+    const value = values.get(sources[index] ?? '');
     if (typeof value !== 'number') return { state: 'missing' };
     given[name] = value;
   }
   demandFinite(given);
   return withinDomain(() => compute(given));
+}
+
+/** The formula with the characteristic that each of its inputs takes, in the order of the inputs. */
+function boundFormula({ formula, key }: JudgedCharacteristic) {
+  if (formula === null) throw new RangeError(`characteristics: ${key} is computed and needs a formula.`);
+  const { inputs, compute } = FORMULAS[formula.key];
+  const sources = inputs.map(({ name }) => {
+    const source = formula.inputs[name];
+    if (source === undefined) throw new RangeError(`characteristics: formula of ${key} binds nothing to ${name}.`);
+    return source;
+  });
+  return { inputs, compute, sources };
 }
 
 function withinDomain(compute: () => number): ComputedValue {

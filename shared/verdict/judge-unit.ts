@@ -28,11 +28,14 @@ function worstClassOf(failures: readonly JudgedRule[], unit: number): Nonconform
 
 /**
  * What an undecided unit is taken to fail in when the sample is submitted: its conditional readings and, where it was set
- * aside, every characteristic left open on it, or all it was drawn for where none is. The worst of them gives its class.
+ * aside, every characteristic left open on it. Where none is open, the doubt is about the unit as a whole: it fails in all it
+ * was drawn for but the critical ones, since those were measured and conform (in these too where there are no others).
  */
 function takenAsFailed(required: readonly JudgedRule[], setAside: boolean): readonly JudgedRule[] {
   const open = required.filter(setAside ? isOpen : isConditional);
-  return open.length > 0 || !setAside ? open : required;
+  if (open.length > 0 || !setAside) return open;
+  const lesser = required.filter(({ rule }) => rule.characteristic.class !== 'critical');
+  return lesser.length > 0 ? lesser : required;
 }
 
 function unitVerdict(failures: readonly JudgedRule[], undecided: boolean, missing: number): UnitVerdict['verdict'] {
@@ -48,8 +51,8 @@ function unitVerdict(failures: readonly JudgedRule[], undecided: boolean, missin
  * A characteristic is required only on the units its group covers. Measured beyond them it is judged and shown, and
  * makes the unit nonconforming, but counts in no group unless it is critical.
  *
- * When the sample is submitted, an undecided unit becomes nonconforming in the characteristics left open on it (in all
- * it was drawn for, where none is open) and counts at the worst class among them and what it failed in anyway.
+ * When the sample is submitted, an undecided unit becomes nonconforming in the characteristics left open on it (where none
+ * is, in all it was drawn for but the critical) and counts at the worst class among them and what it failed in anyway.
  *
  * @throws {RangeError} for a unit number that is not a whole number of at least 1, or a value that cannot be judged
  */
