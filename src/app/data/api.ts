@@ -9,10 +9,10 @@ type NothingNeeded = Record<never, never>;
 
 /** A part of the input may be left out when its schema asks for nothing. */
 type Part<K extends string, V> = NothingNeeded extends V
-  ? { [P in K]?: V }
+  ? Partial<Record<K, V>>
   : undefined extends V
-    ? { [P in K]?: V }
-    : { [P in K]: V };
+    ? Partial<Record<K, V>>
+    : Record<K, V>;
 
 /** What a call needs: path parameters, query and body as the contract has them, and the version an edit starts from. */
 export type CallInput<E extends Endpoint> = Part<'params', z.output<E['params']>> &

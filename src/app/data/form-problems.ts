@@ -49,5 +49,8 @@ function placeFault(form: AbstractControl, fault: Fault): boolean {
 }
 
 function faultsOf(error: z.ZodError): Fault[] {
-  return error.issues.map((issue) => ({ path: issue.path.filter((step) => typeof step !== 'symbol'), message: issue.message }));
+  return error.issues.map((issue) => ({
+    path: issue.path.filter((step) => typeof step !== 'symbol'),
+    message: issue.message,
+  }));
 }

@@ -1,4 +1,12 @@
-import { ChangeDetectionStrategy, Component, computed, ElementRef, inject, signal, viewChild } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  type ElementRef,
+  inject,
+  signal,
+  viewChild,
+} from '@angular/core';
 import { MatButtonModule } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
 import { MatMenuModule } from '@angular/material/menu';
@@ -89,7 +97,8 @@ export class Shell {
   }
 
   protected press(event: KeyboardEvent): void {
-    const station = event.altKey && /^Digit[1-6]$/.test(event.code) ? STATIONS[Number(event.code.slice(5)) - 1] : undefined;
+    const station =
+      event.altKey && /^Digit[1-6]$/.test(event.code) ? STATIONS[Number(event.code.slice(5)) - 1] : undefined;
     if (station !== undefined) {
       event.preventDefault();
       void this.router.navigateByUrl(`/${station.key}`);

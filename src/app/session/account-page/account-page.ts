@@ -32,7 +32,11 @@ export class AccountPage {
   private readonly session = inject(Session);
 
   protected readonly me = this.session.me;
-  protected readonly roles = computed(() => this.me()?.roles.map((role) => ROLE_TITLES[role]).join(', '));
+  protected readonly roles = computed(() =>
+    this.me()
+      ?.roles.map((role) => ROLE_TITLES[role])
+      .join(', '),
+  );
   protected readonly refusal = signal('');
   protected readonly busy = signal(false);
   protected readonly form = inject(NonNullableFormBuilder).group({

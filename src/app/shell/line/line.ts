@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
-import { RouterLink } from '@angular/router';
 import { type Counts } from '#shared/contract/counts';
 import { LiveCounts } from '../../data/live-counts';
 import { Session } from '../../session/session';
@@ -16,7 +15,7 @@ import { StationLink } from './station-link';
  */
 @Component({
   selector: 'qr-line',
-  imports: [RouterLink, StationLink],
+  imports: [StationLink],
   templateUrl: './line.html',
   styleUrl: './line.scss',
   host: { '[class.bar]': 'phone()' },

@@ -42,9 +42,7 @@ export class RecordsMenu {
         .map((record) => ({ ...record, size: record.count === undefined ? undefined : this.counts()[record.count] })),
     ).filter((group) => group.length > 0),
   );
-  protected readonly current = computed(() =>
-    RECORDS.flat().find(({ path }) => path === this.area())?.title,
-  );
+  protected readonly current = computed(() => RECORDS.flat().find(({ path }) => path === this.area())?.title);
   protected readonly due = computed(() => this.counts().instrumentsDue ?? 0);
   protected readonly trends = computed(() => {
     const station = STATIONS.find(({ key }) => key === 'trends');

@@ -38,7 +38,13 @@ export class Tally {
     if (current === null) return null;
     const pitch = pitchOf(this.states().length, this.width());
     const width = Math.max(pitch - (pitch >= 3.2 ? 1 : 0), 2);
-    return { x: current * pitch - 1, y: BASE - 1, width: width + 2, height: CELL + 2, centre: current * pitch + width / 2 };
+    return {
+      x: current * pitch - 1,
+      y: BASE - 1,
+      width: width + 2,
+      height: CELL + 2,
+      centre: current * pitch + width / 2,
+    };
   });
 
   protected readonly numbers = computed(() => {
