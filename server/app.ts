@@ -4,7 +4,13 @@ import express, { Router, type Express, type RequestHandler } from 'express';
 import { type Context } from './context';
 import { countRoutes } from './counts/count-routes';
 import { eventRoutes } from './events/event-routes';
+import { benchRoutes } from './bench/bench-routes';
+import { certificateRoutes } from './certificates/certificate-routes';
+import { decisionRoutes } from './decision/decision-routes';
+import { lotRoutes } from './lots/lot-routes';
 import { mailRoutes } from './mail/mail-routes';
+import { nonconformanceRoutes } from './nonconformances/nonconformance-routes';
+import { yieldRoutes } from './yields/yield-routes';
 import { problemHandler } from './problem-handler';
 import { NotFound, Problem } from './problems';
 import { attachCaller } from './sessions/attach-caller';
@@ -22,6 +28,12 @@ const AREAS: readonly ((router: Router, context: Context) => void)[] = [
   countRoutes,
   eventRoutes,
   mailRoutes,
+  lotRoutes,
+  benchRoutes,
+  decisionRoutes,
+  certificateRoutes,
+  nonconformanceRoutes,
+  yieldRoutes,
 ];
 
 /** An answer is as old as the moment it was given: its version tag names an edit, not everything it shows. */

@@ -1,7 +1,7 @@
 import { type Db } from '#db/open-database';
 import { instruments } from '#db/schema/instruments';
 import { people } from '#db/schema/people';
-import { instrumentOn } from '#server/instruments/instrument-view';
+import { instrumentView } from '#server/instruments/instrument-queries';
 import { fixedSampling } from '#server/lots/lot-sampling-queries';
 import { findLot, headOf } from '#server/lots/lot-rows';
 import { Conflict } from '#server/problems';
@@ -56,6 +56,6 @@ export function readBench(db: Db, id: number, today: string): Bench {
       .from(instruments)
       .orderBy(asc(instruments.assetNumber))
       .all()
-      .map((row) => instrumentOn(today, row)),
+      .map((row) => instrumentView(row, today)),
   };
 }

@@ -1,5 +1,5 @@
 import { type Context } from '#server/context';
-import { dayOf } from '#server/instruments/instrument-view';
+import { dayOf } from '#server/instruments/instrument-queries';
 import { serve } from '#server/serve';
 import * as contract from '#shared/contract/bench';
 import { type Router } from 'express';

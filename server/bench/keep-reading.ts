@@ -5,7 +5,7 @@ import { readings } from '#db/schema/readings';
 import { record } from '#server/audit/record';
 import { type Caller } from '#server/caller';
 import { type Context } from '#server/context';
-import { dayOf } from '#server/instruments/instrument-view';
+import { dayOf } from '#server/instruments/instrument-queries';
 import { type LotRow } from '#server/lots/lot-rows';
 import { recordLot } from '#server/lots/record-lot';
 import { Conflict, Refused } from '#server/problems';

@@ -3,7 +3,7 @@ import { lots } from '#db/schema/lots';
 import { rackImports, readings } from '#db/schema/readings';
 import { type Caller } from '#server/caller';
 import { type Context } from '#server/context';
-import { dayOf } from '#server/instruments/instrument-view';
+import { dayOf } from '#server/instruments/instrument-queries';
 import { type LotRow } from '#server/lots/lot-rows';
 import { recordLot } from '#server/lots/record-lot';
 import { Refused } from '#server/problems';

@@ -1,5 +1,4 @@
 import { type Db } from '#db/open-database';
-import { site } from '#db/schema/site';
 import { type JudgedLot } from '#server/judging/sample-judging';
 import { type Caller } from '#server/caller';
 import { characteristicResults } from '#server/judging/characteristic-results';
@@ -7,6 +6,7 @@ import { instrumentsUsed, readingsThatCount } from '#server/judging/counting';
 import { fixedSampling } from '#server/lots/lot-sampling-queries';
 import { signerOf } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
+import { findSite } from '#server/site/site-queries';
 import { type CertificateData, type CertificateResult } from '#shared/papers/certificate-data';
 import { SCHEME_NAME } from '#shared/sampling/scheme';
 
@@ -72,8 +72,8 @@ export function certificateData(db: Db, number: string, release: Release): Certi
   const { lot, judged, at, unitsReleased } = release;
   const { part, supplier } = findLot(db, lot.id);
   const sampling = fixedSampling(db, lot);
-  const issuer = db.select().from(site).get();
-  if (!sampling || !issuer) throw new Error(`Lot ${lot.number} cannot be certified: no sampling or no site.`);
+  if (!sampling) throw new Error(`Lot ${lot.number} cannot be certified: its sample was never drawn.`);
+  const issuer = findSite(db);
   const counting = readingsThatCount(judged);
   const times = counting.map(({ takenAt }) => takenAt).sort();
   return {

@@ -1,5 +1,4 @@
 import { type Db } from '#db/open-database';
-import { site } from '#db/schema/site';
 import { namesOf } from '#server/bench/bench-queries';
 import { type ReadingRow } from '#server/judging/lot-judging';
 import { judgeSampleOf, type JudgedLot } from '#server/judging/sample-judging';
@@ -7,6 +6,7 @@ import { type Caller } from '#server/caller';
 import { readLot } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
 import { Conflict } from '#server/problems';
+import { findSite } from '#server/site/site-queries';
 import { type Assessment } from '#shared/contract/decision';
 import { characteristicResults } from '#server/judging/characteristic-results';
 import { instrumentsUsed, readingsThatCount } from '#server/judging/counting';
@@ -30,7 +30,7 @@ export function releaseObjection(db: Db, counting: readonly ReadingRow[], caller
 
 /** Whether the site waives the second person at release. */
 export function releaseOwnAllowed(db: Db): boolean {
-  return db.select({ waived: site.releaseOwnReadings }).from(site).get()?.waived ?? false;
+  return findSite(db).releaseOwnReadings;
 }
 
 function unitStates({ verdict }: JudgedLot): Assessment['units'] {

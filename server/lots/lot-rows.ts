@@ -1,9 +1,9 @@
 import { type Db } from '#db/open-database';
 import { lots } from '#db/schema/lots';
 import { parts } from '#db/schema/parts';
-import { site } from '#db/schema/site';
 import { suppliers } from '#db/schema/suppliers';
 import { NotFound } from '#server/problems';
+import { findSite } from '#server/site/site-queries';
 import { type LotHead } from '#shared/contract/lots';
 import { eq } from 'drizzle-orm';
 import { provisionalSampling } from './lot-sampling-queries';
@@ -47,9 +47,7 @@ function targetHours(lot: LotRow, siteHours: number): number {
 
 /** The site's target for the wait from arrival to the bench, in hours. */
 export function waitingTarget(db: Db): number {
-  const row = db.select({ hours: site.waitingTargetHours }).from(site).get();
-  if (!row) throw new Error('The site has no settings.');
-  return row.hours;
+  return findSite(db).waitingTargetHours;
 }
 
 /** What a list shows of a lot. Before the draw its sample is provisional. */

@@ -1,7 +1,6 @@
 import { type Db } from '#db/open-database';
 import { nonconformances } from '#db/schema/nonconformances';
 import { people, personRoles } from '#db/schema/people';
-import { site } from '#db/schema/site';
 import { record } from '#server/audit/record';
 import { type JudgedLot } from '#server/judging/sample-judging';
 import { type Caller } from '#server/caller';
@@ -11,6 +10,7 @@ import { findLot, type LotRow } from '#server/lots/lot-rows';
 import { queueMessage } from '#server/mail/queue-message';
 import { rejectionNotice } from '#server/mail/rejection-notice';
 import { nextNumber } from '#server/numbers/next-number';
+import { findSite } from '#server/site/site-queries';
 import { type Failure } from '#shared/contract/nonconformances';
 import { and, eq } from 'drizzle-orm';
 import { failuresOf } from './failures-of';
@@ -31,7 +31,7 @@ interface Opened extends Rejection {
 
 /** Who of engineering is told: the site's list, or where it is empty everybody with that role. */
 function engineeringList(db: Db): string[] {
-  const listed = db.select({ list: site.engineeringList }).from(site).get()?.list ?? [];
+  const listed = findSite(db).engineeringList;
   if (listed.length > 0) return listed;
   return db
     .select({ email: people.email })
@@ -54,8 +54,8 @@ function tellEngineering(context: Context, db: Db, opened: Opened): void {
   const { lot, judged, caller, at, id, number, failures, containment } = opened;
   const { part, supplier } = findLot(db, lot.id);
   const sampling = fixedSampling(db, lot);
-  const issuer = db.select().from(site).get();
-  if (!sampling || !issuer) throw new Error(`Lot ${lot.number} has no sampling, or the site no settings.`);
+  if (!sampling) throw new Error(`Lot ${lot.number} was rejected without a sample.`);
+  const issuer = findSite(db);
   const letter = rejectionNotice({
     siteName: issuer.name,
     department: issuer.department,

@@ -1,0 +1,99 @@
+import { DEMO_PASSWORD, DEMO_SIGN_INS } from '#db/demo/sign-ins';
+import { type Database, openDatabase } from '#db/open-database';
+import { people } from '#db/schema/people';
+import { inArray } from 'drizzle-orm';
+import { existsSync, mkdirSync, renameSync, rmSync } from 'node:fs';
+import path from 'node:path';
+import pino from 'pino';
+import { makeMissingFiles } from './certificates/make-certificate-file';
+import { type Context, systemClock } from './context';
+import { playDemo } from './demo/play-demo';
+import { type Environment, EnvironmentRefused } from './environment';
+import { Stream } from './events/stream';
+import { startOutbox } from './mail/outbox';
+import { startSmtpFake } from './mail/smtp-fake';
+import { smtpTransport } from './mail/transport';
+import { type Passwords, workerPasswords } from './sessions/passwords';
+
+/** Seed of the demo: the same quarter at every first start, up to the day. */
+const DEMO_SEED = 20_26;
+
+/** The running parts of the program, and how to stop them in order. */
+export interface Running {
+  context: Context;
+  close(): Promise<void>;
+}
+
+/** Starts everything on a database but the listening: mail, its local fake when no server is named, the live counts. */
+async function startOn(db: Database, environment: Environment, passwords: Passwords): Promise<Running> {
+  const log = pino({ level: environment.logLevel });
+  const clock = systemClock;
+  const fake = environment.smtpUrl === undefined ? await startSmtpFake({ db, clock, log }) : undefined;
+  const transport = smtpTransport(environment.smtpUrl ?? fake?.url ?? '');
+  const outbox = startOutbox({ db, clock, log, transport, from: environment.mailFrom });
+  const stream = new Stream({ db, clock });
+  const context = { db, clock, environment, log, passwords, outbox, stream };
+  return {
+    context,
+    close: async () => {
+      stream.close();
+      await outbox.close();
+      await fake?.close();
+      db.$client.close();
+    },
+  };
+}
+
+/** The demo is made in a file of its own and put in place when it is whole, so that a stop in between leaves nothing half made. */
+async function makeDemo(file: string, environment: Environment, passwords: Passwords): Promise<void> {
+  const draft = `${file}.being-made`;
+  for (const leftOver of [draft, `${draft}-wal`, `${draft}-shm`]) rmSync(leftOver, { force: true });
+  const db = openDatabase(draft, environment.root);
+  db.$client.pragma('synchronous = OFF');
+  const running = await startOn(db, environment, passwords);
+  await playDemo(running.context, { until: new Date(), seed: DEMO_SEED });
+  db.$client.pragma('wal_checkpoint(TRUNCATE)');
+  await running.close();
+  renameSync(draft, file);
+}
+
+/** Production does not run on the people of the demo. */
+async function refuseDemoPeople(db: Database, passwords: Passwords): Promise<void> {
+  const known = db
+    .select({ hash: people.passwordHash })
+    .from(people)
+    .where(
+      inArray(
+        people.email,
+        DEMO_SIGN_INS.map(({ email }) => email),
+      ),
+    )
+    .all();
+  for (const { hash } of known)
+    if (hash !== null && (await passwords.matches(DEMO_PASSWORD, hash)))
+      throw new EnvironmentRefused('QUIETRAIL_DATA: this folder holds the demo, whose passwords are public.');
+}
+
+/**
+ * Opens the data folder and starts the program on it; in demo mode an empty folder is given the demo first.
+ *
+ * @param workerUrl where the thread that hashes passwords lies
+ * @throws {EnvironmentRefused} when production would run on demo data
+ */
+export async function start(environment: Environment, workerUrl: URL): Promise<Running> {
+  mkdirSync(environment.dataFolder, { recursive: true });
+  const file = path.join(environment.dataFolder, 'quietrail.db');
+  const passwords = workerPasswords(environment.passwordCost, workerUrl);
+  if (environment.mode === 'demo' && !existsSync(file)) await makeDemo(file, environment, passwords);
+  const db = openDatabase(file, environment.root);
+  if (environment.mode === 'production') await refuseDemoPeople(db, passwords);
+  const running = await startOn(db, environment, passwords);
+  await makeMissingFiles(running.context);
+  return {
+    context: running.context,
+    close: async () => {
+      await running.close();
+      await passwords.close();
+    },
+  };
+}
