@@ -1,0 +1,132 @@
+import { describe, expect, it } from 'vitest';
+import { judgeSample, type JudgedCharacteristic } from '#shared/verdict/judge-sample';
+import { GOOD, PLAN, foundIn, groupsOf, judge, sample, unit, measured } from './judged-sample';
+
+describe('a unit', () => {
+  it('conforms when every characteristic does', () => {
+    const [verdict] = judge([unit(1, GOOD)]).units;
+    expect(verdict).toMatchObject({ verdict: 'conforming', failed: [], worstClass: null, missing: [] });
+  });
+
+  it('is not judged while a reading is missing', () => {
+    const [verdict] = judge([unit(1, { insulation: 0, ripple: 0, label: true })]).units;
+    expect(verdict).toMatchObject({ verdict: 'not judged', failed: [], missing: ['loaded'] });
+    expect(verdict?.characteristics.get('loaded')).toEqual({ value: null, verdict: 'not judged' });
+  });
+
+  it('is nonconforming as soon as one characteristic fails, even if others are missing', () => {
+    const [verdict] = judge([unit(1, { ripple: 10 })]).units;
+    expect(verdict).toMatchObject({
+      verdict: 'nonconforming',
+      failed: ['ripple'],
+      worstClass: 'major',
+      missing: ['insulation', 'loaded', 'label'],
+    });
+  });
+
+  it('fails by its attribute', () => {
+    const [verdict] = judge([unit(1, { ...GOOD, label: false })]).units;
+    expect(verdict).toMatchObject({ verdict: 'nonconforming', failed: ['label'], worstClass: 'minor' });
+  });
+
+  it('conforms at its limit', () => {
+    expect(judge([unit(1, { ...GOOD, ripple: 1 })]).units[0]?.verdict).toBe('conforming');
+  });
+
+  it('set aside is undecided, unless it fails', () => {
+    const verdicts = judge([unit(1, GOOD, 'hums'), unit(2, { ...GOOD, ripple: 10 }, 'hums')]).units;
+    expect(verdicts.map(({ verdict }) => verdict)).toEqual(['undecided', 'nonconforming']);
+  });
+
+  it('refuses a value of the wrong kind, no number, and a number that is none of a unit', () => {
+    expect(() => judge([unit(1, { label: 1 })])).toThrow(/label/);
+    expect(() => judge([unit(1, { ripple: true })])).toThrow(/ripple/);
+    expect(() => judge([unit(1, { ripple: NaN })])).toThrow(RangeError);
+    expect(() => judge([unit(0, GOOD)])).toThrow(/unit/);
+    expect(() => judge([unit(1, GOOD), unit(1, GOOD)])).toThrow(/once/);
+  });
+});
+
+describe('a unit that fails in two classes', () => {
+  const verdict = judge(sample(20, { 7: { ripple: 10, label: false } }));
+
+  it('names both failures and the worst class', () => {
+    expect(verdict.units[6]).toMatchObject({ failed: ['ripple', 'label'], worstClass: 'major' });
+  });
+
+  it('counts at its worst class only', () => {
+    expect(foundIn(verdict)).toEqual({ critical: 0, major: 1, minor: 0 });
+  });
+
+  it('counts once, however many characteristics of the class fail', () => {
+    expect(foundIn(judge(sample(20, { 7: { ripple: 10, loaded: 10 } })))).toEqual({ critical: 0, major: 1, minor: 0 });
+  });
+
+  it('counts once in each group of its worst class in which it fails', () => {
+    const groups = groupsOf(PLAN, 150, { loaded: 'S-1' });
+    const units = sample(20, { 1: { ripple: 10, loaded: 10, label: false }, 2: { loaded: 10 } });
+    const found = judgeSample({ characteristics: PLAN, groups, units }).groups.map((each) => [
+      each.group.key,
+      each.found,
+    ]);
+    expect(found).toEqual([
+      ['critical-II-0.65', 0],
+      ['major-II-4.0', 1],
+      ['major-S-1-4.0', 2],
+      ['minor-II-6.5', 0],
+    ]);
+  });
+});
+
+describe('a computed characteristic', () => {
+  const regulation: JudgedCharacteristic = {
+    key: 'regulation',
+    kind: 'computed',
+    class: 'major',
+    lowerLimit: null,
+    upperLimit: 0.3,
+    formula: { key: 'load-regulation', inputs: { no_load: 'open', loaded: 'full' } },
+  };
+  const plan = [
+    { ...measured('open', 'major'), upperLimit: 20 },
+    { ...measured('full', 'minor'), upperLimit: 20 },
+    regulation,
+  ];
+  const judgeOne = (values: Record<string, number>, groups = groupsOf(plan, 150), number = 1) =>
+    judgeSample({ characteristics: plan, groups, units: [unit(number, values)] }).units[0];
+
+  it('is computed from the readings of its unit, and conforms at its limit', () => {
+    expect(judgeOne({ open: 15.6, full: 12 })?.characteristics.get('regulation')?.value).toBeCloseTo(0.3, 12);
+    expect(judgeOne({ open: 15.6, full: 12 })?.verdict).toBe('conforming');
+    expect(judgeOne({ open: 15.7, full: 12 })).toMatchObject({ verdict: 'nonconforming', failed: ['regulation'] });
+  });
+
+  it('is not judged while a reading it takes is missing', () => {
+    expect(judgeOne({ open: 15 })).toMatchObject({ verdict: 'not judged', missing: ['full', 'regulation'] });
+  });
+
+  it('does not conform where the readings give it no value', () => {
+    const dead = judgeOne({ open: 0, full: 0 });
+    expect(dead?.characteristics.get('regulation')).toEqual({ value: null, verdict: 'nonconforming' });
+    expect(dead?.failed).toEqual(['regulation']);
+  });
+
+  it('asks for the readings it takes as far as its own group reaches', () => {
+    const groups = groupsOf(plan, 150, { open: 'S-1' });
+    expect(judgeOne({ full: 12 }, groups, 10)).toMatchObject({
+      verdict: 'not judged',
+      missing: ['open', 'regulation'],
+    });
+  });
+
+  it('needs a formula with all its inputs bound', () => {
+    const broken = (formula: JudgedCharacteristic['formula']) => () =>
+      judgeSample({
+        characteristics: [{ ...regulation, formula }],
+        groups: groupsOf([regulation], 150),
+        units: [unit(1)],
+      });
+    expect(broken(null)).toThrow(/regulation/);
+    expect(broken({ key: 'load-regulation', inputs: { no_load: 'open' } })).toThrow(/loaded/);
+  });
+});
