@@ -32,6 +32,12 @@ describe('a critical failure', () => {
     expect(verdicts[0]).toMatchObject({ found: 1, judged: 20, verdict: 'rejected' });
     expect(lot.verdict).toBe('rejected');
   });
+
+  it('beyond its group’s sample counts as critical even where a lesser failure is covered', () => {
+    const groups = GROUPS.map((group) => (group.class === 'critical' ? { ...group, sampleSize: 5 } : group));
+    const units = sample(20, { 10: { insulation: 10, label: false } });
+    expect(foundIn(judgeSample({ characteristics: PLAN, groups, units }))).toEqual({ critical: 1, major: 0, minor: 0 });
+  });
 });
 
 describe('a group with a special level', () => {
