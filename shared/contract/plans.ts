@@ -127,7 +127,11 @@ const planHead = z.object({
 export type PlanHead = z.infer<typeof planHead>;
 
 /** A plan with its revisions, newest first; readers of effective plans get only effective and retired ones. */
-export const plan = planHead.extend({ revisions: z.array(revision) });
+export const plan = planHead.extend({
+  revisions: z.array(revision),
+  /** Whether the site lets a revision be approved by its author. */
+  approveOwn: z.boolean(),
+});
 export type Plan = z.infer<typeof plan>;
 
 export const listPlans = endpoint({

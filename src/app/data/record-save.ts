@@ -1,6 +1,6 @@
 import { DestroyRef, inject, signal } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
-import { type AbstractControl } from '@angular/forms';
+import { type AbstractControl, FormArray, FormGroup } from '@angular/forms';
 import { finalize, type Observable } from 'rxjs';
 import type * as z from 'zod';
 import { type ApiProblem, problemOf } from './api-problem';
@@ -29,6 +29,12 @@ export class RecordSave {
   submit<S extends z.ZodType, Saved>(form: AbstractControl, saving: Saving<S, Saved>): void {
     if (this.busy()) return;
     this.said.set([]);
+    checkAgain(form);
+    if (form.invalid) {
+      form.markAllAsTouched();
+      this.said.set(['Mend what is marked first.']);
+      return;
+    }
     const read = bodyOfForm(form, saving.schema, saving.value);
     if ('unplaced' in read) {
       this.said.set(read.unplaced);
@@ -55,4 +61,12 @@ export class RecordSave {
       )
       .subscribe({ next: saved, error: (thrown: unknown) => failed(problemOf(thrown)) });
   }
+}
+
+/** Lets the fields judge their values anew, so that what an earlier answer refused does not stand in the way for ever. */
+function checkAgain(control: AbstractControl): void {
+  if (control instanceof FormGroup || control instanceof FormArray) {
+    for (const child of Object.values(control.controls) as AbstractControl[]) checkAgain(child);
+  }
+  control.updateValueAndValidity({ emitEvent: false });
 }
