@@ -1,20 +1,29 @@
 import compression from 'compression';
 import cookieParser from 'cookie-parser';
 import express, { Router, type Express, type RequestHandler } from 'express';
+import { auditRoutes } from './audit/audit-routes';
 import { type Context } from './context';
 import { countRoutes } from './counts/count-routes';
+import { descriptionRoutes } from './description/description-routes';
 import { eventRoutes } from './events/event-routes';
 import { benchRoutes } from './bench/bench-routes';
 import { certificateRoutes } from './certificates/certificate-routes';
 import { decisionRoutes } from './decision/decision-routes';
+import { instrumentRoutes } from './instruments/instrument-routes';
 import { lotRoutes } from './lots/lot-routes';
 import { mailRoutes } from './mail/mail-routes';
 import { nonconformanceRoutes } from './nonconformances/nonconformance-routes';
+import { partRoutes } from './parts/part-routes';
+import { peopleRoutes } from './people/people-routes';
+import { planRoutes } from './plans/plan-routes';
 import { yieldRoutes } from './yields/yield-routes';
 import { problemHandler } from './problem-handler';
 import { NotFound, Problem } from './problems';
+import { searchRoutes } from './search/search-routes';
 import { attachCaller } from './sessions/attach-caller';
 import { sessionRoutes } from './sessions/session-routes';
+import { siteRoutes } from './site/site-routes';
+import { supplierRoutes } from './suppliers/supplier-routes';
 import { announceChanges } from './web/announce-changes';
 import { healthRoute } from './web/health-route';
 import { jsonBody } from './web/json-body';
@@ -25,15 +34,24 @@ import { staticApp } from './web/static-app';
 
 const AREAS: readonly ((router: Router, context: Context) => void)[] = [
   sessionRoutes,
+  siteRoutes,
+  peopleRoutes,
   countRoutes,
   eventRoutes,
-  mailRoutes,
+  searchRoutes,
+  supplierRoutes,
+  partRoutes,
+  planRoutes,
+  instrumentRoutes,
   lotRoutes,
   benchRoutes,
   decisionRoutes,
   certificateRoutes,
   nonconformanceRoutes,
   yieldRoutes,
+  mailRoutes,
+  auditRoutes,
+  descriptionRoutes,
 ];
 
 /** An answer is as old as the moment it was given: its version tag names an edit, not everything it shows. */

@@ -35,14 +35,14 @@ export function entryHash(entry: {
 
 export const FIRST_HASH = '0'.repeat(64);
 
-/** Appends an audit entry; call it inside the transaction of the change it records. */
-export function record(db: Db, change: Change): void {
-  const last = db
-    .select({ hash: auditEntries.hash })
-    .from(auditEntries)
-    .orderBy(desc(auditEntries.id))
-    .limit(1)
-    .get();
+/** The hash that the next entry follows. */
+export function chainHead(db: Db): string {
+  const last = db.select({ hash: auditEntries.hash }).from(auditEntries).orderBy(desc(auditEntries.id)).limit(1).get();
+  return last?.hash ?? FIRST_HASH;
+}
+
+/** A change as the entry that follows the one with `previousHash`. */
+export function chainEntry(change: Change, previousHash: string) {
   const entry = {
     at: change.at.toISOString(),
     personId: change.person?.id ?? null,
@@ -52,9 +52,14 @@ export function record(db: Db, change: Change): void {
     subjectId: String(change.subjectId),
     before: change.before === undefined ? null : canonicalJson(change.before),
     after: change.after === undefined ? null : canonicalJson(change.after),
-    previousHash: last?.hash ?? FIRST_HASH,
+    previousHash,
   };
+  return { ...entry, hash: entryHash(entry) };
+}
+
+/** Appends an audit entry; call it inside the transaction of the change it records. */
+export function record(db: Db, change: Change): void {
   db.insert(auditEntries)
-    .values({ ...entry, hash: entryHash(entry) })
+    .values(chainEntry(change, chainHead(db)))
     .run();
 }

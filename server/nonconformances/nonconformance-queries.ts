@@ -12,7 +12,7 @@ import { type Nonconformance } from '#shared/contract/nonconformances';
 import { and, desc, eq, lt } from 'drizzle-orm';
 
 /** Receiving sees the nonconformances of the lots it booked in; everybody else who may read sees all. */
-function visibleTo(caller: Caller) {
+export function visibleTo(caller: Caller) {
   const all = hasRole(caller, 'inspector', 'quality', 'engineering', 'auditor');
   return all ? undefined : eq(lots.bookedById, caller.id);
 }

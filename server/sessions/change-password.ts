@@ -17,7 +17,7 @@ export function keepPassword(db: Db, personId: number, passwordHash: string): vo
 /** Whether the password is the person's own; also what a signature asks. */
 export async function isOwnPassword({ db, passwords }: Context, personId: number, password: string): Promise<boolean> {
   const person = db.select({ hash: people.passwordHash }).from(people).where(eq(people.id, personId)).get();
-  return person?.hash != null && (await passwords.matches(password, person.hash));
+  return typeof person?.hash === 'string' && (await passwords.matches(password, person.hash));
 }
 
 /** Changes the own password and ends every other session of the person. */
