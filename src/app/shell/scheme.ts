@@ -1,4 +1,3 @@
-import { MediaMatcher } from '@angular/cdk/layout';
 import { computed, DOCUMENT, inject, Injectable, signal } from '@angular/core';
 
 export const SCHEMES = ['light', 'dark', 'system'] as const;
@@ -20,9 +19,9 @@ export class Scheme {
   readonly dark = computed(() => this.chosen() === 'dark' || (this.chosen() === 'system' && this.systemDark()));
 
   constructor() {
-    const system = inject(MediaMatcher).matchMedia('(prefers-color-scheme: dark)');
-    this.systemDark.set(system.matches);
-    system.addEventListener('change', () => this.systemDark.set(system.matches));
+    const system = this.page.defaultView?.matchMedia?.('(prefers-color-scheme: dark)');
+    this.systemDark.set(system?.matches ?? false);
+    system?.addEventListener('change', ({ matches }) => this.systemDark.set(matches));
   }
 
   choose(name: SchemeName): void {

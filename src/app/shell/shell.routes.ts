@@ -16,12 +16,14 @@ import { listSuppliers } from '#shared/contract/suppliers';
 import { readYields } from '#shared/contract/yields';
 import { areaFor } from '../session/role-guard';
 import { Session } from '../session/session';
+import { materialDefaults } from '../ui/material-defaults';
 import { firstAddress } from './stations';
 
 /** Everything behind sign-in; each area is loaded when it is first opened. */
 export default [
   {
     path: '',
+    providers: materialDefaults,
     loadComponent: () => import('./shell').then((file) => file.Shell),
     children: [
       { path: '', pathMatch: 'full', redirectTo: () => firstAddress((role) => inject(Session).holds(role)) },

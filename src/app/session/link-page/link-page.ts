@@ -10,6 +10,7 @@ import { readFront } from '#shared/contract/site';
 import { ApiClient, endpointResource, type Reply } from '../../data/api';
 import { type ApiProblem, problemOf } from '../../data/api-problem';
 import { bySchema, showFaults } from '../../data/form-problems';
+import { formFieldDefaults } from '../../ui/material-defaults';
 import { PasswordField } from '../../ui/password-field';
 import { MessageNote } from '../../ui/states/message-note';
 import { FieldErrorPipe } from '../../ui/values/field-error-pipe';
@@ -35,6 +36,7 @@ const { name, email, newPassword } = openSite.body.shape;
   ],
   templateUrl: './link-page.html',
   styleUrl: '../front.scss',
+  providers: [formFieldDefaults],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class LinkPage {

@@ -6,6 +6,7 @@ import { type Me, signIn } from '#shared/contract/session';
 import { ApiClient } from '../../data/api';
 import { bySchema, showFaults } from '../../data/form-problems';
 import { problemOf } from '../../data/api-problem';
+import { formFieldDefaults } from '../../ui/material-defaults';
 import { PasswordField } from '../../ui/password-field';
 import { MessageNote } from '../../ui/states/message-note';
 
@@ -14,6 +15,7 @@ import { MessageNote } from '../../ui/states/message-note';
   selector: 'qr-sign-in-again',
   imports: [ReactiveFormsModule, MatButton, MatDialogModule, MessageNote, PasswordField],
   templateUrl: './sign-in-again.html',
+  providers: [formFieldDefaults],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class SignInAgain {
