@@ -9,7 +9,7 @@ import { asc, count, eq, ne, sql } from 'drizzle-orm';
 /** Suppliers with their lots: all but the cancelled ones, and of those decided how many were accepted. */
 function withLots(db: Db) {
   const booked = db
-    .select({ supplierId: lots.supplierId, lots: count().as('lots') })
+    .select({ supplierId: lots.supplierId, lots: count().as('lots_booked') })
     .from(lots)
     .where(ne(lots.status, 'cancelled'))
     .groupBy(lots.supplierId)
@@ -17,8 +17,8 @@ function withLots(db: Db) {
   const decided = db
     .select({
       supplierId: lotSummaries.supplierId,
-      lots: count().as('lots'),
-      accepted: sql<number>`sum(${lotSummaries.verdict} = 'accepted')`.as('accepted'),
+      lots: count().as('lots_decided'),
+      accepted: sql<number>`sum(${lotSummaries.verdict} = 'accepted')`.as('lots_accepted'),
     })
     .from(lotSummaries)
     .groupBy(lotSummaries.supplierId)
