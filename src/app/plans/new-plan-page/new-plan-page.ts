@@ -14,6 +14,7 @@ import { Router } from '@angular/router';
 import { listParts } from '#shared/contract/parts';
 import { addPlan, type Plan, type RevisionBody } from '#shared/contract/plans';
 import { ApiClient, endpointResource } from '../../data/api';
+import { type ApiProblem } from '../../data/api-problem';
 import { RecordSave } from '../../data/record-save';
 import { BackLink } from '../../shell/back-link';
 import { type HoldsTyping } from '../../shell/leave-guard';
@@ -85,15 +86,20 @@ export class NewPlanPage implements HoldsTyping {
     this.saving.run(
       this.api.call(addPlan, { body: { partId, content: this.draft.content() } }),
       (plan) => this.open(plan),
-      (problem) => {
-        this.draft.refuse(problem.faults.map((fault) => ({ ...fault, path: fault.path.slice(1) })));
-        if (problem.faults.length === 0) this.saving.said.set([problem.message]);
-      },
+      (problem) => this.refuse(problem),
     );
   }
 
   private open(plan: Plan): void {
     this.stored = true;
     void this.router.navigate(['/plans', plan.id], { replaceUrl: true });
+  }
+
+  /** Faults of the content stand beside its fields, those of the part are said. */
+  private refuse({ faults, message }: ApiProblem): void {
+    const ofContent = faults.filter((fault) => fault.path[0] === 'content');
+    this.draft.refuse(ofContent.map((fault) => ({ ...fault, path: fault.path.slice(1) })));
+    const others = faults.filter((fault) => fault.path[0] !== 'content').map((fault) => fault.message);
+    this.saving.said.set(ofContent.length === 0 && others.length === 0 ? [message] : others);
   }
 }
