@@ -1,0 +1,104 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  effect,
+  ElementRef,
+  inject,
+  input,
+  output,
+  untracked,
+  viewChild,
+} from '@angular/core';
+import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
+import { type Bench, keepReading } from '#shared/contract/bench';
+import { may } from '../../session/may';
+import { narrowerThan } from '../../shell/screen-width';
+import { ReadOnlyNote } from '../../ui/states/read-only-note';
+import { BenchHand } from '../bench-hand';
+import { BenchCursor } from '../sheet/bench-cursor';
+import { BenchSheet } from '../sheet/bench-sheet';
+import { InstrumentChoice } from '../sheet/instrument-choice';
+import { ReadingDraft } from '../sheet/reading-draft';
+import { ReadingQueue } from '../waiting/reading-queue';
+import { BenchHead } from './bench-head';
+import { DeskCommands } from './desk-commands';
+import { BenchQuestions } from './dialogs/bench-questions';
+import { KeyHints } from './key-hints';
+import { LotSubmission } from './lot-submission';
+import { MeasuringGrid } from './measuring-grid/measuring-grid';
+import { NumberPad } from './number-pad';
+import { ReadingPanel } from './reading-panel/reading-panel';
+import { RunningVerdict } from './running-verdict';
+import { SampleOverview } from './sample-overview';
+
+/** One lot on the bench: the sample, the grid of readings, and the panel where they are typed. */
+@Component({
+  selector: 'qr-bench-desk',
+  imports: [BenchHead, KeyHints, MeasuringGrid, NumberPad, ReadingPanel, ReadOnlyNote, RunningVerdict, SampleOverview],
+  providers: [
+    BenchSheet,
+    BenchCursor,
+    ReadingDraft,
+    InstrumentChoice,
+    BenchHand,
+    BenchQuestions,
+    DeskCommands,
+    LotSubmission,
+  ],
+  templateUrl: './bench-desk.html',
+  styleUrl: './bench-desk.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class BenchDesk {
+  private readonly queue = inject(ReadingQueue);
+  private readonly draft = inject(ReadingDraft);
+  private readonly cursor = inject(BenchCursor);
+  protected readonly sheet = inject(BenchSheet);
+  protected readonly hand = inject(BenchHand);
+  protected readonly commands = inject(DeskCommands);
+  protected readonly submission = inject(LotSubmission);
+
+  readonly bench = input.required<Bench>();
+  /** The lot should be read again: somebody else's work shows through. */
+  readonly stale = output();
+
+  private readonly grid = viewChild(MeasuringGrid);
+  private readonly panel = viewChild(ReadingPanel);
+  private readonly panelElement = viewChild(ReadingPanel, { read: ElementRef<HTMLElement> });
+
+  protected readonly narrow = narrowerThan(1000);
+  private readonly merged = narrowerThan(1360);
+  private readonly mayKeep = may(keepReading);
+
+  constructor() {
+    effect(() => {
+      this.sheet.open(this.bench());
+      untracked(() => this.cursor.start());
+    });
+    effect(() => this.cursor.merged.set(this.merged()));
+    effect(() => {
+      const atBench = ['drawn', 'measuring'].includes(this.bench().lot.status);
+      this.hand.mayMeasure.set(this.mayKeep() && atBench);
+    });
+    this.sheet.stale.pipe(takeUntilDestroyed()).subscribe(() => this.stale.emit());
+    this.commands.toGrid.pipe(takeUntilDestroyed()).subscribe(() => this.grid()?.focusCell());
+    this.commands.toPanel.pipe(takeUntilDestroyed()).subscribe((text) => this.panel()?.focusFirst(text));
+  }
+
+  /** Whether leaving would lose something: a reading half typed, or one this browser could not write down. */
+  hasUnsaved(): boolean {
+    return this.draft.started() || this.queue.atRisk();
+  }
+
+  protected panelHost(): HTMLElement | undefined {
+    return this.panelElement()?.nativeElement;
+  }
+
+  protected showRefused(): void {
+    const refused = this.queue.refused().find(({ act }) => act.lotId === this.bench().lot.id);
+    const reading = refused?.act.kind === 'reading' ? refused.act : undefined;
+    if (reading === undefined || !this.draft.mayLeave()) return;
+    this.cursor.choose(reading.unit, reading.body.characteristicKey);
+    this.grid()?.focusCell();
+  }
+}

@@ -1,0 +1,144 @@
+import {
+  afterNextRender,
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  ElementRef,
+  inject,
+  Injector,
+  output,
+  signal,
+  untracked,
+  viewChild,
+} from '@angular/core';
+import { type BenchCommand, benchCommand } from '#shared/bench/bench-key';
+import { BenchSettings } from '../../bench-settings';
+import { BenchCursor } from '../../sheet/bench-cursor';
+import { BenchSheet } from '../../sheet/bench-sheet';
+import { ReadingDraft } from '../../sheet/reading-draft';
+import { gridLayout } from './grid-layout';
+import { GridFoot } from './grid-foot';
+import { GridHead } from './grid-head';
+import { GridRow } from './grid-row';
+import { rowWindow } from './row-window';
+import { viewSize } from './view-size';
+
+/** All readings of the sample. One tab stop; the focus roves, and only the rows in view and some around them are drawn. */
+@Component({
+  selector: 'qr-measuring-grid',
+  imports: [GridFoot, GridHead, GridRow],
+  templateUrl: './measuring-grid.html',
+  styleUrl: './measuring-grid.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class MeasuringGrid {
+  private readonly injector = inject(Injector);
+  private readonly settings = inject(BenchSettings);
+  private readonly draft = inject(ReadingDraft);
+  protected readonly sheet = inject(BenchSheet);
+  protected readonly cursor = inject(BenchCursor);
+
+  /** What a key asks for beyond moving about. */
+  readonly asked = output<BenchCommand>();
+
+  private readonly scroller = viewChild.required<ElementRef<HTMLElement>>('scroller');
+  private readonly head = viewChild.required<GridHead, ElementRef<HTMLElement>>(GridHead, { read: ElementRef });
+  private readonly foot = viewChild.required<GridFoot, ElementRef<HTMLElement>>(GridFoot, { read: ElementRef });
+  private readonly size = viewSize(this.scroller);
+  private readonly scrolled = signal(0);
+
+  protected readonly layout = computed(() => gridLayout(this.cursor.columns(), this.size().width));
+  protected readonly rowHeight = computed(() => this.size().row);
+  private readonly window = computed(
+    () =>
+      rowWindow({
+        scrolled: this.scrolled(),
+        height: this.size().height,
+        rowHeight: this.rowHeight(),
+        rows: this.sheet.records().length,
+      }),
+    { equal: (one, other) => one.from === other.from && one.to === other.to },
+  );
+  protected readonly offset = computed(() => this.window().from * this.rowHeight());
+  protected readonly rows = computed(() => {
+    const { unit, key } = this.cursor.at();
+    const typed = this.draft.preview();
+    return this.sheet
+      .records()
+      .slice(this.window().from, this.window().to)
+      .map((record) => {
+        const current = record.unit === unit;
+        const verdict = (current && typed) || this.sheet.verdictOf(record);
+        return { record, verdict, focusKey: current ? key : null, typedKey: current && typed ? key : null };
+      });
+  });
+  protected readonly armed = this.draft.armed;
+  /** The focus is on the grid itself while the row in focus is scrolled out of view. */
+  protected readonly roving = computed(() => this.rows().some(({ focusKey }) => focusKey !== null));
+
+  constructor() {
+    effect(() => {
+      this.cursor.at();
+      untracked(() => this.afterRender(() => this.reveal()));
+    });
+  }
+
+  /** Puts the focus on the cell where the bench stands. */
+  focusCell(): void {
+    this.afterRender(() => {
+      this.reveal();
+      this.afterRender(() => this.cell()?.focus({ preventScroll: true }));
+    });
+  }
+
+  protected scroll(): void {
+    this.scrolled.set(this.scroller().nativeElement.scrollTop);
+  }
+
+  protected press(event: KeyboardEvent): void {
+    const { key, ctrlKey, metaKey, shiftKey, altKey } = event;
+    const press = { key, ctrl: ctrlKey || metaKey, shift: shiftKey, alt: altKey };
+    const command = benchCommand(press, this.settings.letters());
+    if (command === null || !this.obey(command)) return;
+    event.preventDefault();
+    event.stopPropagation();
+  }
+
+  /** False for a key that is left to the browser. */
+  private obey(command: BenchCommand): boolean {
+    const walks = command.does === 'move' || command.does === 'next' || command.does === 'previous';
+    if (!walks) {
+      this.asked.emit(command);
+      return true;
+    }
+    if (!this.draft.mayLeave()) return true;
+    if (command.does === 'move') this.cursor.move(command.move);
+    else if (!this.cursor.step(command.does)) return false;
+    this.focusCell();
+    return true;
+  }
+
+  protected choose(unit: number, key: string): void {
+    const { at } = this.cursor;
+    if ((unit !== at().unit || key !== at().key) && this.draft.mayLeave()) this.cursor.choose(unit, key);
+  }
+
+  private cell(): HTMLElement | null {
+    return this.scroller().nativeElement.querySelector('qr-grid-row.current .focused');
+  }
+
+  /** Scrolls the row in focus between the head and the summary. */
+  private reveal(): void {
+    const view = this.scroller().nativeElement;
+    const top = (this.cursor.at().unit - 1) * this.rowHeight();
+    const room = view.clientHeight - this.head().nativeElement.offsetHeight - this.foot().nativeElement.offsetHeight;
+    if (top < view.scrollTop) view.scrollTop = top;
+    else if (top + this.rowHeight() > view.scrollTop + room) view.scrollTop = top + this.rowHeight() - room;
+    this.scroll();
+  }
+
+  private afterRender(work: () => void): void {
+    afterNextRender(work, { injector: this.injector });
+  }
+}

@@ -1,0 +1,163 @@
+import { computed, effect, inject, Injectable, signal, untracked } from '@angular/core';
+import { firstValueFrom, Subject } from 'rxjs';
+import { keepReading, type Kept, setUnitAside, withdrawReading } from '#shared/contract/bench';
+import { ApiClient } from '../../data/api';
+import { problemOf } from '../../data/api-problem';
+import { Session } from '../../session/session';
+import { type BenchAct, type WaitingAct } from './bench-act';
+import { failureKind, retryPause } from './retry-pause';
+import { WaitingShelf } from './waiting-shelf';
+
+/** What became of an act: acknowledged, with the server's verdict where it was a reading, or refused with its sentence. */
+export type Settled =
+  | { readonly act: BenchAct; readonly outcome: 'acknowledged'; readonly kept: Kept | null }
+  | { readonly act: BenchAct; readonly outcome: 'refused'; readonly refusal: string };
+
+/**
+ * Readings on their way to the server. Each stays on this device until it is acknowledged; they are sent one after the other,
+ * again and again while the server cannot be reached, and what the server refuses stays here with its sentence.
+ */
+@Injectable({ providedIn: 'root' })
+export class ReadingQueue {
+  private readonly api = inject(ApiClient);
+  private readonly shelf = inject(WaitingShelf);
+  private readonly session = inject(Session);
+  private readonly all = signal<readonly WaitingAct[]>(this.shelf.read());
+  private readonly unstored = signal<ReadonlySet<string>>(new Set());
+  private readonly settling = new Subject<Settled>();
+  private sending = false;
+  private failures = 0;
+  private timer: ReturnType<typeof setTimeout> | undefined;
+
+  /** Everything not yet acknowledged, in the order it was done. */
+  readonly entries = this.all.asReadonly();
+  readonly waiting = computed(() => this.all().filter((each) => each.refusal === null));
+  readonly refused = computed(() => this.all().filter((each) => each.refusal !== null));
+  /** Whether something waits that this browser could not write down, so that closing the page would lose it. */
+  readonly atRisk = computed(() => this.waiting().some(({ act }) => this.unstored().has(act.id)));
+  /** Since when the server does not answer; null while it does. */
+  readonly unreachableSince = signal<Date | null>(null);
+  /** When the server last acknowledged an act. */
+  readonly savedAt = signal<Date | null>(null);
+  readonly settled = this.settling.asObservable();
+
+  constructor() {
+    effect(() => {
+      if (this.session.me() !== null) untracked(() => this.tryNow());
+    });
+    globalThis.addEventListener('online', () => this.tryNow());
+  }
+
+  /** Takes an act over; from now on it is not lost. */
+  add(act: BenchAct): void {
+    const personId = this.session.me()?.id;
+    if (personId === undefined) throw new Error('Only a person who is signed in measures.');
+    const order = Math.max(0, ...this.all().map((each) => each.order)) + 1;
+    this.put({ act, personId, order, refusal: null });
+    void this.send();
+  }
+
+  /** Sends what waits at once instead of at the next turn. */
+  tryNow(): void {
+    this.failures = 0;
+    void this.send();
+  }
+
+  /** Sends a refused act again. */
+  resend(id: string): void {
+    const refused = this.all().find((each) => each.act.id === id);
+    if (refused === undefined) return;
+    this.put({ ...refused, refusal: null });
+    this.tryNow();
+  }
+
+  /** Gives up a refused act; the person has read why. */
+  discard(id: string): void {
+    this.shelf.remove(id);
+    this.all.update((all) => all.filter((each) => each.act.id !== id));
+  }
+
+  private async send(): Promise<void> {
+    if (this.sending) return;
+    this.sending = true;
+    clearTimeout(this.timer);
+    const stumbledUnits = new Set<string>();
+    for (let next = this.next(stumbledUnits); next !== undefined; next = this.next(stumbledUnits)) {
+      if (!(await this.sendOne(next, stumbledUnits))) break;
+    }
+    this.sending = false;
+    if (this.mine().length > 0) this.timer = setTimeout(() => void this.send(), retryPause(this.failures));
+  }
+
+  /** The first act of this person on a unit that the server did not stumble over; acts on one unit keep their order. */
+  private next(stumbledUnits: ReadonlySet<string>): WaitingAct | undefined {
+    return this.mine().find(({ act }) => !stumbledUnits.has(unitOf(act)));
+  }
+
+  private mine(): WaitingAct[] {
+    const personId = this.session.me()?.id;
+    return this.waiting().filter((each) => each.personId === personId);
+  }
+
+  /** Sends one act; false when there is no point in sending more just now. */
+  private async sendOne(waiting: WaitingAct, stumbledUnits: Set<string>): Promise<boolean> {
+    try {
+      const kept = await this.call(waiting.act);
+      this.acknowledge(waiting.act, kept);
+      return true;
+    } catch (thrown) {
+      const problem = problemOf(thrown);
+      const kind = failureKind(problem);
+      if (kind === 'refused') {
+        this.refuse(waiting, problem.message);
+        return true;
+      }
+      this.failures += 1;
+      if (kind === 'stumbled') stumbledUnits.add(unitOf(waiting.act));
+      else this.unreachableSince.update((since) => since ?? problem.at);
+      return kind === 'stumbled';
+    }
+  }
+
+  private async call(act: BenchAct): Promise<Kept | null> {
+    if (act.kind === 'reading') {
+      const params = { id: act.lotId, reading: act.id };
+      return firstValueFrom(this.api.call(keepReading, { params, body: act.body }));
+    }
+    const params = { id: act.lotId };
+    const done =
+      act.kind === 'withdrawal'
+        ? this.api.call(withdrawReading, { params: { ...params, reading: act.readingId } })
+        : this.api.call(setUnitAside, { params: { ...params, unit: act.unit }, body: { reason: act.reason } });
+    await firstValueFrom(done);
+    return null;
+  }
+
+  private acknowledge(act: BenchAct, kept: Kept | null): void {
+    this.discard(act.id);
+    this.failures = 0;
+    this.unreachableSince.set(null);
+    this.savedAt.set(new Date());
+    this.settling.next({ act, outcome: 'acknowledged', kept });
+  }
+
+  private refuse(waiting: WaitingAct, refusal: string): void {
+    this.unreachableSince.set(null);
+    this.put({ ...waiting, refusal });
+    this.settling.next({ act: waiting.act, outcome: 'refused', refusal });
+  }
+
+  private put(waiting: WaitingAct): void {
+    const { id } = waiting.act;
+    const stored = this.shelf.write(waiting);
+    this.unstored.update((ids) => new Set([...ids].filter((each) => each !== id).concat(stored ? [] : [id])));
+    this.all.update((all) => {
+      const others = all.filter((each) => each.act.id !== id);
+      return [...others, waiting].sort((one, other) => one.order - other.order);
+    });
+  }
+}
+
+function unitOf(act: BenchAct): string {
+  return `${act.lotId}/${act.unit}`;
+}
