@@ -8,7 +8,7 @@ import { signerOf } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
 import { findSite } from '#server/site/site-queries';
 import { type CertificateData, type CertificateResult } from '#shared/papers/certificate-data';
-import { SCHEME_NAME } from '#shared/sampling/scheme';
+import { SCHEME_NAME, SCHEME_TABLES } from '#shared/sampling/scheme';
 
 /** The lot to be certified, as it was judged, and who releases it. */
 export interface Release {
@@ -95,7 +95,7 @@ export function certificateData(db: Db, number: string, release: Release): Certi
       level: sampling.level,
       severity: sampling.severity,
     },
-    scheme: SCHEME_NAME,
+    scheme: `${SCHEME_NAME} (${SCHEME_TABLES})`,
     sampleSize: sampling.sampleSize,
     unitsJudged: lot.unitsJudged,
     groups: groupsOf(judged),

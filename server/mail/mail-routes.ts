@@ -4,7 +4,7 @@ import { listMessages, listReceived, readMessage, readReceived } from '#shared/c
 import { type Router } from 'express';
 import { findMessage, findReceived, messagePage, receivedPage } from './message-queries';
 
-export function mailRoutes(router: Router, { db, environment }: Pick<Context, 'db' | 'environment'>): void {
+export function mailRoutes(router: Router, { db, environment }: Context): void {
   const fake = environment.smtpUrl === undefined;
 
   serve(router, listMessages, ({ query }) => messagePage(db, query));
