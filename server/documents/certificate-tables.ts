@@ -1,3 +1,4 @@
+import { INSTRUMENT_KIND_TITLES } from '#shared/contract/instruments';
 import { type CertificateData } from '#shared/papers/certificate-data';
 import { type NonconformityClass } from '#shared/sampling/scheme';
 import { formatNumber } from '#shared/quantities/format-quantity';
@@ -55,10 +56,13 @@ const INSTRUMENT_COLUMNS: Column[] = [
   { head: 'Calibration due', x: 223, width: 84, align: 'right' },
 ];
 
+/** Titles of the kinds of instrument; a kind unknown here is printed as it is kept. */
+const KIND_TITLES = new Map<string, string>(Object.entries(INSTRUMENT_KIND_TITLES));
+
 export function instrumentsTable({ instruments }: CertificateData): Table {
   const rows = instruments.map(({ assetNumber, kind, calibrationDue }) => [
     figures(assetNumber),
-    words(kind),
+    words(KIND_TITLES.get(kind) ?? kind),
     words(calibrationDue.slice(0, 10)),
   ]);
   return { x: LEFT, width: HALF, columns: INSTRUMENT_COLUMNS, rows, rowHeight: 23 };
