@@ -1,12 +1,12 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
-import { RouterLink } from '@angular/router';
+import { type Params, RouterLink } from '@angular/router';
 import { Icon } from '../ui/marks/icon';
 
 /** The way back from a record to its list; the list's name is the content. */
 @Component({
   selector: 'qr-back-link',
   imports: [Icon, RouterLink],
-  template: `<a [routerLink]="to()"><qr-icon name="back" [size]="18" /><ng-content /></a>`,
+  template: `<a [routerLink]="to()" [queryParams]="query()"><qr-icon name="back" [size]="18" /><ng-content /></a>`,
   styles: `
     a {
       display: inline-flex;
@@ -24,4 +24,6 @@ import { Icon } from '../ui/marks/icon';
 })
 export class BackLink {
   readonly to = input.required<string>();
+  /** The state of the list to come back to. */
+  readonly query = input<Params>();
 }

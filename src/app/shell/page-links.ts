@@ -8,10 +8,14 @@ import { RouterLink } from '@angular/router';
   imports: [MatButton, RouterLink],
   template: `
     @if (after()) {
-      <a matButton="outlined" [routerLink]="[]" [queryParams]="{ after: null }" queryParamsHandling="merge">First page</a>
+      <a matButton="outlined" [routerLink]="[]" [queryParams]="{ after: null }" queryParamsHandling="merge"
+        >First page</a
+      >
     }
     @if (next(); as cursor) {
-      <a matButton="outlined" [routerLink]="[]" [queryParams]="{ after: cursor }" queryParamsHandling="merge">Next page</a>
+      <a matButton="outlined" [routerLink]="[]" [queryParams]="{ after: cursor }" queryParamsHandling="merge"
+        >Next page</a
+      >
     }
   `,
   styles: `

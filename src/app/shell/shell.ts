@@ -21,7 +21,6 @@ import { PageTitle } from '../page-title';
 import { Session } from '../session/session';
 import { Icon } from '../ui/marks/icon';
 import { Mark } from '../ui/marks/mark';
-import { KeysDialog } from './keys-dialog/keys-dialog';
 import { Line } from './line/line';
 import { OfflineBanner } from './offline-banner';
 import { RecordsMenu } from './records-menu/records-menu';
@@ -96,6 +95,11 @@ export class Shell {
     });
   }
 
+  private async showKeys(): Promise<void> {
+    const { KeysDialog } = await import('./keys-dialog/keys-dialog');
+    this.dialog.open(KeysDialog);
+  }
+
   protected press(event: KeyboardEvent): void {
     const station =
       event.altKey && /^Digit[1-6]$/.test(event.code) ? STATIONS[Number(event.code.slice(5)) - 1] : undefined;
@@ -104,13 +108,20 @@ export class Shell {
       void this.router.navigateByUrl(`/${station.key}`);
       return;
     }
-    if (event.defaultPrevented || event.ctrlKey || event.metaKey || isTyping(event.target)) return;
+    if (
+      this.dialog.openDialogs.length > 0 ||
+      event.defaultPrevented ||
+      event.ctrlKey ||
+      event.metaKey ||
+      isTyping(event.target)
+    )
+      return;
     if (event.key === '/') {
       event.preventDefault();
       this.openSearch();
     } else if (event.key === '?') {
       event.preventDefault();
-      this.dialog.open(KeysDialog);
+      void this.showKeys();
     }
   }
 }

@@ -26,9 +26,12 @@ import { markPath } from './mark-path';
       stroke-linecap: round;
       stroke-linejoin: round;
     }
-    :host(.busy) path {
-      stroke-dasharray: 70 30;
-      animation: travel 1.2s linear infinite;
+    @media (prefers-reduced-motion: no-preference) {
+      :host(.busy) path {
+        stroke-dasharray: 70 30;
+        stroke-linecap: butt;
+        animation: travel 1.2s linear infinite;
+      }
     }
     @keyframes travel {
       to {
