@@ -1,0 +1,25 @@
+/** What a page calls the things that audit entries are about. */
+export const SUBJECT_TITLES: Readonly<Record<string, string>> = {
+  lot: 'Lot',
+  unit: 'Unit',
+  reading: 'Reading',
+  nonconformance: 'Nonconformance',
+  certificate: 'Certificate',
+  'plan-revision': 'Plan revision',
+  part: 'Part',
+  supplier: 'Supplier',
+  instrument: 'Instrument',
+  person: 'Person',
+  site: 'Site',
+};
+
+/** The title of a subject; one that has none is shown as it is recorded. */
+export function subjectTitle(subject: string): string {
+  return SUBJECT_TITLES[subject] ?? sentenceCase(subject);
+}
+
+/** "sign-in-refused" reads "Sign in refused". */
+export function sentenceCase(name: string): string {
+  const words = name.replaceAll('-', ' ');
+  return words.charAt(0).toUpperCase() + words.slice(1);
+}
