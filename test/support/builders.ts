@@ -1,5 +1,6 @@
 import { type Db } from '#db/open-database';
 import { instruments } from '#db/schema/instruments';
+import { lots } from '#db/schema/lots';
 import { parts } from '#db/schema/parts';
 import { planCharacteristics, planClassAqls, planRevisions, plans } from '#db/schema/plans';
 import { suppliers } from '#db/schema/suppliers';
@@ -85,4 +86,28 @@ export function buildPlan(
   const effectiveAt = status === 'effective' || status === 'retired' ? MOMENT : null;
   db.update(planRevisions).set({ status, effectiveAt }).where(eq(planRevisions.id, revisionId)).run();
   return { planId: plan.id, revisionId };
+}
+
+/** A lot that stands somewhere on the line; what its state needs is filled in. */
+export function buildLot(
+  db: Db,
+  given: Partial<typeof lots.$inferInsert> & { number: string; partId: number; supplierId: number; bookedById: number },
+) {
+  const usual = {
+    status: 'arrived',
+    deliveryNumber: 'D-1',
+    orderNumber: '',
+    countedQuantity: 400,
+    statedQuantity: 400,
+    dateCode: '',
+    cartons: 4,
+    place: '',
+    note: '',
+    arrivedAt: MOMENT,
+  } as const;
+  return db
+    .insert(lots)
+    .values({ ...usual, ...given })
+    .returning()
+    .get();
 }

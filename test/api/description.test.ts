@@ -1,0 +1,52 @@
+import { ENDPOINTS } from '#shared/contract/index';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { testSite, type TestSite } from '../support/test-site';
+
+interface Document {
+  openapi: string;
+  paths: Record<
+    string,
+    Record<string, { operationId: string; security: unknown[]; responses: Record<string, unknown> }>
+  >;
+  components: { responses: object; securitySchemes: object };
+}
+
+let site: TestSite;
+beforeAll(async () => {
+  site = await testSite();
+});
+afterAll(() => site.close());
+
+describe('the description of the interface', () => {
+  it('holds every endpoint of the contract and nothing else', async () => {
+    const document = (await site.nobody().get('/api/openapi.json').expect(200)).body as Document;
+    expect(document.openapi).toBe('3.1.0');
+    const operations = Object.values(document.paths).flatMap((path) => Object.values(path));
+    expect(operations.map(({ operationId }) => operationId).sort()).toEqual([...ENDPOINTS.keys()].sort());
+    for (const [name, endpoint] of ENDPOINTS) {
+      const path = endpoint.path.replaceAll(/:(\w+)/g, '{$1}');
+      const operation = document.paths[path]?.[endpoint.method.toLowerCase()];
+      expect(operation?.operationId).toBe(name);
+      expect(operation?.security).toEqual(endpoint.who === 'anyone' ? [] : [{ session: [] }]);
+      expect(operation?.responses).toHaveProperty(String(endpoint.status));
+      if (endpoint.versioned) expect(operation?.responses).toHaveProperty('412');
+    }
+  });
+
+  it('refers only to what it holds', async () => {
+    const { text, body } = await site.nobody().get('/api/openapi.json');
+    const references = new Set([...text.matchAll(/"\$ref":"#\/([^"]+)"/g)].map(([, place]) => place ?? ''));
+    for (const place of references)
+      expect(place.split('/').reduce<unknown>((inner, step) => Reflect.get(Object(inner), step), body)).toBeDefined();
+  });
+
+  it('is a page that needs no script', async () => {
+    const answer = await site.nobody().get('/api/docs').expect(200);
+    expect(answer.headers['content-type']).toBe('text/html; charset=utf-8');
+    expect(answer.headers['content-security-policy']).toContain("script-src 'self'");
+    expect(answer.text).not.toContain('<script');
+    for (const { summary } of ENDPOINTS.values())
+      expect(answer.text).toContain(summary.replaceAll("'", '&#39;').replaceAll('"', '&quot;'));
+    expect(answer.text).toContain('characteristics[].formula.inputs');
+  });
+});
