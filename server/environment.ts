@@ -53,7 +53,9 @@ export class EnvironmentRefused extends Error {}
 export function readEnvironment(variables: Record<string, string | undefined>, root: string): Environment {
   const read = schema.safeParse(variables);
   if (!read.success)
-    throw new EnvironmentRefused(read.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`).join('\n'));
+    throw new EnvironmentRefused(
+      read.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`).join('\n'),
+    );
   const given = read.data;
   return {
     mode: given.QUIETRAIL_MODE,

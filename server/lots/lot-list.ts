@@ -1,6 +1,6 @@
 import { type Db } from '#db/open-database';
 import { lots } from '#db/schema/lots';
-import { Refused } from '#server/problems';
+import { cursorFault } from '#server/page-after';
 import { STATIONS, type LotHead, type Station } from '#shared/contract/lots';
 import { and, asc, desc, eq, gt, inArray, lt, or, type SQL } from 'drizzle-orm';
 import { type SQLiteColumn } from 'drizzle-orm/sqlite-core';
@@ -28,8 +28,7 @@ const ORDERS = {
 function beyond(column: SQLiteColumn, newestFirst: boolean, cursor: string): SQL | undefined {
   const [at, idText] = cursor.split('|');
   const id = Number(idText);
-  if (at === undefined || !Number.isInteger(id))
-    throw new Refused('cursor-not-understood', 'The place in the list is not understood.');
+  if (at === undefined || !Number.isInteger(id)) throw cursorFault();
   const past = newestFirst ? lt : gt;
   return or(past(column, at), and(eq(column, at), past(lots.id, id)));
 }

@@ -1,9 +1,9 @@
 import { type Db } from '#db/open-database';
 import { messageAttempts, messages, receivedMessages } from '#db/schema/mail';
+import { type Page, pageAfter, type PageQuery } from '#server/page-after';
 import { NotFound } from '#server/problems';
 import { type Message, type MessageHead, type Received } from '#shared/contract/mail';
 import { asc, count, desc, eq, inArray, lt } from 'drizzle-orm';
-import { idOf, type Page, pageOfRows, type PageQuery } from './newest-first';
 
 const head = {
   id: messages.id,
@@ -27,19 +27,21 @@ function attemptCounts(db: Db, ids: number[]): Map<number, number> {
 }
 
 /** The outbox, newest first. */
-export function messagePage(db: Db, { after, limit }: PageQuery): Page<MessageHead> {
-  const rows = db
-    .select(head)
-    .from(messages)
-    .where(after === undefined ? undefined : lt(messages.id, idOf(after)))
-    .orderBy(desc(messages.id))
-    .limit(limit + 1)
-    .all();
+export function messagePage(db: Db, query: PageQuery): Page<MessageHead> {
+  const page = pageAfter(query, (before, limit) =>
+    db
+      .select(head)
+      .from(messages)
+      .where(before === undefined ? undefined : lt(messages.id, before))
+      .orderBy(desc(messages.id))
+      .limit(limit)
+      .all(),
+  );
   const attempts = attemptCounts(
     db,
-    rows.map((row) => row.id),
+    page.items.map(({ id }) => id),
   );
-  return pageOfRows(rows, limit, (row) => ({ ...row, attempts: attempts.get(row.id) ?? 0 }));
+  return { ...page, items: page.items.map((row) => ({ ...row, attempts: attempts.get(row.id) ?? 0 })) };
 }
 
 /** @throws {NotFound} when there is no such message */
@@ -69,15 +71,16 @@ const receivedHead = {
 };
 
 /** What the local mail server received, newest first. */
-export function receivedPage(db: Db, { after, limit }: PageQuery): Page<Omit<Received, 'text' | 'html'>> {
-  const rows = db
-    .select(receivedHead)
-    .from(receivedMessages)
-    .where(after === undefined ? undefined : lt(receivedMessages.id, idOf(after)))
-    .orderBy(desc(receivedMessages.id))
-    .limit(limit + 1)
-    .all();
-  return pageOfRows(rows, limit, (row) => row);
+export function receivedPage(db: Db, query: PageQuery): Page<Omit<Received, 'text' | 'html'>> {
+  return pageAfter(query, (before, limit) =>
+    db
+      .select(receivedHead)
+      .from(receivedMessages)
+      .where(before === undefined ? undefined : lt(receivedMessages.id, before))
+      .orderBy(desc(receivedMessages.id))
+      .limit(limit)
+      .all(),
+  );
 }
 
 /** @throws {NotFound} when there is no such message */
