@@ -63,7 +63,8 @@ function holdSame(row: ReadingRow, cell: Cell): void {
   if (!same) throw new Conflict('reading-id-used', 'Another reading has this id already.');
 }
 
-function start(db: Db, lot: LotRow, caller: Caller, at: Date): void {
+/** The first reading of a drawn lot starts its measuring. */
+export function startMeasuring(db: Db, lot: LotRow, caller: Caller, at: Date): void {
   if (lot.status !== 'drawn') return;
   db.update(lots).set({ status: 'measuring' }).where(eq(lots.id, lot.id)).run();
   recordLot(db, { at, person: caller, action: 'started', lotId: lot.id, note: '' });
@@ -146,7 +147,7 @@ export function keepReading(
     const held = verdicts.of(tx, lot);
     const cell = cellOf(tx, lot, held.rules, body);
     if (known) holdSame(known, cell);
-    else start(tx, lot, caller, at);
+    else startMeasuring(tx, lot, caller, at);
     const kept = known ?? insert(tx, lot, cell, caller, id, body, held.rules, at);
     return { row: kept, running: rejudge(tx, lot, held, body.unit, at) };
   });
