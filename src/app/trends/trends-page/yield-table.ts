@@ -1,0 +1,34 @@
+import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+import { RouterLink } from '@angular/router';
+import { type YieldRow } from '#shared/contract/yields';
+import { CountPipe } from '../../ui/values/count-pipe';
+import { shareText } from '../share-text';
+
+/** Yields as a table: every share with the counts it comes from, and the total below. */
+@Component({
+  selector: 'qr-yield-table',
+  imports: [CountPipe, RouterLink],
+  templateUrl: './yield-table.html',
+  styles: `
+    .name {
+      max-width: 360px;
+      overflow-wrap: anywhere;
+    }
+    tfoot td {
+      border-top: 1px solid var(--qr-line-2);
+      border-bottom: 0;
+      font-weight: 600;
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class YieldTable {
+  /** Head of the first column: what the rows are. */
+  readonly first = input.required<string>();
+  /** Where the records of the rows are found by their key. */
+  readonly area = input('');
+  readonly rows = input.required<readonly YieldRow[]>();
+  readonly total = input.required<YieldRow>();
+
+  protected readonly share = shareText;
+}
