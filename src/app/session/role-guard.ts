@@ -21,12 +21,13 @@ export function areaFor(who: Who, area: Route & { path: string; title: string },
   const closed = paths.map((path) => ({
     path,
     title: area.title,
+    canMatch: [() => !inject(Session).holds(...who)],
     children: [{ path: '**', loadComponent, data: told }],
   }));
   return [{ ...area, canMatch: [roleGuard(...who)] }, ...closed];
 }
 
-/** "Decision is for inspector, quality engineer, auditor." */
+/** "Decision is open to: inspector, quality engineer, auditor." */
 function whoSentence(title: string, roles: readonly Role[]): string {
-  return `${title} is for ${roles.map((role) => ROLE_TITLES[role].toLowerCase()).join(', ')}.`;
+  return `${title} is open to: ${roles.map((role) => ROLE_TITLES[role].toLowerCase()).join(', ')}.`;
 }

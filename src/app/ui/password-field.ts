@@ -23,7 +23,7 @@ import { FieldErrorPipe } from './values/field-error-pipe';
         matSuffix
         type="button"
         [attr.aria-pressed]="shown()"
-        [attr.aria-label]="(shown() ? 'Hide ' : 'Show ') + label().toLowerCase()"
+        [attr.aria-label]="shown() ? 'Hide what is typed' : 'Show what is typed'"
         (click)="shown.set(!shown())"
       >
         {{ shown() ? 'Hide' : 'Show' }}

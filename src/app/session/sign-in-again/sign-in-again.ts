@@ -15,6 +15,11 @@ import { MessageNote } from '../../ui/states/message-note';
   selector: 'qr-sign-in-again',
   imports: [ReactiveFormsModule, MatButton, MatDialogModule, MessageNote, PasswordField],
   templateUrl: './sign-in-again.html',
+  styles: `
+    qr-password-field {
+      margin-top: 12px;
+    }
+  `,
   providers: [formFieldDefaults],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })

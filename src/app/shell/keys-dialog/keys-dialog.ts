@@ -52,6 +52,7 @@ const BENCH = [
     dt {
       display: flex;
       flex-wrap: wrap;
+      align-items: flex-start;
       gap: 4px;
       max-width: 150px;
     }
