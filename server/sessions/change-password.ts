@@ -14,8 +14,8 @@ export function keepPassword(db: Db, personId: number, passwordHash: string): vo
     .run();
 }
 
-/** Whether the password is the person's own; also what a signature asks. */
-export async function isOwnPassword({ db, passwords }: Context, personId: number, password: string): Promise<boolean> {
+/** Whether the password is the one the person has now. */
+async function isOwnPassword({ db, passwords }: Context, personId: number, password: string): Promise<boolean> {
   const person = db.select({ hash: people.passwordHash }).from(people).where(eq(people.id, personId)).get();
   return typeof person?.hash === 'string' && (await passwords.matches(password, person.hash));
 }

@@ -53,8 +53,8 @@ class PasswordThread {
     if (this.worker) return this.worker;
     const worker = new Worker(this.url);
     worker.on('message', (answer: PasswordAnswer) => this.settle(answer));
-    worker.on('error', (error) => this.stop(error));
-    worker.on('exit', () => this.stop(new Error('The password thread has stopped.')));
+    worker.on('error', (error) => this.stop(worker, error));
+    worker.on('exit', () => this.stop(worker, new Error('The password thread has stopped.')));
     this.worker = worker;
     return worker;
   }
@@ -66,7 +66,9 @@ class PasswordThread {
     else waiting?.resolve(answer.result);
   }
 
-  private stop(error: Error): void {
+  private stop(worker: Worker, error: Error): void {
+    // A worker that failed says so twice, the second time when its successor may already be at work.
+    if (worker !== this.worker) return;
     this.worker = undefined;
     for (const waiting of this.waiting.values()) waiting.reject(error);
     this.waiting.clear();

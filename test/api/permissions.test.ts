@@ -103,6 +103,12 @@ describe('a body that has not the shape', () => {
     expect(answer.body).toMatchObject({ code: 'not-understood' });
   });
 
+  it('a file may be large where the contract expects one, from whoever is signed in', async () => {
+    const body = { fileName: 'rack.csv', text: 'unit\n'.repeat(60_000), instrumentIds: [] };
+    await site.as('inspector').post('/api/lots/999999/rack-file/preview').send(body).expect(404);
+    await site.nobody().post('/api/lots/999999/rack-file/preview').send(body).expect(413);
+  });
+
   it('a body larger than allowed is refused', async () => {
     const answer = await site
       .as('quality')

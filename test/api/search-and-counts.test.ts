@@ -37,7 +37,7 @@ function fill() {
     .values({ number: 'CC-26-0001', lotId: good.id, ...paper })
     .run();
   const opened = { openedAt: '2026-03-03T08:00:00.000Z', openedById: people.quality.id };
-  const what = { status: 'open', summary: '', failures: [], containment: '' } as const;
+  const what = { status: 'open' as const, summary: '', failures: [], containment: '' };
   db.insert(nonconformances)
     .values({ number: 'NC-26-001', lotId: bad.id, ...what, ...opened })
     .run();
