@@ -1,7 +1,7 @@
 // npm run dev: the server restarts and the page reloads when their sources change.
 import { spawn } from 'node:child_process';
 import { installWhenNeeded } from './install.mjs';
-import { serverBuild } from './build.mjs';
+import { serverBuild } from './building.mjs';
 
 installWhenNeeded();
 const { context } = await import('esbuild');

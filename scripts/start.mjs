@@ -5,6 +5,6 @@ import { fileURLToPath, pathToFileURL } from 'node:url';
 process.chdir(path.join(path.dirname(fileURLToPath(import.meta.url)), '..'));
 const { installWhenNeeded } = await import('./install.mjs');
 installWhenNeeded();
-const { buildWhenNeeded } = await import('./build.mjs');
+const { buildWhenNeeded } = await import('./building.mjs');
 await buildWhenNeeded();
 await import(pathToFileURL('dist/server/main.js').href);

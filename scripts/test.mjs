@@ -45,7 +45,8 @@ function vitest(name, report, command, args) {
   }
   const results = JSON.parse(readFileSync(report, 'utf8'));
   for (const file of results.testResults) {
-    if (file.assertionResults.length === 0) count(file.status === 'passed', `${name}: ${file.name} ${file.message ?? ''}`);
+    if (file.assertionResults.length === 0)
+      count(file.status === 'passed', `${name}: ${file.name} ${file.message ?? ''}`);
     for (const test of file.assertionResults) {
       count(test.status === 'passed', `${name}: ${test.fullName}`);
       if (test.status !== 'passed') console.error(`${test.fullName}\n${test.failureMessages.join('\n')}`);
