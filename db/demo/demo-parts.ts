@@ -125,7 +125,7 @@ export const DEMO_PARTS: readonly DemoPart[] = [
     limits: {
       noLoadVolts: [27.5, 31.5],
       loadedVolts: [22.5, 25.4],
-      rippleVolts: 2.2,
+      rippleVolts: 2.6,
       regulation: 0.34,
       balance: 0.03,
       noLoadWatts: null,

@@ -40,7 +40,7 @@ export function thirdRevision(part: DemoPart): RevisionBody {
     characteristics: second.characteristics.map((one) =>
       one.kind === 'measured' && one.key === 'ripple_pp' ? { ...one, upperLimit: 2.3 } : one,
     ),
-    changeNote: 'Ripple limit 2.40 V to 2.30 V p-p, after three lots with low capacitance.',
+    changeNote: 'Ripple limit 2.40 V to 2.30 V p-p, after lots with low capacitance.',
   };
 }
 

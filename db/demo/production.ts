@@ -29,6 +29,6 @@ export function productionOf(fault: Fault, chance: Chance): Production {
     badShare: BAD_SHARES[fault],
     capacitorMean: chance.about(1, 0.02),
     peakMean: chance.about(1, 0.003),
-    smearedShare: fault === 'smeared-marking' ? 0.15 : 0.006,
+    smearedShare: fault === 'smeared-marking' ? 0.2 : 0.006,
   };
 }

@@ -25,6 +25,9 @@ function given(value: number | null, name: string): number {
   return value;
 }
 
+/** Share of units with a stray weak capacitor, in any delivery. */
+const STRAY_SHARE = 0.002;
+
 /** A capacitor within its tolerance, or one of the batch that has lost capacitance. */
 function capacitance(
   nominal: number,
@@ -46,7 +49,7 @@ function rectifiedUnit(
 ): SupplyOutput {
   const isBad = chance.happens(production.badShare);
   const badTap = production.fault === 'bad-tap' && isBad;
-  const tap = badTap ? chance.about(0.06, 0.006) : chance.about(0, SPREAD.tap);
+  const tap = badTap ? chance.about(0.045, 0.003) : chance.about(0, SPREAD.tap);
   const peakVolts =
     given(model.secondaryPeakVolts, 'secondaryPeakVolts') *
     chance.about(production.peakMean, SPREAD.peak) *
@@ -61,7 +64,7 @@ function rectifiedUnit(
       given(model.filterFarads, 'filterFarads'),
       given(model.filterTolerance, 'filterTolerance'),
       production,
-      production.fault === 'low-capacitance' && isBad,
+      (production.fault === 'low-capacitance' && isBad) || chance.happens(STRAY_SHARE),
       chance,
     ),
     loadAmperes: model.ratedAmperes,
@@ -81,10 +84,11 @@ function rectifiedUnit(
 /** A regulated output holds its voltage; what is left of ripple comes from the switching. */
 function switchingUnit({ ratedVolts, ratedAmperes }: ElectricalModel, chance: Chance): SupplyOutput {
   const noLoad = ratedVolts * chance.about(1.002, SPREAD.output);
+  const stray = chance.happens(STRAY_SHARE) ? 2.4 : 1;
   return {
     noLoadVolts: noLoad,
     loadedVolts: noLoad - ratedVolts * chance.about(0.008, 0.001),
-    rippleVolts: ratedVolts * chance.about(0.0095, 0.0009),
+    rippleVolts: ratedVolts * chance.about(0.0095, 0.0009) * stray,
     halfPeaks: null,
     noLoadWatts: chance.about(0.066, 0.006),
     currentLimitAmperes: ratedAmperes * chance.about(1.28, 0.03),
