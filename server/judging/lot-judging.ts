@@ -39,31 +39,36 @@ export interface UnitRows {
   readings: ReadingRow[];
 }
 
-function unitRows(db: Db, condition: SQL | undefined): UnitRows[] {
-  const rows = db
-    .select({ unit: sampleUnits, reading: readings })
-    .from(sampleUnits)
-    .leftJoin(readings, eq(readings.unitId, sampleUnits.id))
+/**
+ * Units with their readings. The readings are asked for by lot, whose index finds them among the readings of years; a join by
+ * unit would search them all.
+ */
+function unitRows(db: Db, units: readonly UnitRows['unit'][], condition: SQL | undefined): UnitRows[] {
+  const rows = new Map(units.map((unit) => [unit.id, { unit, readings: [] as ReadingRow[] }]));
+  const found = db
+    .select()
+    .from(readings)
     .where(condition)
-    .orderBy(asc(sampleUnits.unit), asc(readings.attempt), asc(readings.receivedAt))
+    .orderBy(asc(readings.attempt), asc(readings.receivedAt))
     .all();
-  const byUnit = new Map<number, UnitRows>();
-  for (const { unit, reading } of rows) {
-    const known = byUnit.get(unit.id) ?? { unit, readings: [] };
-    if (reading) known.readings.push(reading);
-    byUnit.set(unit.id, known);
-  }
-  return [...byUnit.values()];
+  for (const reading of found) rows.get(reading.unitId)?.readings.push(reading);
+  return [...rows.values()];
 }
 
 /** All units of a lot with their readings, in draw order. */
 export function unitsOf(db: Db, lotId: number): UnitRows[] {
-  return unitRows(db, eq(sampleUnits.lotId, lotId));
+  const units = db.select().from(sampleUnits).where(eq(sampleUnits.lotId, lotId)).orderBy(asc(sampleUnits.unit)).all();
+  return unitRows(db, units, eq(readings.lotId, lotId));
 }
 
 /** One unit of a lot with its readings; undefined when the lot has no such unit. */
 export function unitOf(db: Db, lotId: number, unit: number): UnitRows | undefined {
-  return unitRows(db, and(eq(sampleUnits.lotId, lotId), eq(sampleUnits.unit, unit)))[0];
+  const found = db
+    .select()
+    .from(sampleUnits)
+    .where(and(eq(sampleUnits.lotId, lotId), eq(sampleUnits.unit, unit)))
+    .get();
+  return found && unitRows(db, [found], and(eq(readings.lotId, lotId), eq(readings.unitId, found.id)))[0];
 }
 
 /** The reading that counts for each characteristic of a unit, by characteristic id. */
