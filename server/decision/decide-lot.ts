@@ -1,6 +1,5 @@
 import { type Db } from '#db/open-database';
 import { lots } from '#db/schema/lots';
-import { people } from '#db/schema/people';
 import { type JudgedLot } from '#server/judging/sample-judging';
 import { type Caller } from '#server/caller';
 import { issueCertificate } from '#server/certificates/issue-certificate';
@@ -10,26 +9,18 @@ import { readLot } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
 import { recordLot } from '#server/lots/record-lot';
 import { openNonconformance } from '#server/nonconformances/open-nonconformance';
-import { Conflict, Forbidden, holdVersion, Refused } from '#server/problems';
+import { Conflict, Forbidden, holdVersion } from '#server/problems';
 import { type Lot } from '#shared/contract/lots';
 import { eq } from 'drizzle-orm';
 import { judgedLot, releaseObjection, releaseOwnAllowed } from './assess-lot';
 import { readingsThatCount } from '#server/judging/counting';
+import { holdPassword } from './hold-password';
 import { writeSummaries } from './write-summaries';
 
 interface Signing {
   verdict: 'accepted' | 'rejected';
   password: string;
   note: string;
-}
-
-/** Signing asks for the password once more. @throws {Refused} naming the field */
-export async function holdPassword({ db, passwords }: Context, caller: Caller, password: string): Promise<void> {
-  const found = db.select({ hash: people.passwordHash }).from(people).where(eq(people.id, caller.id)).get();
-  const right = found?.hash ? await passwords.matches(password, found.hash) : false;
-  if (right) return;
-  const message = 'This is not your password.';
-  throw new Refused('password-wrong', message, [{ path: ['password'], message }]);
 }
 
 /** A lot that waits for its decision. */

@@ -8,7 +8,8 @@ import { Conflict, holdVersion } from '#server/problems';
 import { type Lot } from '#shared/contract/lots';
 import { eq } from 'drizzle-orm';
 import { judgedLot } from './assess-lot';
-import { holdPassword, submittedLot } from './decide-lot';
+import { submittedLot } from './decide-lot';
+import { holdPassword } from './hold-password';
 
 /** Holds an acceptable lot: no verdict is signed, the lot waits on hold with the reason. */
 export async function holdLot(

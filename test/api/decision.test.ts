@@ -124,6 +124,16 @@ describe('signing', () => {
     expect((await readLot(lot.id)).status).toBe('submitted');
   });
 
+  it('is closed for a while after too many wrong passwords', async () => {
+    const lot = await submitted('lot-good');
+    for (let attempt = 1; attempt <= site.context.environment.signInAttempts; attempt += 1)
+      await sign(lot, 'accepted', { password: 'guess' }).expect(422);
+    const { body: refused } = await sign(lot, 'accepted').expect(429);
+    expect((refused as ProblemDetails).code).toBe('too-many-attempts');
+    site.clock.advance({ minutes: 16 });
+    await sign(lot, 'accepted').expect(200);
+  });
+
   it('is refused for a lot that changed since it was opened', async () => {
     const lot = await submitted('lot-good');
     await sign(lot, 'accepted', { version: lot.version - 1 }).expect(412);
