@@ -31,8 +31,14 @@ function characteristicOf(given: GivenPlan['characteristics'][number]): Characte
   const limits = { lower: given.lsl, upper: given.usl };
   const base = measured(given.key, given.class, limits);
   if (given.computed === undefined || base.kind !== 'measured') return base;
-  const { entryMode: _entryMode, instrumentKind: _instrumentKind, ...common } = base;
-  return { ...common, kind: 'computed', unit: '%', formula: COMPUTED[given.key as keyof typeof COMPUTED] };
+  const { key, name, class: nonconformityClass, condition, method, caution, ownLevel, ownAql } = base;
+  const { decimals, target, lowerLimit, upperLimit } = base;
+  return {
+    kind: 'computed',
+    ...{ key, name, class: nonconformityClass, condition, method, caution, ownLevel, ownAql },
+    ...{ unit: '%', decimals, target, lowerLimit, upperLimit },
+    formula: COMPUTED[given.key as keyof typeof COMPUTED],
+  };
 }
 
 function planOf(given: GivenPlan): RevisionBody {
