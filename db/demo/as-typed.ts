@@ -23,12 +23,6 @@ export function asTyped(value: number, { entryMode, unit, decimals }: Measured):
   return { kind: 'direct', text: inDisplayUnit(value, unit).toFixed(decimals), decimalComma: false };
 }
 
-/** The same reading with the probe's switch forgotten: ten times too high. */
-export function withProbeForgotten(entry: ReadingEntry): ReadingEntry {
-  if (entry.kind !== 'scope') return entry;
-  return { kind: 'scope', scope: { ...entry.scope, probeFactor: entry.scope.probeFactor * 10 } };
-}
-
 /** A value as a rack writes it into its file. */
 export function asRackText(value: number, { unit, decimals }: Measured): string {
   return inDisplayUnit(value, unit).toFixed(decimals + 1);

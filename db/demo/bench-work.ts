@@ -1,7 +1,8 @@
 import { type ReadingBody, type ReadingEntry } from '#shared/contract/bench';
 import { type Characteristic } from '#shared/contract/plans';
-import { asTyped, withProbeForgotten } from './as-typed';
+import { asTyped } from './as-typed';
 import { type Chance } from './chance';
+import { slipOf } from './slips';
 import { type UnitTruth } from './unit-readings';
 import { later } from './work-days';
 
@@ -24,13 +25,8 @@ export interface TypedReading {
 /** How long a reading takes, in minutes; a unit is changed meanwhile. */
 const FASTEST = 0.13;
 const SLOWEST = 0.21;
-/** How often a scope reading is a slip that its inspector sees and repeats. */
-const SLIPS = 0.004;
-
-const PROBE_REPEAT: ReadingBody['repeat'] = {
-  reason: 'wrong-range',
-  note: 'The probe switch was taken to stand at ×10.',
-};
+/** How often a reading is a slip that its inspector sees and repeats. */
+const SLIPS = 0.003;
 
 function entryOf(content: Characteristic, { values, failures }: UnitTruth): ReadingEntry {
   if (content.kind === 'measured') {
@@ -45,11 +41,11 @@ function entryOf(content: Characteristic, { values, failures }: UnitTruth): Read
 /** The reading, before it in a few cases a slip that it repeats. */
 function typed(content: Characteristic, truth: UnitTruth, chance: Chance): Pick<TypedReading, 'entry' | 'repeat'>[] {
   const entry = entryOf(content, truth);
-  const slips = entry.kind === 'scope' && chance.happens(SLIPS);
-  if (!slips) return [{ entry, repeat: null }];
+  const slip = chance.happens(SLIPS) ? slipOf(content, entry) : undefined;
+  if (!slip) return [{ entry, repeat: null }];
   return [
-    { entry: withProbeForgotten(entry), repeat: null },
-    { entry, repeat: PROBE_REPEAT },
+    { entry: slip.entry, repeat: null },
+    { entry, repeat: slip.repeat },
   ];
 }
 

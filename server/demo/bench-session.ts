@@ -42,7 +42,9 @@ export class BenchSession {
     const { work, sample, endsAtStop, afterwards } = this.session;
     const next = work[this.done];
     const last = work[this.done - 1];
-    if (next && !(endsAtStop && sample.stopped)) this.agenda.add(next.at, () => this.measure());
+    // A slip may reach the rejection number for a moment; it is repeated before anybody stops.
+    const ends = endsAtStop && sample.stopped && next?.repeat === null;
+    if (next && !ends) this.agenda.add(next.at, () => this.measure());
     else if (last) afterwards(last.at);
   }
 
