@@ -23,3 +23,8 @@ export function sentenceCase(name: string): string {
   const words = name.replaceAll('-', ' ');
   return words.charAt(0).toUpperCase() + words.slice(1);
 }
+
+/** A made-up id is known by its first part; a number is short as it is. */
+export function shortId(id: string): string {
+  return /^[0-9a-f]{8}-[0-9a-f-]{27}$/.test(id) ? id.slice(0, 8) : id;
+}

@@ -11,7 +11,7 @@ import { PageState } from '../../ui/page-state/page-state';
 import { EmptyState } from '../../ui/states/empty-state';
 import { MomentPipe } from '../../ui/values/moment-pipe';
 import { AuditDifference } from '../audit-difference/audit-difference';
-import { sentenceCase, subjectTitle } from '../audit-words';
+import { sentenceCase, shortId, subjectTitle } from '../audit-words';
 import { AuditFilter, type AuditQuery } from './audit-filter';
 import { ChainCheck } from './chain-check';
 
@@ -42,6 +42,7 @@ export class AuditPage {
 
   protected readonly subjectTitle = subjectTitle;
   protected readonly sentenceCase = sentenceCase;
+  protected readonly shortId = shortId;
 
   protected filter(query: AuditQuery): void {
     const queryParams = { subject: query.subject || null, subjectId: query.subjectId || null };
