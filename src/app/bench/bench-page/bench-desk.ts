@@ -1,4 +1,5 @@
 import {
+  afterNextRender,
   ChangeDetectionStrategy,
   Component,
   effect,
@@ -74,6 +75,11 @@ export class BenchDesk {
     effect(() => {
       this.sheet.open(this.bench());
       untracked(() => this.cursor.start());
+    });
+    // Typing goes to the grid at once, unless the person is already somewhere else on the page.
+    afterNextRender(() => {
+      if (document.activeElement === document.body || document.activeElement?.id === 'content')
+        this.grid()?.focusCell();
     });
     effect(() => this.cursor.merged.set(this.merged()));
     effect(() => {

@@ -36,7 +36,8 @@ export class BenchHead {
   protected readonly sampling = computed(() => this.sheet.bench().sampling);
   protected readonly planLine = computed(() => {
     const { level, severity, sampleSize, groups } = this.sampling();
-    const letters = [...new Set(groups.map(({ codeLetter }) => codeLetter))].join(', ');
+    const ofPlan = groups.filter((group) => group.level === level);
+    const letters = [...new Set((ofPlan.length > 0 ? ofPlan : groups).map(({ codeLetter }) => codeLetter))].join(', ');
     return `Level ${level}, letter ${letters}, n = ${sampleSize}, ${severity}`;
   });
   protected readonly inUse = computed(() => this.instruments.allInUse());

@@ -19,6 +19,7 @@ import { BenchSettings } from '../bench-settings';
     :host {
       display: flex;
       flex: none;
+      align-items: flex-start;
       gap: 22px;
       height: 30px;
       overflow: hidden;
@@ -27,7 +28,6 @@ import { BenchSettings } from '../bench-settings';
       white-space: nowrap;
     }
     button {
-      height: 24px;
       padding: 0;
       border: 0;
       background: none;

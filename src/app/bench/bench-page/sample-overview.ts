@@ -13,7 +13,8 @@ import { BenchSheet } from '../sheet/bench-sheet';
       <div class="head">
         <span class="label">Sample</span>
         <span class="num"
-          ><b>{{ sheet.judgedUnits() }}</b> <span class="caption">of {{ sheet.records().length }} judged</span></span
+          ><b>{{ sheet.judgedUnits() }}</b
+          >&ngsp;<span class="caption">of {{ sheet.records().length }} judged</span></span
         >
       </div>
       <qr-tally [states]="sheet.states()" [current]="cursor.at().unit - 1" [axis]="true" [note]="note()" />

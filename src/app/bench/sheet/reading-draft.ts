@@ -1,4 +1,4 @@
-import { computed, inject, Injectable, linkedSignal, signal } from '@angular/core';
+import { computed, inject, Injectable, linkedSignal, signal, untracked } from '@angular/core';
 import { readingEntry, type ReadingBody, type ReadingEntry } from '#shared/contract/bench';
 import { type Characteristic } from '#shared/contract/plans';
 import { EMPTY_SCOPE, heightFields, readScopeText, type ScopeText } from '../../ui/scope-reader/scope-text';
@@ -26,7 +26,10 @@ export class ReadingDraft {
   private readonly place = computed(() => ({ ...this.cursor.at(), begun: this.begun() }));
 
   readonly text = linkedSignal({ source: this.place, computation: () => '' });
-  readonly scope = linkedSignal<unknown, ScopeText>({ source: this.place, computation: () => this.freshScope() });
+  readonly scope = linkedSignal<unknown, ScopeText>({
+    source: this.place,
+    computation: () => untracked(() => this.freshScope()),
+  });
   readonly pass = linkedSignal<unknown, boolean | null>({ source: this.place, computation: () => null });
   readonly failReason = linkedSignal({ source: this.place, computation: () => '' });
   readonly note = linkedSignal({ source: this.place, computation: () => '' });

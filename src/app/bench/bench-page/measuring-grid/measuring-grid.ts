@@ -128,13 +128,15 @@ export class MeasuringGrid {
     return this.scroller().nativeElement.querySelector('qr-grid-row.current .focused');
   }
 
-  /** Scrolls the row in focus between the head and the summary. */
+  /** Scrolls the row in focus between the head and the summary, with two rows around it in view. */
   private reveal(): void {
     const view = this.scroller().nativeElement;
-    const top = (this.cursor.at().unit - 1) * this.rowHeight();
+    const row = this.rowHeight();
+    const top = (this.cursor.at().unit - 1) * row;
     const room = view.clientHeight - this.head().nativeElement.offsetHeight - this.foot().nativeElement.offsetHeight;
-    if (top < view.scrollTop) view.scrollTop = top;
-    else if (top + this.rowHeight() > view.scrollTop + room) view.scrollTop = top + this.rowHeight() - room;
+    const around = Math.min(2 * row, Math.max((room - row) / 2, 0));
+    if (top - around < view.scrollTop) view.scrollTop = top - around;
+    else if (top + row + around > view.scrollTop + room) view.scrollTop = top + row + around - room;
     this.scroll();
   }
 

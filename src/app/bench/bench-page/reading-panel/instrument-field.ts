@@ -10,9 +10,14 @@ import { InstrumentChoice } from '../../sheet/instrument-choice';
   selector: 'qr-instrument-field',
   imports: [InstrumentDue, MatFormFieldModule, MatSelectModule],
   template: `
+    <span class="label" id="instrument-kind">{{ title() }}</span>
     <mat-form-field>
-      <mat-label>{{ title() }}</mat-label>
-      <mat-select [value]="choice.chosen()?.id" placeholder="Choose" (valueChange)="choose($event)">
+      <mat-select
+        aria-labelledby="instrument-kind"
+        [value]="choice.chosen()?.id"
+        placeholder="Choose"
+        (valueChange)="choose($event)"
+      >
         <mat-select-trigger>
           @if (choice.chosen(); as chosen) {
             <span class="option"
@@ -35,7 +40,10 @@ import { InstrumentChoice } from '../../sheet/instrument-choice';
   `,
   styles: `
     :host {
-      display: block;
+      display: grid;
+      grid-template-columns: max-content minmax(0, 1fr);
+      gap: 12px;
+      align-items: center;
     }
     .option {
       display: flex;

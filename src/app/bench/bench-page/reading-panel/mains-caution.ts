@@ -1,6 +1,9 @@
+/** What always stands in view: who may measure, and to what every caution defers. */
+export const TRAINED_ONLY = 'Trained persons only. Site rules come first.';
+
 /**
  * The usual cautions of measuring mains-powered supplies, as they stand beside every measurement whose plan states a caution.
- * Common practice, no source; site rules come first, as the last sentence says.
+ * Common practice, no source; the last sentences say to what they defer.
  */
 export const MAINS_CAUTIONS: readonly string[] = [
   'Never lift the protective earth of an instrument.',
@@ -9,11 +12,6 @@ export const MAINS_CAUTIONS: readonly string[] = [
   'Discharge filter capacitors, also after an insulation test, and check before touching.',
   'A withstand tester needs its interlock and an assistant who knows the emergency stop.',
   'Parts may be hot. An opened adapter does not go back to stock.',
+  'Local electrical-safety rules, the procedures of the site and licensed practice take precedence over this program.',
+  'A certificate states that the sampled lot conforms to its plan; it is no product-safety approval.',
 ];
-
-/** Who may measure. */
-export const TRAINED_ONLY = 'Trained persons only.';
-
-/** To what every caution defers. */
-export const RULES_COME_FIRST =
-  'Local electrical-safety rules, the procedures of the site and licensed practice take precedence over this program. A certificate states that the sampled lot conforms to its plan; it is no product-safety approval.';

@@ -1,23 +1,27 @@
-import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { CautionNote } from '../../../ui/states/caution-note';
-import { MAINS_CAUTIONS, RULES_COME_FIRST, TRAINED_ONLY } from './mains-caution';
+import { MAINS_CAUTIONS, TRAINED_ONLY } from './mains-caution';
 
-/** The caution of the characteristic in focus, with the usual ones; shown as long as the focus is there. */
+/** The caution of the characteristic in focus, with the usual ones; it stands as long as the focus is there. */
 @Component({
   selector: 'qr-panel-caution',
   imports: [CautionNote],
   template: `
-    <qr-caution-note [title]="caution()">
-      {{ trainedOnly }}
-      <details [open]="open()">
-        <summary>Before you measure</summary>
+    <qr-caution-note [title]="parts().first">
+      @if (!short()) {
+        {{ parts().rest }}
+      }
+      <details>
+        <summary>{{ trainedOnly }}</summary>
+        @if (short()) {
+          {{ parts().rest }}
+        }
         <ul>
           @for (sentence of cautions; track sentence) {
             <li>{{ sentence }}</li>
           }
         </ul>
       </details>
-      <p>{{ rulesComeFirst }}</p>
     </qr-caution-note>
   `,
   styles: `
@@ -25,33 +29,42 @@ import { MAINS_CAUTIONS, RULES_COME_FIRST, TRAINED_ONLY } from './mains-caution'
       display: block;
     }
     summary {
-      display: inline-block;
-      color: var(--qr-primary);
-      font-weight: 500;
-      text-decoration: underline;
-      text-underline-offset: 3px;
+      min-height: 24px;
+      color: var(--qr-hold-text);
+      font: var(--qr-t-label);
+      line-height: 24px;
       cursor: pointer;
     }
-    details {
-      display: inline;
+    details[open] {
+      max-height: 220px;
+      overflow-y: auto;
     }
     ul {
       margin: 4px 0;
       padding-left: 16px;
     }
-    p {
-      margin-top: 2px;
-      color: var(--qr-ink-2);
-      font: var(--qr-t-caption);
+    :host(.short) {
+      details:not([open]) {
+        display: inline-block;
+      }
+      qr-caution-note {
+        padding-block: 4px;
+      }
     }
   `,
+  host: { '[class.short]': 'short()' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PanelCaution {
   readonly caution = input.required<string>();
-  readonly open = input(false);
+  /** Whether the screen is low: the first sentence stands, the rest opens. */
+  readonly short = input(false);
 
+  /** The first sentence stands out. */
+  protected readonly parts = computed(() => {
+    const [, first = this.caution(), rest = ''] = /^(.+?[.:;])\s+(.*)$/s.exec(this.caution()) ?? [];
+    return { first, rest };
+  });
   protected readonly trainedOnly = TRAINED_ONLY;
   protected readonly cautions = MAINS_CAUTIONS;
-  protected readonly rulesComeFirst = RULES_COME_FIRST;
 }

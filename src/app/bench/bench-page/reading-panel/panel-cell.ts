@@ -1,5 +1,6 @@
 import { computed, inject, Injectable } from '@angular/core';
 import { REPEAT_REASON_TITLES } from '#shared/contract/bench';
+import { formatNumber } from '#shared/quantities/format-number';
 import { MOST_REPEATS } from '#shared/verdict/counting-reading';
 import { LOOK_WORDS, lookOf } from '../../../ui/verdict-look';
 import { BenchCursor } from '../../sheet/bench-cursor';
@@ -37,7 +38,7 @@ export class PanelCell {
   });
   readonly place = computed(() => {
     const { position, carton } = this.cursor.record();
-    return `Position ${position}, carton ${carton}`;
+    return `Position ${formatNumber(position, 0)}, carton ${formatNumber(carton, 0)}`;
   });
   /** "Repeat 1 of 2: poor contact" while a reading is being repeated. */
   readonly repeating = computed(() => {
