@@ -10,7 +10,7 @@ import { type Context, systemClock } from './context';
 import { playDemo } from './demo/play-demo';
 import { type Environment, EnvironmentRefused } from './environment';
 import { Stream } from './events/stream';
-import { startOutbox } from './mail/outbox';
+import { type Outbox, startOutbox } from './mail/outbox';
 import { startSmtpFake } from './mail/smtp-fake';
 import { smtpTransport } from './mail/transport';
 import { type Passwords, workerPasswords } from './sessions/passwords';
@@ -44,16 +44,23 @@ async function startOn(db: Database, environment: Environment, passwords: Passwo
   };
 }
 
+/** While the demo is made nothing is sent but what the demo itself sends, at its own time. */
+const QUIET_OUTBOX: Outbox = { wake: () => undefined, close: () => Promise.resolve(), idle: () => Promise.resolve() };
+
 /** The demo is made in a file of its own and put in place when it is whole, so that a stop in between leaves nothing half made. */
 async function makeDemo(file: string, environment: Environment, passwords: Passwords): Promise<void> {
   const draft = `${file}.being-made`;
   for (const leftOver of [draft, `${draft}-wal`, `${draft}-shm`]) rmSync(leftOver, { force: true });
   const db = openDatabase(draft, environment.root);
   db.$client.pragma('synchronous = OFF');
-  const running = await startOn(db, environment, passwords);
-  await playDemo(running.context, { until: new Date(), seed: DEMO_SEED });
+  const clock = systemClock;
+  const stream = new Stream({ db, clock });
+  const log = pino({ level: environment.logLevel });
+  const context = { db, clock, environment, log, passwords, outbox: QUIET_OUTBOX, stream };
+  await playDemo(context, { until: clock.now(), seed: DEMO_SEED });
+  stream.close();
   db.$client.pragma('wal_checkpoint(TRUNCATE)');
-  await running.close();
+  db.$client.close();
   renameSync(draft, file);
 }
 

@@ -2,8 +2,7 @@ import { type Db } from '#db/open-database';
 import { lots } from '#db/schema/lots';
 import { cursorFault } from '#server/page-after';
 import { STATIONS, type LotHead, type Station } from '#shared/contract/lots';
-import { and, asc, desc, eq, gt, inArray, lt, or, type SQL } from 'drizzle-orm';
-import { type SQLiteColumn } from 'drizzle-orm/sqlite-core';
+import { and, asc, desc, eq, gt, inArray, lt, or, sql, type SQL } from 'drizzle-orm';
 import { headOf, lotsJoined, waitingTarget, type LotRow } from './lot-rows';
 
 interface ListQuery {
@@ -15,17 +14,28 @@ interface ListQuery {
 }
 
 /** By which instant a station's lots are listed, and which way. */
-const ORDERS = {
-  arrivals: { column: lots.arrivedAt, newestFirst: false, of: (lot: LotRow) => lot.arrivedAt },
-  bench: { column: lots.drawnAt, newestFirst: false, of: (lot: LotRow) => lot.drawnAt },
-  decision: { column: lots.submittedAt, newestFirst: false, of: (lot: LotRow) => lot.submittedAt },
-  released: { column: lots.decidedAt, newestFirst: true, of: (lot: LotRow) => lot.decidedAt },
-  'on-hold': { column: lots.decidedAt, newestFirst: true, of: (lot: LotRow) => lot.decidedAt },
-  all: { column: lots.arrivedAt, newestFirst: true, of: (lot: LotRow) => lot.arrivedAt },
-} as const;
+interface Order {
+  column: SQL;
+  newestFirst: boolean;
+  of(lot: LotRow): string | null;
+}
+const byArrival = { column: sql`${lots.arrivedAt}`, of: (lot: LotRow) => lot.arrivedAt };
+const ORDERS: Record<Station | 'all', Order> = {
+  arrivals: { ...byArrival, newestFirst: false },
+  bench: { column: sql`${lots.drawnAt}`, newestFirst: false, of: (lot) => lot.drawnAt },
+  decision: { column: sql`${lots.submittedAt}`, newestFirst: false, of: (lot) => lot.submittedAt },
+  released: { column: sql`${lots.decidedAt}`, newestFirst: true, of: (lot) => lot.decidedAt },
+  // A lot that quality holds although acceptable is not decided: it stands by its submission.
+  'on-hold': {
+    column: sql`coalesce(${lots.decidedAt}, ${lots.submittedAt})`,
+    newestFirst: true,
+    of: (lot) => lot.decidedAt ?? lot.submittedAt,
+  },
+  all: { ...byArrival, newestFirst: true },
+};
 
 /** A cursor is the instant and the id of the last line of the page before. */
-function beyond(column: SQLiteColumn, newestFirst: boolean, cursor: string): SQL | undefined {
+function beyond(column: SQL, newestFirst: boolean, cursor: string): SQL | undefined {
   const [at, idText] = cursor.split('|');
   const id = Number(idText);
   if (at === undefined || !Number.isInteger(id)) throw cursorFault();
