@@ -23,6 +23,9 @@ import { MessageNote } from '../ui/states/message-note';
     }
   `,
   styles: `
+    :host {
+      display: block;
+    }
     qr-message-note {
       margin-top: 8px;
     }

@@ -20,10 +20,10 @@ type Notice = Nonconformance['notices'][number];
         <div>
           @switch (notice.status) {
             @case ('sent') {
-              <b>E-mail sent</b> <span class="mono">{{ notice.sentAt | moment }}</span>
+              <b>E-mail sent</b>&ngsp;<span class="mono">{{ notice.sentAt | moment }}</span>
             }
             @case ('queued') {
-              <b>E-mail waits to be sent</b> <span class="mono">since {{ notice.queuedAt | moment }}</span>
+              <b>E-mail waits to be sent</b>&ngsp;<span class="mono">since {{ notice.queuedAt | moment }}</span>
             }
             @default {
               <qr-verdict-chip look="nok" word="E-mail could not be sent" />

@@ -12,7 +12,7 @@ import { minuteClock } from '../minute-clock';
     <div class="page narrow">
       <h1 class="unseen">Arrived lot</h1>
       <qr-back-link to="/arrivals">Arrivals</qr-back-link>
-      <section class="sheet pad"><qr-arrival-panel [lotId]="id()" [now]="now()" (changed)="leave()" /></section>
+      <section class="sheet"><qr-arrival-panel class="pad" [lotId]="id()" [now]="now()" (changed)="leave()" /></section>
     </div>
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

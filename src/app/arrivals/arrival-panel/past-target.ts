@@ -13,7 +13,7 @@ import { MomentPipe } from '../../ui/values/moment-pipe';
         <qr-icon name="clock" [size]="18" />
         <span>
           @if (past() > 0) {
-            <b>{{ past() | duration }} past target.</b>
+            <b>{{ past() | duration }} past target.</b>&ngsp;
           }
           @if (neededBy(); as moment) {
             @if (missed()) {

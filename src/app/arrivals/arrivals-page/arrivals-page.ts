@@ -86,7 +86,7 @@ export class ArrivalsPage {
       { value: formatNumber(queue.length, 0), caption: queue.length === 1 ? 'lot waiting' : 'lots waiting' },
       { value: durationText(longest), caption: 'longest wait' },
       { value: formatNumber(toSample, 0), caption: 'units to sample' },
-      { value: formatNumber(this.count('differs'), 0), caption: 'counts that differ' },
+      { value: formatNumber(this.count('differs'), 0), caption: 'counts differ' },
     ];
   });
 

@@ -6,6 +6,7 @@ import { PageLinks } from '../../shell/page-links';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
 import { EmptyState } from '../../ui/states/empty-state';
+import { PartName } from '../../ui/part-name';
 import { CountPipe } from '../../ui/values/count-pipe';
 import { MomentPipe } from '../../ui/values/moment-pipe';
 import { CertificateStatus } from '../certificate-status';
@@ -13,7 +14,7 @@ import { CertificateStatus } from '../certificate-status';
 /** All certificates of conformance, newest first. */
 @Component({
   selector: 'qr-certificate-list-page',
-  imports: [CertificateStatus, CountPipe, EmptyState, Loaded, MomentPipe, PageLinks, PageState, RouterLink],
+  imports: [CertificateStatus, CountPipe, EmptyState, Loaded, MomentPipe, PageLinks, PageState, PartName, RouterLink],
   templateUrl: './certificate-list-page.html',
   styles: `
     .name {

@@ -9,13 +9,25 @@ import { VerdictChip } from '../../ui/marks/verdict-chip';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
 import { EmptyState } from '../../ui/states/empty-state';
+import { PartName } from '../../ui/part-name';
 import { CountPipe } from '../../ui/values/count-pipe';
 import { MomentPipe } from '../../ui/values/moment-pipe';
 
 /** Measured lots that wait for quality's signature, the longest waiting first. */
 @Component({
   selector: 'qr-decision-list-page',
-  imports: [CountPipe, EmptyState, Loaded, MomentPipe, PageLinks, PageState, RouterLink, SeverityMark, VerdictChip],
+  imports: [
+    CountPipe,
+    EmptyState,
+    Loaded,
+    MomentPipe,
+    PageLinks,
+    PageState,
+    PartName,
+    RouterLink,
+    SeverityMark,
+    VerdictChip,
+  ],
   templateUrl: './decision-list-page.html',
   styleUrl: './decision-list-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, effect, inject, input, numberAttribute } from '@angular/core';
+import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { readAssessment } from '#shared/contract/decision';
 import { endpointResource } from '../../data/api';
@@ -23,6 +24,7 @@ import { SigningPanel } from './signing-panel';
     Loaded,
     LotHead,
     LotHistory,
+    MatButton,
     MeasuredWith,
     PageState,
     PlateOfLot,

@@ -4,14 +4,17 @@ import { LimitRug } from '../../ui/limit-strip/limit-rug';
 import { ClassGlyph } from '../../ui/marks/class-glyph';
 import { LimitsPipe } from '../../ui/values/limits-pipe';
 import { ReadingPipe } from '../../ui/values/reading-pipe';
-import { characteristicRow } from './characteristic-row';
+import { readingDigits } from '../../ui/values/reading-text';
+import { displayUnit } from '#shared/quantities/format-quantity';
+import { characteristicRow, type CharacteristicRow } from './characteristic-row';
 import { ReadingTable } from './reading-table';
 import { unitNumbers } from './unit-look';
+import { ScrollRegion } from '../../ui/scroll-region';
 
 /** What failed, characteristic by characteristic, then what conforms; every single reading on demand. */
 @Component({
   selector: 'qr-characteristic-results',
-  imports: [ClassGlyph, LimitRug, LimitsPipe, ReadingPipe, ReadingTable],
+  imports: [ClassGlyph, LimitRug, LimitsPipe, ReadingPipe, ReadingTable, ScrollRegion],
   templateUrl: './characteristic-results.html',
   styleUrl: './characteristic-results.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -24,4 +27,14 @@ export class CharacteristicResults {
   protected readonly conforming = computed(() => this.rows().filter((row) => row.failedUnits.length === 0));
   protected readonly all = signal(false);
   protected readonly unitNumbers = unitNumbers;
+
+  /** A figure without its unit, which stands under the characteristic's name; a mean has one decimal more. */
+  protected digits(value: number | null, { unit, decimals }: { unit: string; decimals: number }, more = 0): string {
+    return value === null ? '' : readingDigits(value, unit, decimals + more);
+  }
+
+  protected unitLine({ scale, condition }: CharacteristicRow): string {
+    const unit = scale === null ? '' : displayUnit(scale.unit).label;
+    return [unit, condition].filter((part) => part !== '').join(', ');
+  }
 }

@@ -27,6 +27,7 @@ export interface CharacteristicRow {
 
 export function characteristicRow(result: Result): CharacteristicRow {
   const { characteristic, readings } = result;
+  const failed = new Set(result.failedUnits);
   const attribute = characteristic.kind === 'attribute';
   const { min, mean, max, s, worst, failedUnits, failReasons, n } = result;
   return {
@@ -43,7 +44,7 @@ export function characteristicRow(result: Result): CharacteristicRow {
           upper: characteristic.upperLimit,
         },
     requirement: attribute ? characteristic.requirement : '',
-    rug: readings.flatMap(({ value, pass }) => (value === null ? [] : [{ value, nonconforming: pass === false }])),
+    rug: readings.flatMap(({ value, unit }) => (value === null ? [] : [{ value, nonconforming: failed.has(unit) }])),
     ...{ n, min, mean, max, s, worst, failedUnits, failReasons, readings },
   };
 }

@@ -4,6 +4,7 @@ import { VerdictMark } from '../../ui/marks/verdict-mark';
 import { readingDigits } from '../../ui/values/reading-text';
 import { displayUnit } from '#shared/quantities/format-quantity';
 import { characteristicRow, type CharacteristicRow } from './characteristic-row';
+import { ScrollRegion } from '../../ui/scroll-region';
 
 interface Cell {
   readonly text: string;
@@ -13,10 +14,9 @@ interface Cell {
 /** Every reading that counts: a row for each unit of the sample, a column for each characteristic. */
 @Component({
   selector: 'qr-reading-table',
-  imports: [VerdictMark],
+  imports: [ScrollRegion, VerdictMark],
   template: `
-    <!-- A region that scrolls is reached with the keyboard. -->
-    <div class="scroll" tabindex="0" role="region" aria-label="Readings that count">
+    <div class="scroll" qrScrollRegion="Readings that count">
       <table class="table">
         <thead>
           <tr>
@@ -93,9 +93,12 @@ export class ReadingTable {
   });
 }
 
-function cellOf({ scale }: CharacteristicRow, reading: CharacteristicRow['readings'][number] | undefined): Cell {
+function cellOf(
+  { scale, failedUnits }: CharacteristicRow,
+  reading: CharacteristicRow['readings'][number] | undefined,
+): Cell {
   if (reading === undefined || (reading.value === null && reading.pass === null)) return { text: '', failed: false };
-  const failed = reading.pass === false;
+  const failed = failedUnits.includes(reading.unit);
   if (scale === null || reading.value === null) return { text: failed ? 'Fail' : 'Pass', failed };
   return { text: readingDigits(reading.value, scale.unit, scale.decimals), failed };
 }

@@ -34,11 +34,4 @@ export class SamplingFacts {
     return (groups.find((group) => group.level === level) ?? groups[0])?.codeLetter ?? '';
   });
   protected readonly wholeLot = computed(() => this.sampling().groups.some((group) => group.wholeLot));
-  /** Which groups need more or fewer units than most, such as "125 for critical". */
-  protected readonly exceptions = computed(() => {
-    const { groups, sampleSize } = this.sampling();
-    return groups
-      .filter((group) => group.sampleSize !== sampleSize)
-      .map((group) => ({ key: group.key, n: group.sampleSize, class: group.class }));
-  });
 }

@@ -8,6 +8,7 @@ import { VerdictChip } from '../../ui/marks/verdict-chip';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
 import { EmptyState } from '../../ui/states/empty-state';
+import { PartName } from '../../ui/part-name';
 import { CountPipe } from '../../ui/values/count-pipe';
 import { MomentPipe } from '../../ui/values/moment-pipe';
 import { addressId } from '../part-supplier-filter/address-id';
@@ -38,6 +39,7 @@ const WORDS = {
     MomentPipe,
     PageLinks,
     PageState,
+    PartName,
     PartSupplierFilter,
     RouterLink,
     SeverityMark,

@@ -13,8 +13,8 @@ import { endpointResource } from '../../data/api';
   template: `
     <mat-form-field>
       <mat-label>Part</mat-label>
-      <mat-select [value]="part()" (selectionChange)="choose('part', $event.value)">
-        <mat-option [value]="undefined">All parts</mat-option>
+      <mat-select [value]="part() ?? 0" (selectionChange)="choose('part', $event.value)">
+        <mat-option [value]="0">All parts</mat-option>
         @for (choice of partChoices(); track choice.id) {
           <mat-option [value]="choice.id">{{ choice.number }}, {{ choice.name }}</mat-option>
         }
@@ -22,8 +22,8 @@ import { endpointResource } from '../../data/api';
     </mat-form-field>
     <mat-form-field>
       <mat-label>Supplier</mat-label>
-      <mat-select [value]="supplier()" (selectionChange)="choose('supplier', $event.value)">
-        <mat-option [value]="undefined">All suppliers</mat-option>
+      <mat-select [value]="supplier() ?? 0" (selectionChange)="choose('supplier', $event.value)">
+        <mat-option [value]="0">All suppliers</mat-option>
         @for (choice of supplierChoices(); track choice.id) {
           <mat-option [value]="choice.id">{{ choice.name }}</mat-option>
         }
@@ -40,6 +40,12 @@ import { endpointResource } from '../../data/api';
       flex: 1 1 200px;
       max-width: 280px;
     }
+    @media (max-width: 599px) {
+      mat-form-field {
+        flex-basis: 140px;
+        max-width: none;
+      }
+    }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
@@ -55,8 +61,8 @@ export class PartSupplierFilter {
   protected readonly supplierChoices = computed(() => (this.suppliers.hasValue() ? this.suppliers.value().items : []));
 
   /** Another choice starts the list at its first page. */
-  protected choose(name: 'part' | 'supplier', id: number | undefined): void {
-    const queryParams = { [name]: id ?? null, after: null };
+  protected choose(name: 'part' | 'supplier', id: number): void {
+    const queryParams = { [name]: id || null, after: null };
     void this.router.navigate([], { queryParams, queryParamsHandling: 'merge' });
   }
 }

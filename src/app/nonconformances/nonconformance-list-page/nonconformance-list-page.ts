@@ -6,12 +6,13 @@ import { PageLinks } from '../../shell/page-links';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
 import { EmptyState } from '../../ui/states/empty-state';
+import { PartName } from '../../ui/part-name';
 import { MomentPipe } from '../../ui/values/moment-pipe';
 
 /** All nonconformances, newest first. */
 @Component({
   selector: 'qr-nonconformance-list-page',
-  imports: [EmptyState, Loaded, MomentPipe, PageLinks, PageState, RouterLink],
+  imports: [EmptyState, Loaded, MomentPipe, PageLinks, PageState, PartName, RouterLink],
   templateUrl: './nonconformance-list-page.html',
   styles: `
     .name {

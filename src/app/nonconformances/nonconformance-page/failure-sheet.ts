@@ -4,18 +4,19 @@ import { LimitStrip } from '../../ui/limit-strip/limit-strip';
 import { ClassGlyph } from '../../ui/marks/class-glyph';
 import { LimitsPipe } from '../../ui/values/limits-pipe';
 import { ReadingPipe } from '../../ui/values/reading-pipe';
+import { ScrollRegion } from '../../ui/scroll-region';
 
 /** One characteristic that failed, with its limits and the readings outside them, as they stood at the rejection. */
 @Component({
   selector: 'qr-failure-sheet',
-  imports: [ClassGlyph, LimitsPipe, LimitStrip, ReadingPipe],
+  imports: [ClassGlyph, LimitStrip, LimitsPipe, ReadingPipe, ScrollRegion],
   template: `
     @let shown = failure();
     <section class="sheet">
       <div class="head">
         <h3>{{ shown.name }}</h3>
         <qr-class-glyph [of]="shown.class" />
-        <span class="num actions">
+        <span class="actions" [class.num]="shown.unit !== null">
           @if (shown.unit !== null) {
             {{ { lower: shown.lowerLimit, upper: shown.upperLimit } | limits: shown.unit : shown.decimals }}
           } @else {
@@ -23,7 +24,7 @@ import { ReadingPipe } from '../../ui/values/reading-pipe';
           }
         </span>
       </div>
-      <div class="scroll-x">
+      <div [qrScrollRegion]="shown.name">
         <table class="table">
           <thead>
             <tr>
@@ -64,7 +65,7 @@ import { ReadingPipe } from '../../ui/values/reading-pipe';
     </section>
   `,
   styles: `
-    .num.actions {
+    .head .num {
       white-space: normal;
     }
   `,

@@ -16,6 +16,9 @@ import { FailureSheet } from './failure-sheet';
   imports: [BackLink, FailureSheet, Loaded, MomentPipe, NoticeList, PageState, RouterLink],
   templateUrl: './nonconformance-page.html',
   styles: `
+    .stack {
+      grid-template-columns: minmax(0, 1fr);
+    }
     h2 {
       margin-bottom: 8px;
     }

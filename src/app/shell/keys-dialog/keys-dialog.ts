@@ -7,6 +7,11 @@ const EVERYWHERE = [
   { keys: ['Alt', '1 to 6'], does: 'Go to a station: arrivals, bench, decision, released, on hold, trends' },
   { keys: ['?'], does: 'Show these keys' },
 ];
+const ARRIVALS = [
+  { keys: ['R'], does: 'Receive a lot' },
+  { keys: ['Up', 'Down'], does: 'Choose a lot of the queue' },
+  { keys: ['Enter'], does: 'Start the inspection of the chosen lot' },
+];
 const BENCH = [
   { keys: ['0 to 9'], does: 'Start or replace the reading' },
   { keys: ['Enter'], does: 'Keep it, go to the next unit; a nonconforming reading needs it twice' },
@@ -65,6 +70,7 @@ const BENCH = [
 export class KeysDialog {
   protected readonly groups = [
     { title: 'Everywhere', keys: EVERYWHERE },
+    { title: 'In arrivals', keys: ARRIVALS },
     { title: 'At the bench', keys: BENCH },
   ];
 }

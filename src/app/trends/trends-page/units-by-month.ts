@@ -4,7 +4,7 @@ import { elementWidth } from '../../ui/element-width';
 import { shareText } from '../share-text';
 import { CHART, labelStep, monthPlaces } from './month-scale';
 
-const MARGIN = 56;
+const MARGIN = 68;
 
 /** Shares of a scale in steps that people read easily: from the highest of these below all points, up to 100 %. */
 const FLOORS = [0.99, 0.98, 0.95, 0.9, 0.8, 0.5, 0];
@@ -16,7 +16,7 @@ const FLOORS = [0.99, 0.98, 0.95, 0.9, 0.8, 0.5, 0];
     <svg [attr.width]="width()" [attr.height]="height" role="img" [attr.aria-label]="sentence()">
       @for (line of grid(); track line.y) {
         <path class="grid" [attr.d]="line.d" />
-        <text class="scale" x="48" [attr.y]="line.y + 4">{{ line.label }}</text>
+        <text class="scale" x="60" [attr.y]="line.y + 4">{{ line.label }}</text>
       }
       <path class="line" [attr.d]="path()" />
       @for (point of points(); track point.key) {

@@ -3,16 +3,20 @@ import { RouterLink } from '@angular/router';
 import { type YieldRow } from '#shared/contract/yields';
 import { CountPipe } from '../../ui/values/count-pipe';
 import { shareText } from '../share-text';
+import { ScrollRegion } from '../../ui/scroll-region';
 
 /** Yields as a table: every share with the counts it comes from, and the total below. */
 @Component({
   selector: 'qr-yield-table',
-  imports: [CountPipe, RouterLink],
+  imports: [CountPipe, RouterLink, ScrollRegion],
   templateUrl: './yield-table.html',
   styles: `
     .name {
       max-width: 360px;
       overflow-wrap: anywhere;
+    }
+    .quiet {
+      margin-left: 6px;
     }
     tfoot td {
       border-top: 1px solid var(--qr-line-2);

@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, ElementRef, inject, input, output }
 import { RouterLink } from '@angular/router';
 import { SeverityMark } from '../../../ui/marks/severity-mark';
 import { VerdictChip } from '../../../ui/marks/verdict-chip';
+import { PartName } from '../../../ui/part-name';
 import { CountPipe } from '../../../ui/values/count-pipe';
 import { DurationPipe } from '../../../ui/values/duration-pipe';
 import { WaitingBar } from '../../../ui/waiting-bar';
@@ -10,7 +11,7 @@ import { countWords, type WaitingLot } from '../../waiting';
 /** The queue as a table; on a phone each lot is a card. The chosen row follows the arrow keys. */
 @Component({
   selector: 'qr-queue-table',
-  imports: [CountPipe, DurationPipe, RouterLink, SeverityMark, VerdictChip, WaitingBar],
+  imports: [CountPipe, DurationPipe, PartName, RouterLink, SeverityMark, VerdictChip, WaitingBar],
   templateUrl: './queue-table.html',
   styleUrl: './queue-table.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
