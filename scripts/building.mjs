@@ -3,6 +3,8 @@ import { spawnSync } from 'node:child_process';
 import { createHash } from 'node:crypto';
 import { existsSync, mkdirSync, readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
+import process from 'node:process';
+import { compressFolder } from './compressing.mjs';
 
 const sources = {
   app: ['src', 'shared', 'public', 'angular.json', 'package-lock.json', 'tsconfig.json'],
@@ -48,9 +50,12 @@ async function buildServer() {
   await build(serverBuild);
 }
 
-function buildApp() {
-  const { status } = spawnSync('node', ['node_modules/@angular/cli/bin/ng.js', 'build'], { stdio: 'inherit' });
+async function buildApp() {
+  // The many small files that lazy pages share are merged: a browser asks for far fewer of them.
+  const env = { ...process.env, NG_BUILD_OPTIMIZE_CHUNKS: '1' };
+  const { status } = spawnSync('node', ['node_modules/@angular/cli/bin/ng.js', 'build'], { stdio: 'inherit', env });
   if (status !== 0) throw new Error('The application could not be built.');
+  await compressFolder('dist/app');
 }
 
 async function buildPart(part, build) {

@@ -1,10 +1,14 @@
 import express, { type Request, type RequestHandler, type Response } from 'express';
 import path from 'node:path';
+import { COMPRESSED, preferCompressed } from './compressed-files';
 
 /** Files with a hash in their name never change. */
-const HASHED = /-[A-Z0-9]{8}\.\w+$/;
+const HASHED = /-[\w-]{8}\.\w+$/;
 
-function setCaching(response: Response, file: string): void {
+function setHeaders(response: Response, served: string): void {
+  const compressed = served.endsWith(COMPRESSED);
+  const file = compressed ? served.slice(0, -COMPRESSED.length) : served;
+  if (compressed) response.type(path.extname(file)).set('content-encoding', 'br');
   const caching = HASHED.test(file) ? 'public, max-age=31536000, immutable' : 'no-cache';
   response.set('cache-control', path.basename(file) === 'index.html' ? 'no-store' : caching);
 }
@@ -22,7 +26,7 @@ function isMissing(error: Error): boolean {
 /** The browser's application: its files, and its one page under every address of its own. */
 export function staticApp(root: string): RequestHandler[] {
   const folder = path.join(root, 'dist', 'app');
-  const files = express.static(folder, { index: false, redirect: false, setHeaders: setCaching, cacheControl: false });
+  const files = express.static(folder, { index: false, redirect: false, setHeaders, cacheControl: false });
   const page: RequestHandler = (request, response, next) => {
     if (!asksForPage(request)) {
       next();
@@ -33,5 +37,5 @@ export function staticApp(root: string): RequestHandler[] {
       if (error) next(isMissing(error) ? undefined : error);
     });
   };
-  return [files, page];
+  return [preferCompressed(folder), files, page];
 }

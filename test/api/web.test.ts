@@ -1,6 +1,7 @@
 import { mkdtempSync, mkdirSync, rmSync, writeFileSync, copyFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
+import { brotliCompressSync } from 'node:zlib';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { testSite, type TestSite } from '../support/test-site';
 
@@ -13,6 +14,7 @@ describe('the one port', () => {
     mkdirSync(path.join(app, 'media'), { recursive: true });
     writeFileSync(path.join(app, 'index.html'), '<!doctype html><title>Quietrail</title>');
     writeFileSync(path.join(app, 'main-ABCD1234.js'), 'export {};');
+    writeFileSync(path.join(app, 'main-ABCD1234.js.br'), brotliCompressSync('export {};'));
     writeFileSync(path.join(app, 'icon.svg'), '<svg xmlns="http://www.w3.org/2000/svg"/>');
     copyFileSync(new URL('../../package.json', import.meta.url), path.join(root, 'package.json'));
     site = await testSite({ root });
@@ -38,6 +40,20 @@ describe('the one port', () => {
     expect(script.headers['cache-control']).toBe('public, max-age=31536000, immutable');
     const icon = await site.nobody().get('/icon.svg').expect(200);
     expect(icon.headers['cache-control']).toBe('no-cache');
+  });
+
+  it('sends the compressed file to browsers that take it', async () => {
+    const script = await site.nobody().get('/main-ABCD1234.js').set('accept-encoding', 'gzip, br').expect(200);
+    expect(script.text).toBe('export {};');
+    expect(script.headers).toMatchObject({
+      'content-encoding': 'br',
+      'content-type': 'text/javascript; charset=utf-8',
+      'cache-control': 'public, max-age=31536000, immutable',
+      vary: expect.stringMatching(/accept-encoding/i),
+    });
+    const plain = await site.nobody().get('/main-ABCD1234.js').set('accept-encoding', 'gzip').expect(200);
+    expect(plain.headers['content-encoding']).not.toBe('br');
+    expect(plain.text).toBe('export {};');
   });
 
   it.each(['/missing.js', '/main-00000000.js', '/../package.json', '/%2e%2e/package.json'])(

@@ -39,7 +39,7 @@ export class SessionRenewal {
 
   private post(): Promise<unknown> {
     return new Promise((resolve, reject) => {
-      this.http.post(refreshSession.path, {}).subscribe({ next: resolve, error: reject });
+      this.http.request(refreshSession.method, refreshSession.path).subscribe({ next: resolve, error: reject });
     });
   }
 }
