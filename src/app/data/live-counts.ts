@@ -10,6 +10,7 @@ const STALE_AFTER = 30_000;
 @Injectable()
 export class LiveCounts {
   private readonly api = inject(ApiClient);
+  private readonly destroyed = inject(DestroyRef);
   private readonly latest = signal<Counts | null>(null);
   private readonly stale = signal<Date | null>(null);
   private patience: ReturnType<typeof setTimeout> | undefined;
@@ -18,13 +19,14 @@ export class LiveCounts {
   /** When the shown counts were true, once they are too old to trust; null while they are fresh. */
   readonly staleSince = this.stale.asReadonly();
 
-  constructor() {
+  /** Begins to follow the counts; for people who may read them. */
+  follow(): void {
     const stream = new SharedStream('/api/events', 'counts', {
       message: (text) => this.take(text),
       lost: () => this.lose(),
       before: () => this.load(),
     });
-    inject(DestroyRef).onDestroy(() => {
+    this.destroyed.onDestroy(() => {
       stream.close();
       clearTimeout(this.patience);
     });

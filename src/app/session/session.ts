@@ -1,6 +1,7 @@
 import { computed, inject, Injectable, Injector, signal } from '@angular/core';
 import { Router } from '@angular/router';
 import { catchError, defer, from, type Observable, of, switchMap, tap, throwError } from 'rxjs';
+import { type Who } from '#shared/contract/endpoint';
 import { type Role } from '#shared/contract/roles';
 import { type Me, readMe, signIn, signOut } from '#shared/contract/session';
 import { ApiClient, type CallInput } from '../data/api';
@@ -30,6 +31,11 @@ export class Session {
   /** Whether the person holds one of the roles. */
   holds(...roles: readonly Role[]): boolean {
     return roles.some((role) => this.roles().has(role));
+  }
+
+  /** Whether the person is among those whom the contract lets call an endpoint. */
+  mayCall({ who }: { readonly who: Who }): boolean {
+    return typeof who === 'string' ? who === 'anyone' || this.person() !== null : this.holds(...who);
   }
 
   signIn(body: CallInput<typeof signIn>['body']): Observable<Me> {

@@ -13,6 +13,7 @@ import { MatMenuModule } from '@angular/material/menu';
 import { MatSnackBar } from '@angular/material/snack-bar';
 import { Router, RouterLink, RouterOutlet } from '@angular/router';
 import { ROLE_TITLES } from '#shared/contract/roles';
+import { readCounts } from '#shared/contract/counts';
 import { readFront } from '#shared/contract/site';
 import { endpointResource } from '../data/api';
 import { problemOf } from '../data/api-problem';
@@ -68,6 +69,10 @@ export class Shell {
   protected readonly demo = computed(() => this.front.hasValue() && this.front.value().mode === 'demo');
   protected readonly role = computed(() => this.me()?.roles.map((role) => ROLE_TITLES[role])[0] ?? '');
   protected readonly dark = this.scheme.dark;
+
+  constructor() {
+    if (this.session.mayCall(readCounts)) inject(LiveCounts).follow();
+  }
 
   protected skip(event: Event): void {
     event.preventDefault();

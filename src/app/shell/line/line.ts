@@ -35,7 +35,7 @@ export class Line {
   });
 
   private readonly stations = computed(() =>
-    STATIONS.filter(({ who }) => typeof who === 'string' || this.session.holds(...who)).map((station) => ({
+    STATIONS.filter((station) => this.session.mayCall(station)).map((station) => ({
       ...station,
       shown: this.countOf(station, this.live.counts()),
       active: station.key === this.activeKey(),

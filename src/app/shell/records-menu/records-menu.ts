@@ -38,7 +38,7 @@ export class RecordsMenu {
   protected readonly groups = computed(() =>
     RECORDS.map((group) =>
       group
-        .filter(({ who }) => typeof who === 'string' || this.session.holds(...who))
+        .filter((record) => this.session.mayCall(record))
         .map((record) => ({ ...record, size: record.count === undefined ? undefined : this.counts()[record.count] })),
     ).filter((group) => group.length > 0),
   );
@@ -46,7 +46,7 @@ export class RecordsMenu {
   protected readonly due = computed(() => this.counts().instrumentsDue ?? 0);
   protected readonly trends = computed(() => {
     const station = STATIONS.find(({ key }) => key === 'trends');
-    return station !== undefined && typeof station.who !== 'string' && this.session.holds(...station.who);
+    return station !== undefined && this.session.mayCall(station);
   });
   private readonly counts = computed(() => (this.sizes.hasValue() ? this.sizes.value() : {}));
 
