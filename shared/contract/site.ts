@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { endpoint } from './endpoint';
-import { line, mailAddress, prose, version } from './fields';
+import { line, mailAddress, positive, prose, version } from './fields';
 import { role } from './roles';
 
 /** What the sign-in page may know. */
@@ -17,7 +17,7 @@ export const siteBody = z.object({
   department: line(80),
   address: prose(300),
   engineeringList: z.array(mailAddress).max(20),
-  waitingTargetHours: z.number().positive('Must be more than 0.').max(240),
+  waitingTargetHours: positive.max(240, 'At most 240 hours.'),
   approveOwnPlans: z.boolean(),
   releaseOwnReadings: z.boolean(),
 });

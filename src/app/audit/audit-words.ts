@@ -1,3 +1,5 @@
+import { sentenceCase } from '../ui/values/sentence-case';
+
 /** What a page calls the things that audit entries are about. */
 export const SUBJECT_TITLES: Readonly<Record<string, string>> = {
   lot: 'Lot',
@@ -16,12 +18,6 @@ export const SUBJECT_TITLES: Readonly<Record<string, string>> = {
 /** The title of a subject; one that has none is shown as it is recorded. */
 export function subjectTitle(subject: string): string {
   return SUBJECT_TITLES[subject] ?? sentenceCase(subject);
-}
-
-/** "sign-in-refused" reads "Sign in refused". */
-export function sentenceCase(name: string): string {
-  const words = name.replaceAll('-', ' ');
-  return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
 /** A made-up id is known by its first part; a number is short as it is. */

@@ -10,8 +10,9 @@ import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
 import { EmptyState } from '../../ui/states/empty-state';
 import { MomentPipe } from '../../ui/values/moment-pipe';
+import { sentenceCase } from '../../ui/values/sentence-case';
 import { AuditDifference } from '../audit-difference/audit-difference';
-import { sentenceCase, shortId, subjectTitle } from '../audit-words';
+import { shortId, subjectTitle } from '../audit-words';
 import { AuditFilter, type AuditQuery } from './audit-filter';
 import { ChainCheck } from './chain-check';
 

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, inject, input, numberAttribute, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, effect, inject, input, numberAttribute, viewChild } from '@angular/core';
 import { MatSnackBar } from '@angular/material/snack-bar';
 import {
   changeInstrument,
@@ -7,6 +7,7 @@ import {
   readInstrument,
 } from '#shared/contract/instruments';
 import { endpointResource } from '../../data/api';
+import { PageTitle } from '../../page-title';
 import { may } from '../../session/may';
 import { BackLink } from '../../shell/back-link';
 import { type HoldsTyping } from '../../shell/leave-guard';
@@ -25,6 +26,7 @@ import { InstrumentFacts } from './instrument-facts';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class InstrumentPage implements HoldsTyping {
+  private readonly title = inject(PageTitle);
   private readonly snackBar = inject(MatSnackBar);
   private readonly form = viewChild(InstrumentForm);
 
@@ -33,6 +35,12 @@ export class InstrumentPage implements HoldsTyping {
   protected readonly instrument = endpointResource(readInstrument, () => ({ params: { id: this.id() } }));
   protected readonly mayChange = may(changeInstrument);
   protected readonly kinds = INSTRUMENT_KIND_TITLES;
+
+  constructor() {
+    effect(() => {
+      if (this.instrument.hasValue()) this.title.show(this.instrument.value().assetNumber);
+    });
+  }
 
   hasUnsaved(): boolean {
     return this.form()?.hasUnsaved() ?? false;

@@ -8,6 +8,7 @@ import { type Observable } from 'rxjs';
 import * as z from 'zod';
 import { reason } from '#shared/contract/fields';
 import { RecordSave } from '../../data/record-save';
+import { formFieldDefaults } from '../../ui/material-defaults';
 import { MessageNote } from '../../ui/states/message-note';
 import { FieldErrorPipe } from '../../ui/values/field-error-pipe';
 
@@ -30,6 +31,7 @@ const schema = z.object({ reason });
 @Component({
   selector: 'qr-reason-dialog',
   imports: [FieldErrorPipe, MatButton, MatDialogModule, MatFormFieldModule, MatInput, MessageNote, ReactiveFormsModule],
+  providers: [formFieldDefaults],
   templateUrl: './reason-dialog.html',
   styles: `
     mat-form-field {

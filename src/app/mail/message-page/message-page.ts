@@ -6,6 +6,7 @@ import { VerdictChip } from '../../ui/marks/verdict-chip';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
 import { MomentPipe } from '../../ui/values/moment-pipe';
+import { sentenceCase } from '../../ui/values/sentence-case';
 import { MailBody } from '../mail-body';
 import { MessageStatus } from '../message-status';
 
@@ -20,5 +21,6 @@ import { MessageStatus } from '../message-status';
 export class MessagePage {
   readonly id = input.required({ transform: numberAttribute });
 
+  protected readonly sentenceCase = sentenceCase;
   protected readonly message = endpointResource(readMessage, () => ({ params: { id: this.id() } }));
 }

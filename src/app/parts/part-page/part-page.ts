@@ -1,10 +1,11 @@
-import { ChangeDetectionStrategy, Component, inject, input, numberAttribute, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, effect, inject, input, numberAttribute, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatSnackBar } from '@angular/material/snack-bar';
 import { RouterLink } from '@angular/router';
 import { changePart, FORM_TITLES, type Part, readPart } from '#shared/contract/parts';
 import { addPlan, listPlans } from '#shared/contract/plans';
 import { endpointResource } from '../../data/api';
+import { PageTitle } from '../../page-title';
 import { may } from '../../session/may';
 import { BackLink } from '../../shell/back-link';
 import { type HoldsTyping } from '../../shell/leave-guard';
@@ -22,6 +23,7 @@ import { PartForm } from '../part-form/part-form';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PartPage implements HoldsTyping {
+  private readonly title = inject(PageTitle);
   private readonly snackBar = inject(MatSnackBar);
   private readonly form = viewChild(PartForm);
 
@@ -32,6 +34,12 @@ export class PartPage implements HoldsTyping {
   protected readonly mayPlan = may(addPlan);
   protected readonly mayReadPlans = may(listPlans);
   protected readonly forms = FORM_TITLES;
+
+  constructor() {
+    effect(() => {
+      if (this.part.hasValue()) this.title.show(this.part.value().number);
+    });
+  }
 
   hasUnsaved(): boolean {
     return this.form()?.hasUnsaved() ?? false;

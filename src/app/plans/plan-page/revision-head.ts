@@ -1,9 +1,10 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
 import { MatButton } from '@angular/material/button';
+import { tap } from 'rxjs';
 import { type Plan, type Revision } from '#shared/contract/plans';
+import { AskReason } from '../../lots/reason-dialog/ask-reason';
 import { Session } from '../../session/session';
 import { BackLink } from '../../shell/back-link';
-import { AskReason } from '../../ui/confirm/ask-reason';
 import { Confirm } from '../../ui/confirm/confirm';
 import { Mark } from '../../ui/marks/mark';
 import { clockTime, MomentPipe } from '../../ui/values/moment-pipe';
@@ -83,12 +84,15 @@ export class RevisionHead {
   protected giveBack(): void {
     const { revision, author } = this.shown();
     const text = [`It becomes a draft again, and ${author} reads the reason in the audit trail.`];
-    const step = { title: `Return revision ${revision} to draft?`, text, confirm: 'Return to draft' };
     this.askReason
-      .ask(step)
-      .subscribe((reason) =>
-        this.step((plan, shown) => this.acts.giveBack(plan, shown, reason), `Revision ${revision} is a draft again`),
-      );
+      .ask({
+        title: `Return revision ${revision} to draft?`,
+        text,
+        confirm: 'Return to draft',
+        take: (reason) =>
+          this.acts.giveBack(this.plan(), this.shown(), reason).pipe(tap((plan) => this.taken.emit(plan))),
+      })
+      .subscribe();
   }
 
   protected draftNext(): void {

@@ -1,7 +1,8 @@
-import { ChangeDetectionStrategy, Component, inject, input, numberAttribute, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, effect, inject, input, numberAttribute, viewChild } from '@angular/core';
 import { MatSnackBar } from '@angular/material/snack-bar';
 import { changeSupplier, readSupplier, type Supplier } from '#shared/contract/suppliers';
 import { endpointResource } from '../../data/api';
+import { PageTitle } from '../../page-title';
 import { may } from '../../session/may';
 import { BackLink } from '../../shell/back-link';
 import { type HoldsTyping } from '../../shell/leave-guard';
@@ -21,6 +22,7 @@ import { SupplierFacts } from './supplier-facts';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class SupplierPage implements HoldsTyping {
+  private readonly title = inject(PageTitle);
   private readonly snackBar = inject(MatSnackBar);
   private readonly form = viewChild(SupplierForm);
 
@@ -28,6 +30,12 @@ export class SupplierPage implements HoldsTyping {
 
   protected readonly supplier = endpointResource(readSupplier, () => ({ params: { id: this.id() } }));
   protected readonly mayChange = may(changeSupplier);
+
+  constructor() {
+    effect(() => {
+      if (this.supplier.hasValue()) this.title.show(this.supplier.value().name);
+    });
+  }
 
   hasUnsaved(): boolean {
     return this.form()?.hasUnsaved() ?? false;
