@@ -2,6 +2,7 @@ import {
   afterNextRender,
   ChangeDetectionStrategy,
   Component,
+  computed,
   effect,
   ElementRef,
   inject,
@@ -22,12 +23,14 @@ import { InstrumentChoice } from '../sheet/instrument-choice';
 import { ReadingDraft } from '../sheet/reading-draft';
 import { ReadingQueue } from '../waiting/reading-queue';
 import { BenchHead } from './bench-head';
+import { CellActions } from './reading-panel/cell-actions';
 import { DeskCommands } from './desk-commands';
 import { BenchQuestions } from './dialogs/bench-questions';
 import { KeyHints } from './key-hints';
 import { LotSubmission } from './lot-submission';
 import { MeasuringGrid } from './measuring-grid/measuring-grid';
 import { NumberPad } from './number-pad';
+import { PanelCaution } from './reading-panel/panel-caution';
 import { ReadingPanel } from './reading-panel/reading-panel';
 import { RunningVerdict } from './running-verdict';
 import { SampleOverview } from './sample-overview';
@@ -35,7 +38,18 @@ import { SampleOverview } from './sample-overview';
 /** One lot on the bench: the sample, the grid of readings, and the panel where they are typed. */
 @Component({
   selector: 'qr-bench-desk',
-  imports: [BenchHead, KeyHints, MeasuringGrid, NumberPad, ReadingPanel, ReadOnlyNote, RunningVerdict, SampleOverview],
+  imports: [
+    BenchHead,
+    CellActions,
+    KeyHints,
+    MeasuringGrid,
+    NumberPad,
+    PanelCaution,
+    ReadingPanel,
+    ReadOnlyNote,
+    RunningVerdict,
+    SampleOverview,
+  ],
   providers: [
     BenchSheet,
     BenchCursor,
@@ -68,6 +82,7 @@ export class BenchDesk {
   private readonly panelElement = viewChild(ReadingPanel, { read: ElementRef<HTMLElement> });
 
   protected readonly narrow = narrowerThan(1000);
+  protected readonly caution = computed(() => this.cursor.stop().characteristic.caution);
   private readonly merged = narrowerThan(1360);
   private readonly mayKeep = may(keepReading);
 

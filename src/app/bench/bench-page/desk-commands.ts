@@ -2,6 +2,7 @@ import { inject, Injectable } from '@angular/core';
 import { MatSnackBar } from '@angular/material/snack-bar';
 import { Subject } from 'rxjs';
 import { type BenchCommand } from '#shared/bench/bench-key';
+import { type WalkOrder } from '#shared/bench/grid-walk';
 import { readingText } from '../../ui/values/reading-text';
 import { BenchHand } from '../bench-hand';
 import { BenchCursor } from '../sheet/bench-cursor';
@@ -30,11 +31,17 @@ export class DeskCommands {
     else if (this.hand.mayMeasure()) this.measure(command);
   }
 
-  keep(): void {
-    const result = this.hand.keep();
+  keep(order?: WalkOrder): void {
+    const result = this.hand.keep(order);
     if (result === 'kept' || result === 'passed-by') this.toGrid.next();
-    if (result === 'needs-repeat') this.askRepeat(() => this.keep());
+    if (result === 'needs-repeat') this.askRepeat(() => this.keep(order));
     if (result === 'needs-reason') this.hand.hold('Say what is wrong: press the number of the reason.');
+  }
+
+  /** Goes to the next characteristic; what is typed is kept first. */
+  step(): void {
+    if (this.draft.started()) this.keep('by-unit');
+    else if (this.cursor.step('next')) this.toGrid.next();
   }
 
   judge(pass: boolean): void {

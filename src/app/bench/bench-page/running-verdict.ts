@@ -8,13 +8,18 @@ import { lowerThan } from './screen-height';
   selector: 'qr-running-verdict',
   imports: [VerdictPlate],
   template: `
-    <qr-verdict-plate
-      [variant]="stop() ? 'stop' : 'continue'"
-      topLeft="Running verdict"
-      [topRight]="short()"
-      [trace]="!low() && !compact()"
-    />
-    @if (stop()) {
+    @if (plain()) {
+      <span class="label">{{ stop() ? short() : 'Running verdict' }}</span>
+      <b aria-live="assertive">{{ stop() ? 'STOP' : 'CONTINUE' }}</b>
+    } @else {
+      <qr-verdict-plate
+        [variant]="stop() ? 'stop' : 'continue'"
+        topLeft="Running verdict"
+        [topRight]="short()"
+        [trace]="!low()"
+      />
+    }
+    @if (stop() && !plain()) {
       <p>{{ sheet.lot().reason }} Quarantine the lot.</p>
     }
   `,
@@ -22,18 +27,38 @@ import { lowerThan } from './screen-height';
     :host {
       display: block;
     }
+    :host(.plain) {
+      display: grid;
+      flex: none;
+      align-content: center;
+      justify-items: end;
+      padding: 6px 16px;
+      b {
+        font: var(--qr-t-verdict);
+        letter-spacing: 1px;
+      }
+    }
+    :host(.plain.stop) {
+      background: var(--qr-nok-fill);
+      color: var(--qr-on-nok);
+      .label {
+        color: inherit;
+      }
+    }
     p {
       margin-top: 8px;
       color: var(--qr-nok-text);
       font: var(--qr-t-small);
     }
   `,
+  host: { '[class.plain]': 'plain()', '[class.stop]': 'stop()' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class RunningVerdict {
   protected readonly sheet = inject(BenchSheet);
 
-  readonly compact = input(false);
+  /** Whether only the word stands, in the head of a tablet. */
+  readonly plain = input(false);
 
   protected readonly low = lowerThan(860);
   protected readonly stop = computed(() => this.sheet.lot().stop);

@@ -31,7 +31,7 @@ import { BenchSheet } from '../sheet/bench-sheet';
     }
   `,
   styleUrl: './sample-overview.scss',
-  host: { class: 'sheet' },
+  host: { class: 'sheet', '[class.many]': 'groups().length > 4', '[class.four]': 'groups().length > 3' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class SampleOverview {

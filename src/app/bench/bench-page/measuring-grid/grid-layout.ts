@@ -2,8 +2,9 @@ import { type BenchColumn } from '../../sheet/bench-column';
 
 /** Widths in px. A column with a strip grows; the others keep theirs. */
 const WIDTHS = { attribute: 92, attributes: 104, number: 106, strip: 138 } as const;
-const UNIT = 52;
-const VERDICT = 54;
+/** The two columns that stay in place. */
+export const UNIT = 52;
+export const VERDICT = 54;
 /** What a strip's column spends on padding, digits and the gap before the strip. */
 const BESIDE_STRIP = 74;
 const LEAST_STRIP = 64;

@@ -17,7 +17,7 @@ import { BenchSettings } from '../../bench-settings';
 import { BenchCursor } from '../../sheet/bench-cursor';
 import { BenchSheet } from '../../sheet/bench-sheet';
 import { ReadingDraft } from '../../sheet/reading-draft';
-import { gridLayout } from './grid-layout';
+import { gridLayout, UNIT, VERDICT } from './grid-layout';
 import { GridFoot } from './grid-foot';
 import { GridHead } from './grid-head';
 import { GridRow } from './grid-row';
@@ -88,7 +88,12 @@ export class MeasuringGrid {
   focusCell(): void {
     this.afterRender(() => {
       this.reveal();
-      this.afterRender(() => this.cell()?.focus({ preventScroll: true }));
+      this.afterRender(() => {
+        const cell = this.cell();
+        if (cell === null) return;
+        this.revealAcross(cell);
+        cell.focus({ preventScroll: true });
+      });
     });
   }
 
@@ -138,6 +143,14 @@ export class MeasuringGrid {
     if (top - around < view.scrollTop) view.scrollTop = top - around;
     else if (top + row + around > view.scrollTop + room) view.scrollTop = top + row + around - room;
     this.scroll();
+  }
+
+  /** Scrolls a cell sideways between the two columns that stay in place. */
+  private revealAcross(cell: HTMLElement): void {
+    const view = this.scroller().nativeElement;
+    const right = cell.offsetLeft + cell.offsetWidth + VERDICT;
+    if (cell.offsetLeft - UNIT < view.scrollLeft) view.scrollLeft = cell.offsetLeft - UNIT;
+    else if (right > view.scrollLeft + view.clientWidth) view.scrollLeft = right - view.clientWidth;
   }
 
   private afterRender(work: () => void): void {

@@ -37,7 +37,7 @@ import { readingDigits } from '../../../ui/values/reading-text';
     </output>
   `,
   styleUrl: './direct-entry.scss',
-  host: { '(keydown.enter)': 'keep($event)', '(keydown.escape)': 'leave($event)' },
+  host: { '(keydown.enter)': 'keep($event)', '(keydown.escape)': 'leave($event)', '(keydown.tab)': 'step($event)' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class DirectEntry {
@@ -49,6 +49,8 @@ export class DirectEntry {
   readonly refused = input(false);
   readonly kept = output();
   readonly left = output();
+  /** Tab: on to the next characteristic. */
+  readonly stepped = output();
 
   private readonly box = viewChild.required<ElementRef<HTMLInputElement>>('box');
 
@@ -67,6 +69,11 @@ export class DirectEntry {
   protected keep(event: Event): void {
     event.preventDefault();
     this.kept.emit();
+  }
+
+  protected step(event: Event): void {
+    event.preventDefault();
+    this.stepped.emit();
   }
 
   protected leave(event: Event): void {

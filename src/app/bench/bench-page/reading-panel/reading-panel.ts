@@ -1,5 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, inject, output, viewChild } from '@angular/core';
-import { MatButton } from '@angular/material/button';
+import { ChangeDetectionStrategy, Component, computed, inject, viewChild } from '@angular/core';
 import { narrowerThan } from '../../../shell/screen-width';
 import { ScopeReader } from '../../../ui/scope-reader/scope-reader';
 import { type ScopeText } from '../../../ui/scope-reader/scope-text';
@@ -15,8 +14,10 @@ import { BenchSheet } from '../../sheet/bench-sheet';
 import { InstrumentChoice } from '../../sheet/instrument-choice';
 import { ReadingDraft } from '../../sheet/reading-draft';
 import { ReadingQueue } from '../../waiting/reading-queue';
+import { DeskCommands } from '../desk-commands';
 import { lowerThan } from '../screen-height';
 import { AttributeEntry } from './attribute-entry';
+import { CellActions } from './cell-actions';
 import { CellHistory } from './cell-history';
 import { ComputedEntry } from './computed-entry';
 import { DirectEntry } from './direct-entry';
@@ -29,13 +30,13 @@ import { PanelCell } from './panel-cell';
   selector: 'qr-reading-panel',
   imports: [
     AttributeEntry,
+    CellActions,
     CellHistory,
     ClassGlyph,
     ComputedEntry,
     DirectEntry,
     InstrumentField,
     LimitStrip,
-    MatButton,
     MessageNote,
     PanelCaution,
     ScopeReader,
@@ -51,20 +52,12 @@ export class ReadingPanel {
   private readonly sheet = inject(BenchSheet);
   private readonly queue = inject(ReadingQueue);
   private readonly settings = inject(BenchSettings);
+  protected readonly commands = inject(DeskCommands);
   protected readonly cursor = inject(BenchCursor);
   protected readonly draft = inject(ReadingDraft);
   protected readonly choice = inject(InstrumentChoice);
   protected readonly cell = inject(PanelCell);
   protected readonly mayMeasure = inject(BenchHand).mayMeasure;
-
-  readonly kept = output();
-  readonly left = output();
-  readonly passed = output();
-  readonly failed = output();
-  readonly reasoned = output<string>();
-  readonly repeats = output();
-  readonly notes = output();
-  readonly setsAside = output();
 
   private readonly direct = viewChild(DirectEntry);
   private readonly scope = viewChild(ScopeReader);
