@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import './words';
 
 /** Text of one line: trimmed, not empty. */
 export const line = (most = 120) =>
@@ -38,4 +39,4 @@ export const day = z.iso.date();
 export const moment = z.iso.datetime();
 export const id = z.int().positive();
 export const version = z.int().positive();
-export const positive = z.number({ error: 'A number is needed.' }).positive('Must be more than 0.');
+export const positive = z.number().positive('Must be more than 0.');

@@ -35,7 +35,7 @@ export const electricalModel = z
     diodeDropVolts: z.number().min(0, 'Not negative.').max(5).nullable(),
     filterFarads: positive.max(10).nullable(),
     /** Fraction, 0.2 for +/-20 %. */
-    filterTolerance: z.number().min(0, 'Not negative.').max(0.99).nullable(),
+    filterTolerance: z.number().min(0, 'Not negative.').max(0.99, 'At most 99 %.').nullable(),
     filterEsrOhms: z.number().min(0, 'Not negative.').max(1000).nullable(),
   })
   .refine((model) => model.topology === 'switch-mode' || model.filterFarads !== null, {
