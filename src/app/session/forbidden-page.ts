@@ -9,6 +9,7 @@ import { NoPermission } from '../ui/states/no-permission';
   imports: [MatButton, NoPermission, RouterLink],
   template: `
     <div class="page">
+      <h1 class="unseen">Not open to you</h1>
       <qr-no-permission class="sheet" [who]="who()">
         <a matButton="outlined" routerLink="/">Go to your first station</a>
       </qr-no-permission>

@@ -9,6 +9,7 @@ import { EmptyState } from '../ui/states/empty-state';
   imports: [EmptyState, MatButton, RouterLink],
   template: `
     <div class="page">
+      <h1 class="unseen">Not found</h1>
       <qr-empty-state class="sheet" title="There is no such page." text="The address may be cut short or out of date.">
         <a matButton="outlined" routerLink="/">Go to your first station</a>
       </qr-empty-state>
