@@ -103,7 +103,9 @@ export function submitLot(context: Context, verdicts: RunningVerdicts, caller: C
     const lot = lotAtBench(tx, id);
     holdVersion(`Lot ${lot.number}`, lot.version, version);
     const { verdict } = judgeSampleOf(tx, lot);
-    if (!verdict.lot.stop && !verdict.lot.complete) {
+    const settled = judgeSampleOf(tx, lot, { submitting: true }).verdict.lot;
+    // A verdict may hang on a reading that is missing beyond its own group; without it nobody could sign.
+    if ((!verdict.lot.stop && !verdict.lot.complete) || settled.verdict === 'continue') {
       const missing = verdict.units.reduce((sum, unit) => sum + unit.missing.length, 0);
       throw new Conflict('readings-missing', `${missing} readings are still missing.`);
     }
@@ -111,7 +113,6 @@ export function submitLot(context: Context, verdicts: RunningVerdicts, caller: C
       .set({ status: 'submitted', submittedAt: at.toISOString(), submittedById: caller.id, version: lot.version + 1 })
       .where(eq(lots.id, id))
       .run();
-    const settled = judgeSampleOf(tx, lot, { submitting: true }).verdict.lot;
     recordLot(tx, { at, person: caller, action: 'submitted', lotId: id, note: settled.reason });
   });
   verdicts.drop(id);

@@ -2,11 +2,12 @@ import { type Db } from '#db/open-database';
 import { lots } from '#db/schema/lots';
 import { people } from '#db/schema/people';
 import { readings } from '#db/schema/readings';
+import { canonicalJson } from '#server/audit/canonical-json';
 import { record } from '#server/audit/record';
 import { type Caller } from '#server/caller';
 import { type Context } from '#server/context';
 import { dayOf } from '#server/instruments/instrument-queries';
-import { type LotRow } from '#server/lots/lot-rows';
+import { findLot, type LotRow } from '#server/lots/lot-rows';
 import { recordLot } from '#server/lots/record-lot';
 import { Conflict, Refused } from '#server/problems';
 import { type Kept, type ReadingBody } from '#shared/contract/bench';
@@ -17,7 +18,8 @@ import { entryValue } from './entry-value';
 import { countingReadings, unitOf, type LotRules, type ReadingRow, type UnitRows } from '#server/judging/lot-judging';
 import { holdInstrument } from './reading-instrument';
 import { readingView } from './reading-view';
-import { rejudge, type RunningVerdict, type RunningVerdicts } from '#server/judging/running-verdicts';
+import { takenAt } from './taken-at';
+import { rejudge, runningVerdict, type RunningVerdict, type RunningVerdicts } from '#server/judging/running-verdicts';
 
 interface Cell {
   characteristicId: number;
@@ -57,10 +59,26 @@ function holdRepeat(db: Db, { rows, earlier, characteristicId }: Cell, body: Rea
     throw new Conflict('no-more-repeats', `Unit ${body.unit} has had this reading three times; set the unit aside.`);
 }
 
-/** The same reading sent twice is acknowledged twice; another one under the same id is refused. */
-function holdSame(row: ReadingRow, cell: Cell): void {
-  const same = row.unitId === cell.rows.unit.id && row.characteristicId === cell.characteristicId;
-  if (!same) throw new Conflict('reading-id-used', 'Another reading has this id already.');
+function isSame(row: ReadingRow, cell: Cell, body: ReadingBody): boolean {
+  return (
+    row.unitId === cell.rows.unit.id &&
+    row.characteristicId === cell.characteristicId &&
+    row.instrumentId === body.instrumentId &&
+    canonicalJson(row.entry) === canonicalJson(body.entry)
+  );
+}
+
+/**
+ * The same reading sent twice is acknowledged twice, also when its lot has left the bench meanwhile; another one under the
+ * same id is refused.
+ */
+function knownAlready(db: Db, verdicts: RunningVerdicts, known: ReadingRow, lotId: number, body: ReadingBody) {
+  const used = new Conflict('reading-id-used', 'Another reading has this id already.');
+  if (known.lotId !== lotId) throw used;
+  const { lot } = findLot(db, lotId);
+  const held = verdicts.of(db, lot);
+  if (!isSame(known, cellOf(db, lot, held.rules, body), body)) throw used;
+  return { row: known, running: runningVerdict(held, body.unit) };
 }
 
 /** The first reading of a drawn lot starts its measuring. */
@@ -100,7 +118,7 @@ function insert(
       repeatReason: body.repeat?.reason ?? null,
       repeatNote: body.repeat?.note ?? null,
       takenById: caller.id,
-      takenAt: body.takenAt,
+      takenAt: takenAt(body.takenAt, lot.drawnAt, at),
       receivedAt: at.toISOString(),
     })
     .returning()
@@ -143,12 +161,12 @@ export function keepReading(
   const at = context.clock.now();
   const { row, running } = context.db.transaction((tx) => {
     const known = tx.select().from(readings).where(eq(readings.id, id)).get();
+    if (known) return knownAlready(tx, verdicts, known, lotId, body);
     const lot = lotAtBench(tx, lotId);
     const held = verdicts.of(tx, lot);
     const cell = cellOf(tx, lot, held.rules, body);
-    if (known) holdSame(known, cell);
-    else startMeasuring(tx, lot, caller, at);
-    const kept = known ?? insert(tx, lot, cell, caller, id, body, held.rules, at);
+    startMeasuring(tx, lot, caller, at);
+    const kept = insert(tx, lot, cell, caller, id, body, held.rules, at);
     return { row: kept, running: rejudge(tx, lot, held, body.unit, at) };
   });
   verdicts.commit(lotId, running.unit);

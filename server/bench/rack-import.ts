@@ -9,6 +9,7 @@ import { recordLot } from '#server/lots/record-lot';
 import { Refused } from '#server/problems';
 import { type RackPreview } from '#shared/contract/bench';
 import { INSTRUMENT_KIND_TITLES, type InstrumentKind } from '#shared/contract/instruments';
+import { mayRepeat } from '#shared/verdict/counting-reading';
 import { judgeSample } from '#shared/verdict/judge-sample';
 import { type SampleVerdict } from '#shared/verdict/sample-verdict';
 import { eq } from 'drizzle-orm';
@@ -77,10 +78,13 @@ function readFile(db: Db, lot: LotRow, body: RackBody, today: string): ReadFile 
     return { rules, units, instruments, content: { columns: [], rows: 0, readings: [], faults } };
   }
   const taken = new Map(units.map((rows) => [rows.unit.unit, countingReadings(rows.readings)]));
+  const everTaken = new Map(units.map((rows) => [rows.unit.unit, rows.readings]));
+  const ofCell = (unit: number, id: number) => (everTaken.get(unit) ?? []).filter((row) => row.characteristicId === id);
   const content = rackReadings(table, {
     characteristics: rules.characteristics,
     sampleSize: units.length,
     hasReading: (unit, id) => taken.get(unit)?.has(id) ?? false,
+    isUsedUp: (unit, id) => !mayRepeat(ofCell(unit, id).map((row) => ({ withdrawn: row.withdrawnAt !== null }))),
   });
   const faults = [...instrumentFaults(rules, content, instruments), ...content.faults];
   return { rules, units, instruments, content: { ...content, faults } };

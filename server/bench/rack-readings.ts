@@ -27,6 +27,8 @@ export interface RackTarget {
   sampleSize: number;
   /** Whether a unit has a counting reading of a characteristic already. */
   hasReading(unit: number, characteristicId: number): boolean;
+  /** Whether the reading was taken, and taken back, as often as it may be. */
+  isUsedUp(unit: number, characteristicId: number): boolean;
 }
 
 interface Column {
@@ -123,6 +125,11 @@ export function rackReadings(table: Extract<RackTable, { state: 'table' }>, targ
       const { id, content } = characteristic;
       if (target.hasReading(unit, id)) {
         faults.push({ line, column: header, message: `Unit ${unit} has this reading already.` });
+        continue;
+      }
+      if (target.isUsedUp(unit, id)) {
+        const message = `Unit ${unit} has had this reading three times; set the unit aside.`;
+        faults.push({ line, column: header, message });
         continue;
       }
       try {

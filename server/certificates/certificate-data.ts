@@ -2,7 +2,7 @@ import { type Db } from '#db/open-database';
 import { type JudgedLot } from '#server/judging/sample-judging';
 import { type Caller } from '#server/caller';
 import { characteristicResults } from '#server/judging/characteristic-results';
-import { instrumentsUsed, readingsThatCount } from '#server/judging/counting';
+import { instrumentsUsed, readingsThatCount, repeatsOf } from '#server/judging/counting';
 import { fixedSampling } from '#server/lots/lot-sampling-queries';
 import { signerOf } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
@@ -101,7 +101,7 @@ export function certificateData(db: Db, number: string, release: Release): Certi
     groups: groupsOf(judged),
     results: characteristicResults(judged).map(resultOf),
     decisionRule: 'simple',
-    repeats: judged.units.flatMap(({ readings }) => readings).filter((row) => row.repeatReason !== null).length,
+    repeats: repeatsOf(judged),
     unitsRemoved: lot.countedQuantity - unitsReleased,
     unitsReleased,
     instruments: instrumentsUsed(db, counting).map(({ assetNumber, kind, calibrationDue }) => ({

@@ -9,7 +9,7 @@ import { Conflict } from '#server/problems';
 import { findSite } from '#server/site/site-queries';
 import { type Assessment } from '#shared/contract/decision';
 import { characteristicResults } from '#server/judging/characteristic-results';
-import { instrumentsUsed, readingsThatCount } from '#server/judging/counting';
+import { instrumentsUsed, readingsThatCount, repeatsOf } from '#server/judging/counting';
 
 /** A drawn lot as it is judged now: undecided units count once it is submitted. */
 export function judgedLot(db: Db, lot: LotRow): JudgedLot {
@@ -92,7 +92,7 @@ export function assessLot(db: Db, id: number, caller: Caller): Assessment {
     takenBy: [
       ...new Set(counting.map(({ takenById }) => (takenById === null ? 'Rack' : (names.get(takenById) ?? '')))),
     ],
-    repeats: judged.units.flatMap(({ readings }) => readings).filter((row) => row.repeatReason !== null).length,
+    repeats: repeatsOf(judged),
     setAside: judged.units.flatMap(({ unit }) =>
       unit.setAsideReason === null ? [] : [{ unit: unit.unit, reason: unit.setAsideReason }],
     ),

@@ -60,7 +60,7 @@ export function statement(data: CertificateData): string {
 function repeatsTold(repeats: number): string {
   if (repeats === 0) return 'No reading was repeated.';
   const many = repeats === 1 ? '1 reading was' : `${formatNumber(repeats, 0)} readings were`;
-  return `${many} repeated, with reasons on record; the last counts.`;
+  return `${many} repeated; every reading taken is on record, and the last counts.`;
 }
 
 /** How the readings were judged, what the certificate does not state, and the digest of what it states. */

@@ -11,6 +11,14 @@ export function readingsThatCount({ units }: JudgedLot): ReadingRow[] {
   return units.flatMap(({ readings }) => [...countingReadings(readings).values()]);
 }
 
+/**
+ * How often a reading was taken again. One that was taken back first counts too: otherwise a unit could be measured into
+ * compliance unseen.
+ */
+export function repeatsOf({ units }: JudgedLot): number {
+  return units.flatMap(({ readings }) => readings).filter(({ attempt }) => attempt > 1).length;
+}
+
 /** The instruments that the counting readings name, with how many each took. */
 export function instrumentsUsed(db: Db, counting: readonly ReadingRow[]): Assessment['instruments'] {
   const counts = new Map<number, number>();

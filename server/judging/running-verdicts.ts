@@ -66,6 +66,14 @@ export class RunningVerdicts {
   }
 }
 
+/** The verdict of a unit and its lot as they are held. */
+export function runningVerdict({ rules, units }: HeldLot, unit: number): RunningVerdict {
+  const verdict = units.get(unit);
+  if (!verdict) throw new Error(`The sample has no unit ${unit}.`);
+  const all = [...units.values()];
+  return { unit: verdict, lot: judgeLot(rules.rules, all, judgeGroups(rules.rules, all)) };
+}
+
 /**
  * Judges a lot again after one unit changed inside a transaction, and keeps its stop mark and progress in step.
  *
