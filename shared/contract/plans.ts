@@ -1,5 +1,6 @@
 import * as z from 'zod';
 import { FORMULAS, type FormulaKey } from '#shared/measurement/formula';
+import { LARGEST_VALUE } from '#shared/quantities/largest-value';
 import { AQLS, INSPECTION_LEVELS, NONCONFORMITY_CLASSES } from '#shared/sampling/scheme';
 import { byId, endpoint } from './endpoint';
 import { id, line, moment, optionalLine, prose, reason, version } from './fields';
@@ -53,13 +54,18 @@ const common = {
   ownLevel: inspectionLevel.nullable(),
   ownAql: aql.nullable(),
 };
+const limit = z
+  .number()
+  .min(-LARGEST_VALUE, 'This is too far below zero.')
+  .max(LARGEST_VALUE, 'This is too large.')
+  .nullable();
 /** Limits in SI base units. */
 const limits = {
   unit: z.enum(UNITS),
   decimals: z.number().int().min(0).max(6),
-  target: z.number().nullable(),
-  lowerLimit: z.number().nullable(),
-  upperLimit: z.number().nullable(),
+  target: limit,
+  lowerLimit: limit,
+  upperLimit: limit,
 };
 
 export const characteristic = z.discriminatedUnion('kind', [

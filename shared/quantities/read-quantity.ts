@@ -1,4 +1,5 @@
 import { type UnitParts } from './display-unit';
+import { LARGEST_VALUE } from './largest-value';
 import { readNumeral, type NumeralOptions } from './numeral';
 import { PREFIX_PLACES } from './prefixes';
 import { AmbiguousQuantity, QuantityNotUnderstood } from './quantity-not-understood';
@@ -104,6 +105,7 @@ export function readQuantity(text: string, wanted: UnitParts | null, options: Nu
  */
 export function toNumber(written: WrittenQuantity, text: string, places = 0): number {
   const value = Number(`${written.digits}e${written.places + places}`);
-  if (!Number.isFinite(value)) throw new QuantityNotUnderstood(text, 'this is too large to be a measured value.');
+  if (!(Math.abs(value) <= LARGEST_VALUE))
+    throw new QuantityNotUnderstood(text, 'this is too large to be a measured value.');
   return value;
 }

@@ -1,5 +1,6 @@
 import { FORMULAS } from '../measurement/formula';
 import { demandFinite } from '../measurement/reading-not-finite';
+import { LARGEST_VALUE } from '../quantities/largest-value';
 import { type JudgedCharacteristic } from './sample-verdict';
 
 /** The readings of one unit by characteristic key. */
@@ -12,7 +13,7 @@ export type ComputedValue = { state: 'value'; value: number } | { state: 'missin
  * Computes a characteristic from the readings of its unit.
  *
  * Readings may lie outside a formula's domain without being wrong: a dead output gives 0 V under load, and a regulation
- * against 0 V does not exist. That is "no value", not an error.
+ * against 0 V does not exist, and one against next to nothing is beyond all measure. That is "no value", not an error.
  *
  * @param characteristic one of kind "computed", its inputs in SI base units
  * @throws {RangeError} where the characteristic has no formula or binds no key to a formula input
@@ -44,7 +45,8 @@ function boundFormula({ formula, key }: JudgedCharacteristic) {
 
 function withinDomain(compute: () => number): ComputedValue {
   try {
-    return { state: 'value', value: compute() };
+    const value = compute();
+    return Math.abs(value) <= LARGEST_VALUE ? { state: 'value', value } : { state: 'no value' };
   } catch (error) {
     if (error instanceof RangeError) return { state: 'no value' };
     throw error;
