@@ -7,7 +7,7 @@ import { eq, isNull } from 'drizzle-orm';
 import { createHash } from 'node:crypto';
 
 /** Makes the file of an issued certificate and keeps it with its SHA-256; from then on the certificate is valid. */
-export async function makeCertificateFile({ db, clock }: Context, id: number): Promise<void> {
+async function makeCertificateFile({ db, clock }: Context, id: number): Promise<void> {
   const found = db.select().from(certificates).where(eq(certificates.id, id)).get();
   if (!found) throw new NotFound('This certificate');
   const bytes = await certificatePdf(found.data, found.dataDigest);
@@ -25,7 +25,16 @@ export async function makeCertificateFile({ db, clock }: Context, id: number): P
   });
 }
 
-/** Makes the files that a stop of the program left unmade between a decision and its paper. */
+/** Makes the file where that is possible. A release stands without it: what fails is logged, and made at the next start. */
+export async function tryCertificateFile(context: Context, id: number): Promise<void> {
+  try {
+    await makeCertificateFile(context, id);
+  } catch (error) {
+    context.log.error({ err: error, certificate: id }, 'the file of a certificate could not be made');
+  }
+}
+
+/** Makes the files that a stop or a failure left unmade between a decision and its paper. */
 export async function makeMissingFiles(context: Context): Promise<void> {
   const missing = context.db
     .select({ id: certificates.id })
@@ -33,5 +42,5 @@ export async function makeMissingFiles(context: Context): Promise<void> {
     .leftJoin(certificateFiles, eq(certificateFiles.certificateId, certificates.id))
     .where(isNull(certificateFiles.certificateId))
     .all();
-  for (const { id } of missing) await makeCertificateFile(context, id);
+  for (const { id } of missing) await tryCertificateFile(context, id);
 }

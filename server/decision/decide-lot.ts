@@ -3,7 +3,7 @@ import { lots } from '#db/schema/lots';
 import { type JudgedLot } from '#server/judging/sample-judging';
 import { type Caller } from '#server/caller';
 import { issueCertificate } from '#server/certificates/issue-certificate';
-import { makeCertificateFile } from '#server/certificates/make-certificate-file';
+import { tryCertificateFile } from '#server/certificates/make-certificate-file';
 import { type Context } from '#server/context';
 import { readLot } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
@@ -132,6 +132,6 @@ export async function decideLot(
     return undefined;
   });
   context.outbox.wake();
-  if (certificateId !== undefined) await makeCertificateFile(context, certificateId);
+  if (certificateId !== undefined) await tryCertificateFile(context, certificateId);
   return readLot(context.db, id);
 }

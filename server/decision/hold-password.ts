@@ -28,10 +28,16 @@ function recentlyWrong({ db, clock }: Context, caller: Caller): number {
  */
 export async function holdPassword(context: Context, caller: Caller, password: string): Promise<void> {
   const { db, passwords, clock, environment } = context;
-  if (recentlyWrong(context, caller) >= environment.signInAttempts)
-    throw new Problem(429, 'too-many-attempts', `Too many wrong passwords; sign again in ${MINUTES} minutes.`);
+  const holdLimit = () => {
+    if (recentlyWrong(context, caller) >= environment.signInAttempts)
+      throw new Problem(429, 'too-many-attempts', `Too many wrong passwords; sign again in ${MINUTES} minutes.`);
+  };
+  holdLimit();
   const found = db.select({ hash: people.passwordHash }).from(people).where(eq(people.id, caller.id)).get();
-  if (found?.hash && (await passwords.matches(password, found.hash))) return;
+  const right = typeof found?.hash === 'string' && (await passwords.matches(password, found.hash));
+  // Once more: others may have been tried while this one was checked.
+  holdLimit();
+  if (right) return;
   record(db, { at: clock.now(), person: caller, action: WRONG, subject: 'person', subjectId: caller.id });
   const message = 'This is not your password.';
   throw new Refused('password-wrong', message, [{ path: ['password'], message }]);
