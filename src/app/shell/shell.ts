@@ -4,6 +4,7 @@ import {
   computed,
   type ElementRef,
   inject,
+  Injector,
   signal,
   viewChild,
 } from '@angular/core';
@@ -15,6 +16,7 @@ import { Router, RouterLink, RouterOutlet } from '@angular/router';
 import { ROLE_TITLES } from '#shared/contract/roles';
 import { readCounts } from '#shared/contract/counts';
 import { readFront } from '#shared/contract/site';
+import { resumeSending } from '../bench/waiting/resume-sending';
 import { endpointResource } from '../data/api';
 import { problemOf } from '../data/api-problem';
 import { LiveCounts } from '../data/live-counts';
@@ -72,6 +74,7 @@ export class Shell {
 
   constructor() {
     if (this.session.mayCall(readCounts)) inject(LiveCounts).follow();
+    void resumeSending(inject(Injector));
   }
 
   protected skip(event: Event): void {

@@ -5,10 +5,13 @@ import { keepReading } from '#shared/contract/bench';
 import { listLots, type LotHead } from '#shared/contract/lots';
 import { endpointResource } from '../../data/api';
 import { may } from '../../session/may';
+import { PageLinks } from '../../shell/page-links';
 import { VerdictChip } from '../../ui/marks/verdict-chip';
 import { SeverityMark } from '../../ui/marks/severity-mark';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
+import { PartName } from '../../ui/part-name';
+import { ScrollRegion } from '../../ui/scroll-region';
 import { EmptyState } from '../../ui/states/empty-state';
 import { CountPipe } from '../../ui/values/count-pipe';
 import { MomentPipe } from '../../ui/values/moment-pipe';
@@ -17,7 +20,20 @@ import { ReadingQueue } from '../waiting/reading-queue';
 /** The lots whose sample is drawn: those being measured, and those still to be started. */
 @Component({
   selector: 'qr-bench-list-page',
-  imports: [CountPipe, EmptyState, Loaded, MatButton, MomentPipe, PageState, RouterLink, SeverityMark, VerdictChip],
+  imports: [
+    CountPipe,
+    EmptyState,
+    Loaded,
+    MatButton,
+    MomentPipe,
+    PageLinks,
+    PageState,
+    PartName,
+    RouterLink,
+    ScrollRegion,
+    SeverityMark,
+    VerdictChip,
+  ],
   templateUrl: './bench-list-page.html',
   styleUrl: './bench-list-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -1,5 +1,6 @@
 import {
   afterNextRender,
+  ApplicationRef,
   ChangeDetectionStrategy,
   Component,
   computed,
@@ -65,6 +66,7 @@ import { SampleOverview } from './sample-overview';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class BenchDesk {
+  private readonly application = inject(ApplicationRef);
   private readonly queue = inject(ReadingQueue);
   private readonly draft = inject(ReadingDraft);
   private readonly cursor = inject(BenchCursor);
@@ -103,7 +105,11 @@ export class BenchDesk {
     });
     this.sheet.stale.pipe(takeUntilDestroyed()).subscribe(() => this.stale.emit());
     this.commands.toGrid.pipe(takeUntilDestroyed()).subscribe(() => this.grid()?.focusCell());
-    this.commands.toPanel.pipe(takeUntilDestroyed()).subscribe((text) => this.panel()?.focusFirst(text));
+    this.commands.toPanel.pipe(takeUntilDestroyed()).subscribe((text) => {
+      // The next character may come before the next frame, as from a scanner: the panel must show this cell's field now.
+      this.application.tick();
+      this.panel()?.focusFirst(text);
+    });
   }
 
   /** Whether leaving would lose something: a reading half typed, or one this browser could not write down. */

@@ -154,7 +154,7 @@ export class DeskCommands {
 
   private withdraw(): void {
     if (!this.draft.mayLeave()) return;
-    this.snackBar.open(this.hand.withdrawLast(), undefined, { duration: 8000 });
+    this.snackBar.open(this.hand.withdrawLast());
     this.toGrid.next();
   }
 }

@@ -16,18 +16,18 @@ import { ReadingQueue } from '../waiting/reading-queue';
         This browser cannot keep readings. Leave the page open until they are sent.
       } @else if (waiting() > 0) {
         <qr-verdict-mark look="hold" />
-        {{ waiting() === 1 ? '1 entry' : waiting() + ' entries' }} waiting
+        {{ waiting() === 1 ? '1 reading' : waiting() + ' readings' }} waiting
       } @else if (queue.savedAt(); as at) {
         <qr-icon name="check" [size]="16" />
         Saved {{ time(at) }}
       }
     </span>
-    @if (waiting() > 0 && queue.unreachableSince()) {
+    @if (waiting() > 0 && queue.failing()) {
       <button type="button" class="link" (click)="queue.tryNow()">Try now</button>
     }
     @if (refused() > 0) {
       <button type="button" class="link nok" (click)="shown.emit()">
-        {{ refused() === 1 ? '1 entry' : refused() + ' entries' }} refused
+        {{ refused() === 1 ? '1 reading' : refused() + ' readings' }} refused
       </button>
     }
   `,

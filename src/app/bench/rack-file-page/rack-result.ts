@@ -44,7 +44,7 @@ export class RackResult {
   protected readonly columns = computed(() =>
     this.preview().columns.map(({ header, characteristicKey }) => ({
       header,
-      means: header === 'unit' ? 'unit' : (this.names().get(characteristicKey ?? '') ?? 'not understood'),
+      means: header === 'unit' ? 'unit number' : (this.names().get(characteristicKey ?? '') ?? 'not understood'),
     })),
   );
   protected readonly units = computed(() => {

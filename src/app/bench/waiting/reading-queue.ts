@@ -1,8 +1,9 @@
 import { computed, effect, inject, Injectable, signal, untracked } from '@angular/core';
-import { firstValueFrom, Subject } from 'rxjs';
+import { firstValueFrom, type Observable, Subject, timeout } from 'rxjs';
 import { keepReading, type Kept, setUnitAside, withdrawReading } from '#shared/contract/bench';
 import { ApiClient } from '../../data/api';
 import { problemOf } from '../../data/api-problem';
+import { Connection } from '../../data/connection';
 import { Session } from '../../session/session';
 import { type BenchAct, type WaitingAct } from './bench-act';
 import { failureKind, retryPause } from './retry-pause';
@@ -22,6 +23,7 @@ export class ReadingQueue {
   private readonly api = inject(ApiClient);
   private readonly shelf = inject(WaitingShelf);
   private readonly session = inject(Session);
+  private readonly connection = inject(Connection);
   private readonly all = signal<readonly WaitingAct[]>(this.shelf.read());
   private readonly unstored = signal<ReadonlySet<string>>(new Set());
   private readonly settling = new Subject<Settled>();
@@ -35,8 +37,8 @@ export class ReadingQueue {
   readonly refused = computed(() => this.all().filter((each) => each.refusal !== null));
   /** Whether something waits that this browser could not write down, so that closing the page would lose it. */
   readonly atRisk = computed(() => this.waiting().some(({ act }) => this.unstored().has(act.id)));
-  /** Since when the server does not answer; null while it does. */
-  readonly unreachableSince = signal<Date | null>(null);
+  /** Whether the last act could not be brought to the server. */
+  readonly failing = signal(false);
   /** When the server last acknowledged an act. */
   readonly savedAt = signal<Date | null>(null);
   readonly settled = this.settling.asObservable();
@@ -45,7 +47,10 @@ export class ReadingQueue {
     effect(() => {
       if (this.session.me() !== null) untracked(() => this.tryNow());
     });
-    globalThis.addEventListener('online', () => this.tryNow());
+    effect(() => {
+      if (this.connection.lostSince() === null) untracked(() => this.tryNow());
+    });
+    effect(() => this.connection.waitingReadings.set(this.waiting().length));
   }
 
   /** Takes an act over; from now on it is not lost. */
@@ -113,8 +118,8 @@ export class ReadingQueue {
         return true;
       }
       this.failures += 1;
+      this.failing.set(true);
       if (kind === 'stumbled') stumbledUnits.add(unitOf(waiting.act));
-      else this.unreachableSince.update((since) => since ?? problem.at);
       return kind === 'stumbled';
     }
   }
@@ -122,27 +127,27 @@ export class ReadingQueue {
   private async call(act: BenchAct): Promise<Kept | null> {
     if (act.kind === 'reading') {
       const params = { id: act.lotId, reading: act.id };
-      return firstValueFrom(this.api.call(keepReading, { params, body: act.body }));
+      return answered(this.api.call(keepReading, { params, body: act.body }));
     }
     const params = { id: act.lotId };
     const done =
       act.kind === 'withdrawal'
         ? this.api.call(withdrawReading, { params: { ...params, reading: act.readingId } })
         : this.api.call(setUnitAside, { params: { ...params, unit: act.unit }, body: { reason: act.reason } });
-    await firstValueFrom(done);
+    await answered(done);
     return null;
   }
 
   private acknowledge(act: BenchAct, kept: Kept | null): void {
     this.discard(act.id);
     this.failures = 0;
-    this.unreachableSince.set(null);
+    this.failing.set(false);
     this.savedAt.set(new Date());
     this.settling.next({ act, outcome: 'acknowledged', kept });
   }
 
   private refuse(waiting: WaitingAct, refusal: string): void {
-    this.unreachableSince.set(null);
+    this.failing.set(false);
     this.put({ ...waiting, refusal });
     this.settling.next({ act: waiting.act, outcome: 'refused', refusal });
   }
@@ -156,6 +161,13 @@ export class ReadingQueue {
       return [...others, waiting].sort((one, other) => one.order - other.order);
     });
   }
+}
+
+/** A server that says nothing for so long is asked again, in ms; sending twice changes nothing. */
+const PATIENCE = 20_000;
+
+function answered<T>(call: Observable<T>): Promise<T> {
+  return firstValueFrom(call.pipe(timeout(PATIENCE)));
 }
 
 function unitOf(act: BenchAct): string {

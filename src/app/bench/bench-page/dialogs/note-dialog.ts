@@ -3,6 +3,7 @@ import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
+import { formFieldDefaults } from '../../../ui/material-defaults';
 
 /** What the note is on, and what it says so far. */
 export interface NoteQuestion {
@@ -35,6 +36,7 @@ export interface NoteQuestion {
       margin-top: 12px;
     }
   `,
+  providers: [formFieldDefaults],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class NoteDialog {

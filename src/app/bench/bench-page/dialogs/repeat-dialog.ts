@@ -3,6 +3,7 @@ import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
+import { formFieldDefaults } from '../../../ui/material-defaults';
 import { type ReadingBody, REPEAT_REASON_TITLES, REPEAT_REASONS } from '#shared/contract/bench';
 
 /** What is repeated: "Unit 48, ripple at 500 mA", and what stands there now. */
@@ -20,6 +21,7 @@ type Repeat = NonNullable<ReadingBody['repeat']>;
   templateUrl: './repeat-dialog.html',
   styleUrl: './repeat-dialog.scss',
   host: { '(keydown)': 'press($event)' },
+  providers: [formFieldDefaults],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class RepeatDialog {
