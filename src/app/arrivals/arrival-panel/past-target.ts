@@ -8,25 +8,26 @@ import { MomentPipe } from '../../ui/values/moment-pipe';
   selector: 'qr-past-target',
   imports: [DurationPipe, Icon, MomentPipe],
   template: `
-    @if (late() || neededBy()) {
-      <p [class.late-note]="late()">
-        <qr-icon name="clock" [size]="18" />
-        <span>
-          @if (past() > 0) {
-            <b>{{ past() | duration }} past target.</b>&ngsp;
+    <p [class.late-note]="late()">
+      <qr-icon name="clock" [size]="18" />
+      <span>
+        @if (past() > 0) {
+          <b>{{ past() | duration }} past target.</b>&ngsp;
+        }
+        @if (neededBy(); as moment) {
+          @if (missed()) {
+            <b>Was needed by {{ moment | moment }}.</b>
+          } @else {
+            Needed by {{ moment | moment }}.
           }
-          @if (neededBy(); as moment) {
-            @if (missed()) {
-              <b>Was needed by {{ moment | moment }}.</b>
-            } @else {
-              Needed by {{ moment | moment }}.
-            }
-          }
-        </span>
-      </p>
-    }
+        }
+      </span>
+    </p>
   `,
   styles: `
+    :host([hidden]) {
+      display: none;
+    }
     p {
       display: flex;
       gap: 8px;
@@ -44,6 +45,7 @@ import { MomentPipe } from '../../ui/values/moment-pipe';
       font-weight: 700;
     }
   `,
+  host: { '[hidden]': '!late() && !neededBy()' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PastTarget {
