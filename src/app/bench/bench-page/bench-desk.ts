@@ -14,6 +14,7 @@ import {
 } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { type Bench, keepReading } from '#shared/contract/bench';
+import { LOT_STATUS_TITLES, type LotStatus, STATIONS } from '#shared/contract/lots';
 import { may } from '../../session/may';
 import { narrowerThan } from '../../shell/screen-width';
 import { ReadOnlyNote } from '../../ui/states/read-only-note';
@@ -35,6 +36,8 @@ import { PanelCaution } from './reading-panel/panel-caution';
 import { ReadingPanel } from './reading-panel/reading-panel';
 import { RunningVerdict } from './running-verdict';
 import { SampleOverview } from './sample-overview';
+
+const AT_BENCH: readonly LotStatus[] = STATIONS.bench;
 
 /** One lot on the bench: the sample, the grid of readings, and the panel where they are typed. */
 @Component({
@@ -88,6 +91,14 @@ export class BenchDesk {
   private readonly merged = narrowerThan(1360);
   private readonly mayKeep = may(keepReading);
 
+  /** Why nothing can be typed, where nothing can. */
+  protected readonly readOnly = computed(() => {
+    const { status } = this.bench().lot;
+    if (AT_BENCH.includes(status)) return 'Inspectors and quality measure. You see what they have measured so far.';
+    const reopened = status === 'submitted' ? ' Quality can open it again.' : '';
+    return `This lot has left the bench: ${LOT_STATUS_TITLES[status].toLowerCase()}.${reopened}`;
+  });
+
   constructor() {
     effect(() => {
       this.sheet.open(this.bench());
@@ -96,12 +107,11 @@ export class BenchDesk {
     // Typing goes to the grid at once, unless the person is already somewhere else on the page.
     afterNextRender(() => {
       if (document.activeElement === document.body || document.activeElement?.id === 'content')
-        this.grid()?.focusCell();
+        queueMicrotask(() => this.grid()?.focusCell());
     });
     effect(() => this.cursor.merged.set(this.merged()));
     effect(() => {
-      const atBench = ['drawn', 'measuring'].includes(this.bench().lot.status);
-      this.hand.mayMeasure.set(this.mayKeep() && atBench);
+      this.hand.mayMeasure.set(this.mayKeep() && AT_BENCH.includes(this.bench().lot.status));
     });
     this.sheet.stale.pipe(takeUntilDestroyed()).subscribe(() => this.stale.emit());
     this.commands.toGrid.pipe(takeUntilDestroyed()).subscribe(() => this.grid()?.focusCell());

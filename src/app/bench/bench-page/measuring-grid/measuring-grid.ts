@@ -1,5 +1,6 @@
 import {
   afterNextRender,
+  ApplicationRef,
   ChangeDetectionStrategy,
   Component,
   computed,
@@ -33,6 +34,7 @@ import { viewSize } from './view-size';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class MeasuringGrid {
+  private readonly application = inject(ApplicationRef);
   private readonly injector = inject(Injector);
   private readonly settings = inject(BenchSettings);
   private readonly draft = inject(ReadingDraft);
@@ -80,21 +82,23 @@ export class MeasuringGrid {
   constructor() {
     effect(() => {
       this.cursor.at();
-      untracked(() => this.afterRender(() => this.reveal()));
+      untracked(() => afterNextRender(() => this.reveal(), { injector: this.injector }));
     });
   }
 
-  /** Puts the focus on the cell where the bench stands. */
+  /**
+   * Puts the focus on the cell where the bench stands, at once: the next key may come before the next frame, as from a
+   * scanner or a fast typist, and must find this cell. Not to be called while a change is being drawn.
+   */
   focusCell(): void {
-    this.afterRender(() => {
-      this.reveal();
-      this.afterRender(() => {
-        const cell = this.cell();
-        if (cell === null) return;
-        this.revealAcross(cell);
-        cell.focus({ preventScroll: true });
-      });
-    });
+    this.application.tick();
+    this.reveal();
+    // Revealing may have scrolled the row in focus into the window of drawn rows.
+    this.application.tick();
+    const cell = this.cell();
+    if (cell === null) return;
+    this.revealAcross(cell);
+    cell.focus({ preventScroll: true });
   }
 
   protected scroll(): void {
@@ -151,9 +155,5 @@ export class MeasuringGrid {
     const right = cell.offsetLeft + cell.offsetWidth + VERDICT;
     if (cell.offsetLeft - UNIT < view.scrollLeft) view.scrollLeft = cell.offsetLeft - UNIT;
     else if (right > view.scrollLeft + view.clientWidth) view.scrollLeft = right - view.clientWidth;
-  }
-
-  private afterRender(work: () => void): void {
-    afterNextRender(work, { injector: this.injector });
   }
 }
