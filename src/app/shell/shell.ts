@@ -137,5 +137,5 @@ export class Shell {
 /** Whether a key belongs to the field the person is in. */
 function isTyping(target: EventTarget | null): boolean {
   if (!(target instanceof HTMLElement)) return false;
-  return target.isContentEditable || target.closest('input, textarea, select, [role="grid"]') !== null;
+  return target.isContentEditable || target.closest('input, textarea, select') !== null;
 }

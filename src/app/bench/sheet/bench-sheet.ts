@@ -49,7 +49,14 @@ export class BenchSheet {
   readonly lot = computed(() => judgeLot(this.rules(), this.verdicts(), this.groups()));
   readonly states = computed(() => this.verdicts().map(stateOf));
   readonly judgedUnits = computed(() => this.verdicts().filter(isJudged).length);
-  readonly missing = computed(() => this.verdicts().reduce((sum, { missing }) => sum + missing.length, 0));
+  /** Readings still to be taken; what is computed follows from them. */
+  readonly missing = computed(() => {
+    const computedKeys = this.bench()
+      .characteristics.filter(({ kind }) => kind === 'computed')
+      .map(({ key }) => key);
+    const typed = this.verdicts().map(({ missing }) => missing.filter((key) => !computedKeys.includes(key)).length);
+    return typed.reduce((sum, count) => sum + count, 0);
+  });
   readonly undecided = computed(() => this.verdicts().filter(({ verdict }) => verdict === 'undecided').length);
   /** Emits when somebody else's work shows through, so that the lot should be read again. */
   readonly stale = this.staleness.asObservable();

@@ -37,8 +37,9 @@ export class PanelCell {
     return `Unit ${this.cursor.at().unit}, ${lowerFirst(name)}${condition === '' ? '' : ` ${condition}`}`;
   });
   readonly place = computed(() => {
-    const { position, carton } = this.cursor.record();
-    return `Position ${formatNumber(position, 0)}, carton ${formatNumber(carton, 0)}`;
+    const { position, carton, setAside } = this.cursor.record();
+    const aside = setAside === null ? '' : `, set aside: ${setAside}`;
+    return `Position ${formatNumber(position, 0)}, carton ${formatNumber(carton, 0)}${aside}`;
   });
   /** "Repeat 1 of 2: poor contact" while a reading is being repeated. */
   readonly repeating = computed(() => {
