@@ -10,7 +10,7 @@ const MOST_LISTENERS = 500;
 
 interface Listener {
   response: Response;
-  /** Whether the person may still listen: asked at every heartbeat. */
+  /** Whether the person may still listen: asked each time before they are told. */
   mayListen: () => boolean;
   /** The figures it was told last. */
   told: string;
@@ -65,17 +65,19 @@ export class Stream {
 
   private tellChanges(): void {
     const counts = this.count();
-    for (const listener of this.listeners) if (listener.told !== figures(counts)) tell(listener, counts);
+    for (const listener of this.listeners) if (listener.told !== figures(counts)) tellOrEnd(listener, counts);
   }
 
   private beat(): void {
     if (this.listeners.size === 0) return;
     const counts = this.count();
-    for (const listener of this.listeners) {
-      if (listener.mayListen()) tell(listener, counts);
-      else listener.response.end();
-    }
+    for (const listener of this.listeners) tellOrEnd(listener, counts);
   }
+}
+
+function tellOrEnd(listener: Listener, counts: Counts): void {
+  if (listener.mayListen()) tell(listener, counts);
+  else listener.response.end();
 }
 
 function tell(listener: Listener, counts: Counts): void {

@@ -4,7 +4,7 @@ import { eq, sql } from 'drizzle-orm';
 import { record } from '#server/audit/record';
 import { type Caller } from '#server/caller';
 import { type Context } from '#server/context';
-import { Refused } from '#server/problems';
+import { Refused, Unauthenticated } from '#server/problems';
 import { endSessionsOf } from './end-sessions';
 
 export function keepPassword(db: Db, personId: number, passwordHash: string): void {
@@ -14,10 +14,8 @@ export function keepPassword(db: Db, personId: number, passwordHash: string): vo
     .run();
 }
 
-/** Whether the password is the one the person has now. */
-async function isOwnPassword({ db, passwords }: Context, personId: number, password: string): Promise<boolean> {
-  const person = db.select({ hash: people.passwordHash }).from(people).where(eq(people.id, personId)).get();
-  return typeof person?.hash === 'string' && (await passwords.matches(password, person.hash));
+function hashOf(db: Db, personId: number): string | null {
+  return db.select({ hash: people.passwordHash }).from(people).where(eq(people.id, personId)).get()?.hash ?? null;
 }
 
 /** Changes the own password and ends every other session of the person. */
@@ -27,7 +25,8 @@ export async function changePassword(
   { password, newPassword }: { password: string; newPassword: string },
 ): Promise<void> {
   const { db, clock, passwords } = context;
-  if (!(await isOwnPassword(context, caller.id, password)))
+  const own = hashOf(db, caller.id);
+  if (own === null || !(await passwords.matches(password, own)))
     throw new Refused('wrong-password', 'The password was not changed.', [
       { path: ['password'], message: 'This is not the password you have now.' },
     ]);
@@ -38,6 +37,9 @@ export async function changePassword(
   const hash = await passwords.hash(newPassword);
   db.transaction((tx) => {
     const now = clock.now();
+    // Hashing takes a while: whoever reset the account meanwhile keeps the last word.
+    if (hashOf(tx, caller.id) !== own)
+      throw new Unauthenticated('session-ended', 'Your session has ended. Sign in again.');
     keepPassword(tx, caller.id, hash);
     endSessionsOf(tx, caller.id, 'password-changed', now, caller.sessionId);
     record(tx, { at: now, person: caller, action: 'password-changed', subject: 'person', subjectId: caller.id });

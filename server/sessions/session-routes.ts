@@ -45,7 +45,7 @@ export function sessionRoutes(router: Router, context: Context): void {
     }
   });
   serve(router, contract.signOut, ({ request, response }) => {
-    signOut(context, refreshTokenOf(request));
+    signOut(context, refreshTokenOf(request), request.caller?.sessionId);
     clearCookies(context, response);
     return DONE;
   });
