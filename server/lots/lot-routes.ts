@@ -1,4 +1,5 @@
 import { type Context } from '#server/context';
+import { nonconformanceOf } from '#server/nonconformances/nonconformance-queries';
 import { Conflict } from '#server/problems';
 import { serve } from '#server/serve';
 import * as contract from '#shared/contract/lots';
@@ -13,7 +14,10 @@ export function lotRoutes(router: Router, context: Context): void {
   const { db } = context;
   serve(router, contract.listLots, ({ query }) => listLots(db, query));
   serve(router, contract.bookLot, ({ caller, body }) => bookLot(context, caller, body));
-  serve(router, contract.readLot, ({ params }) => readLot(db, params.id));
+  serve(router, contract.readLot, ({ caller, params }) => ({
+    ...readLot(db, params.id),
+    nonconformance: nonconformanceOf(db, caller, params.id),
+  }));
   serve(router, contract.correctLot, ({ caller, params, version, body }) =>
     correctLot(context, caller, params.id, version, body),
   );

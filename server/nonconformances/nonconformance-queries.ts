@@ -50,6 +50,17 @@ export function listNonconformances(db: Db, caller: Caller, page: { after?: stri
   );
 }
 
+/** The nonconformance of a lot, as far as the caller may see it. */
+export function nonconformanceOf(db: Db, caller: Caller, lotId: number): { id: number; number: string } | null {
+  const found = db
+    .select({ id: nonconformances.id, number: nonconformances.number })
+    .from(nonconformances)
+    .innerJoin(lots, eq(lots.id, nonconformances.lotId))
+    .where(and(visibleTo(caller), eq(lots.id, lotId)))
+    .get();
+  return found ?? null;
+}
+
 /** @throws {NotFound} also for one that the caller may not see */
 export function readNonconformance(db: Db, caller: Caller, id: number): Nonconformance {
   const found = joined(db)

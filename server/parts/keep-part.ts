@@ -27,7 +27,7 @@ export function addPart({ db, clock }: Context, caller: Caller, body: Body): Par
     holdOwnNumber(tx, undefined, body.number);
     const { id } = tx.insert(parts).values(columnsOf(body)).returning({ id: parts.id }).get();
     record(tx, { at: clock.now(), person: caller, action: 'added', subject: 'part', subjectId: id, after: body });
-    return findPart(tx, id);
+    return findPart(tx, caller, id);
   });
 }
 
@@ -48,6 +48,6 @@ export function changePart(
       .run();
     const change = { action: 'changed', subject: 'part', subjectId: id, before, after: body };
     record(tx, { at: clock.now(), person: caller, ...change });
-    return findPart(tx, id);
+    return findPart(tx, caller, id);
   });
 }

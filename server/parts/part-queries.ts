@@ -1,8 +1,11 @@
 import { type Db } from '#db/open-database';
 import { parts } from '#db/schema/parts';
 import { planRevisions, plans } from '#db/schema/plans';
+import { type Caller, mayCall } from '#server/caller';
+import { readsDrafts } from '#server/plans/plan-queries';
 import { NotFound } from '#server/problems';
 import { type ElectricalModel, type Part } from '#shared/contract/parts';
+import { readPlan } from '#shared/contract/plans';
 import { and, asc, eq } from 'drizzle-orm';
 
 type PartRow = typeof parts.$inferSelect;
@@ -24,17 +27,20 @@ function withPlan(db: Db) {
 }
 type Row = ReturnType<ReturnType<typeof withPlan>['all']>[number];
 
-function partOf({ part, plan, effective }: Row): Part {
-  return { ...partOfRow(part), plan: plan && { ...plan, effectiveRevision: effective } };
+/** A plan is named to whoever reads plans, one of which nothing is in force only to whoever reads drafts. */
+function partOf({ part, plan, effective }: Row, caller: Caller): Part {
+  const isSeen = mayCall(caller, readPlan) && (effective !== null || readsDrafts(caller));
+  return { ...partOfRow(part), plan: isSeen && plan ? { ...plan, effectiveRevision: effective } : null };
 }
 
-export function listParts(db: Db): Part[] {
-  return withPlan(db).orderBy(asc(parts.number)).all().map(partOf);
+export function listParts(db: Db, caller: Caller): Part[] {
+  const rows = withPlan(db).orderBy(asc(parts.number)).all();
+  return rows.map((row) => partOf(row, caller));
 }
 
 /** @throws {NotFound} */
-export function findPart(db: Db, id: number): Part {
+export function findPart(db: Db, caller: Caller, id: number): Part {
   const row = withPlan(db).where(eq(parts.id, id)).get();
   if (!row) throw new NotFound('This part');
-  return partOf(row);
+  return partOf(row, caller);
 }

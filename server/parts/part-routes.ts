@@ -7,8 +7,8 @@ import { findPart, listParts } from './part-queries';
 
 export function partRoutes(router: Router, context: Context): void {
   const { db } = context;
-  serve(router, contract.listParts, () => ({ items: listParts(db) }));
-  serve(router, contract.readPart, ({ params }) => findPart(db, params.id));
+  serve(router, contract.listParts, ({ caller }) => ({ items: listParts(db, caller) }));
+  serve(router, contract.readPart, ({ caller, params }) => findPart(db, caller, params.id));
   serve(router, contract.addPart, ({ caller, body }) => addPart(context, caller, body));
   serve(router, contract.changePart, ({ caller, params, version, body }) =>
     changePart(context, caller, { id: params.id, version, body }),

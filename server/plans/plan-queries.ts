@@ -10,7 +10,7 @@ import { type PlanRow, plansWithParts, revisionHeads, type RevisionHead, revisio
 type Head = Omit<Plan, 'revisions' | 'approveOwn'>;
 
 /** Whether the caller also reads what is not, or not yet, in force; the dock and the bench work to what is. */
-function readsDrafts(caller: Caller): boolean {
+export function readsDrafts(caller: Caller): boolean {
   return hasRole(caller, 'quality', 'engineering', 'auditor');
 }
 
