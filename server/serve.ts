@@ -49,8 +49,17 @@ function parse<S extends z.ZodType>(schema: S, value: unknown): z.output<S> {
   return schema.parse(value);
 }
 
+/** A reply that has not its shape is a fault of the program; it must not pass for one of the request. */
+function checked(endpoint: Endpoint, reply: unknown): unknown {
+  const read = endpoint.reply.safeParse(reply);
+  if (read.success) return read.data;
+  throw new Error(`The reply of ${endpoint.method} ${endpoint.path} is not as the contract says.`, {
+    cause: read.error,
+  });
+}
+
 function send(endpoint: Endpoint, response: Response, reply: unknown): void {
-  const parsed = endpoint.reply.parse(reply);
+  const parsed = checked(endpoint, reply);
   response.status(endpoint.status);
   if (endpoint.media !== undefined) {
     const { bytes, fileName } = parsed as { bytes: Uint8Array; fileName: string };

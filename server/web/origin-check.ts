@@ -16,7 +16,8 @@ function isOurs(request: Request, publicUrl: string | undefined): boolean {
     return site === undefined || site === 'same-origin' || site === 'none';
   }
   if (publicUrl !== undefined) return origin === new URL(publicUrl).origin;
-  return hostOf(origin) === request.get('host');
+  const host = hostOf(origin);
+  return host !== undefined && host === request.get('host');
 }
 
 /** Refuses requests that change something and come from a page of another site. */

@@ -21,17 +21,12 @@ const sums = {
   unitsReleased: sql<number>`coalesce(sum(${lotSummaries.unitsReleased}), 0)`,
 };
 
-function dayAfter(day: string): string {
-  const next = new Date(`${day}T00:00:00.000Z`);
-  next.setUTCDate(next.getUTCDate() + 1);
-  return next.toISOString();
-}
-
 /** Decisions from the first day to the last, both included (UTC). */
 function within({ from, to, partId, supplierId }: Filter): SQL | undefined {
   return and(
     from === undefined ? undefined : gte(lotSummaries.decidedAt, from),
-    to === undefined ? undefined : lt(lotSummaries.decidedAt, dayAfter(to)),
+    // Later as text than every instant of that day.
+    to === undefined ? undefined : lt(lotSummaries.decidedAt, `${to}T24`),
     partId === undefined ? undefined : eq(lotSummaries.partId, partId),
     supplierId === undefined ? undefined : eq(lotSummaries.supplierId, supplierId),
   );
