@@ -215,8 +215,12 @@ describe('the bench page', () => {
     await focusOn(1, 'no_load');
     await press('1');
     expect(document.querySelector('qr-repeat-dialog')?.textContent).toContain('17.10');
-    const dialog = document.querySelector('qr-repeat-dialog');
-    if (dialog) await press('2', dialog);
+    const dialog = document.querySelector('qr-repeat-dialog') ?? page;
+    await press('7', dialog);
+    await press('3', dialog);
+    expect(dialog.querySelector('input:checked')).toBeNull();
+    await new Promise((resolve) => setTimeout(resolve, 450));
+    await press('2', dialog);
     document.querySelector<HTMLButtonElement>('qr-repeat-dialog button[type=submit]')?.click();
     await fixture.whenStable();
     await vi.waitFor(() => expect(panel()).toContain('Repeat 1 of 2: wrong range or scale'));

@@ -17,6 +17,7 @@ import { BenchDesk } from './bench-desk';
   imports: [BenchDesk, EmptyState, Loaded, MatButton, PageState, RouterLink],
   template: `
     @if (phone()) {
+      <h1 class="unseen">Bench</h1>
       <qr-empty-state title="Use a tablet or a bench screen." text="The bench needs more room than this screen has.">
         <a matButton="outlined" [routerLink]="['/lots', id()]">Open the lot</a>
       </qr-empty-state>

@@ -26,6 +26,7 @@ export class DeskCommands {
 
   /** Does what a key in the grid asks for. */
   obey(command: BenchCommand): void {
+    if (this.questions.open()) return;
     if (command.does === 'all-keys') this.questions.keys().subscribe(() => this.toGrid.next());
     else if (command.does === 'escape') this.escape();
     else if (this.hand.mayMeasure()) this.measure(command);
@@ -34,6 +35,8 @@ export class DeskCommands {
   keep(order?: WalkOrder): void {
     const result = this.hand.keep(order);
     if (result === 'kept' || result === 'passed-by') this.toGrid.next();
+    // The questioned reading is selected: the next digit replaces it, Enter keeps it.
+    if (result === 'held' && this.draft.armed()) this.toPanel.next(undefined);
     if (result === 'needs-repeat') this.askRepeat(() => this.keep(order));
     if (result === 'needs-reason') this.hand.hold('Say what is wrong: press the number of the reason.');
   }

@@ -22,6 +22,11 @@ export class BenchQuestions {
   private readonly sheet = inject(BenchSheet);
   private readonly cursor = inject(BenchCursor);
 
+  /** Whether a question waits for its answer; the keys are not the grid's then. */
+  open(): boolean {
+    return this.dialog.openDialogs.length > 0;
+  }
+
   /** Why a reading is repeated; undefined when it is not. */
   repeat(standing: string): Observable<Repeat | undefined> {
     const data: RepeatQuestion = { what: this.what(), standing };

@@ -12,6 +12,9 @@ export interface RepeatQuestion {
   readonly standing: string;
 }
 
+/** No key for so long, in ms, ends what was being typed when the dialog opened. */
+const PAUSE = 400;
+
 type Repeat = NonNullable<ReadingBody['repeat']>;
 
 /** Asks why a reading is repeated; the first one stays on record. Keys 1 to 6 choose, Enter goes on. */
@@ -26,6 +29,9 @@ type Repeat = NonNullable<ReadingBody['repeat']>;
 })
 export class RepeatDialog {
   private readonly dialog = inject<MatDialogRef<RepeatDialog, Repeat>>(MatDialogRef);
+
+  private lastKey = performance.now();
+  private seen = false;
 
   protected readonly question = inject<RepeatQuestion>(MAT_DIALOG_DATA);
   protected readonly reasons = REPEAT_REASONS.map((value) => ({ value, title: REPEAT_REASON_TITLES[value] }));
@@ -46,10 +52,25 @@ export class RepeatDialog {
   }
 
   protected press(event: KeyboardEvent): void {
+    if (this.isStillTyping(event)) {
+      event.preventDefault();
+      return;
+    }
     const inNote = event.target instanceof HTMLInputElement && event.target.type === 'text';
     const chosen = this.reasons[Number(event.key) - 1];
     if (inNote || chosen === undefined) return;
     event.preventDefault();
     this.reason.set(chosen.value);
+  }
+
+  /**
+   * Somebody who types over a kept reading without looking goes on typing after the first digit; those keys are meant for
+   * the reading and choose nothing here. Only a pause shows that the dialog was seen.
+   */
+  private isStillTyping({ timeStamp, key }: KeyboardEvent): boolean {
+    const paused = timeStamp - this.lastKey >= PAUSE;
+    this.lastKey = timeStamp;
+    this.seen ||= paused || key === 'Escape' || key === 'Tab';
+    return !this.seen;
   }
 }
