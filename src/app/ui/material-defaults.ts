@@ -1,3 +1,4 @@
+import { Dialog } from '@angular/cdk/dialog';
 import { type Provider } from '@angular/core';
 import { MatDialog } from '@angular/material/dialog';
 import { MAT_FORM_FIELD_DEFAULT_OPTIONS, type MatFormFieldDefaultOptions } from '@angular/material/form-field';
@@ -20,6 +21,7 @@ export const formFieldDefaults: Provider = { provide: MAT_FORM_FIELD_DEFAULT_OPT
 export const materialDefaults: Provider[] = [
   formFieldDefaults,
   { provide: MAT_SNACK_BAR_DEFAULT_OPTIONS, useValue: { duration: 8000 } },
+  Dialog,
   MatDialog,
   MatSnackBar,
 ];

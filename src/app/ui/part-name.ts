@@ -9,7 +9,7 @@ import { ChangeDetectionStrategy, Component, input } from '@angular/core';
     :host {
       display: inline-block;
       max-width: 340px;
-      overflow-wrap: anywhere;
+      overflow-wrap: break-word;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -19,7 +19,7 @@ import { CertificateStatus } from '../certificate-status';
   styles: `
     .name {
       max-width: 340px;
-      overflow-wrap: anywhere;
+      overflow-wrap: break-word;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -16,7 +16,7 @@ interface Cell {
   selector: 'qr-reading-table',
   imports: [ScrollRegion, VerdictMark],
   template: `
-    <div class="scroll" qrScrollRegion="Readings that count">
+    <div class="scroll" qrScrollRegion="Table of readings">
       <table class="table">
         <thead>
           <tr>

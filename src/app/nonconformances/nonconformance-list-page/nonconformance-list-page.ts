@@ -17,7 +17,7 @@ import { MomentPipe } from '../../ui/values/moment-pipe';
   styles: `
     .name {
       max-width: 300px;
-      overflow-wrap: anywhere;
+      overflow-wrap: break-word;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -13,7 +13,7 @@ import { ScrollRegion } from '../../ui/scroll-region';
   styles: `
     .name {
       max-width: 360px;
-      overflow-wrap: anywhere;
+      overflow-wrap: break-word;
     }
     .quiet {
       margin-left: 6px;
