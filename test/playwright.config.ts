@@ -19,6 +19,7 @@ export default defineConfig({
     viewport: { width: 1440, height: 900 },
     reducedMotion: 'reduce',
     trace: 'retain-on-failure',
+    actionTimeout: 15_000,
     launchOptions: {
       executablePath: '/usr/bin/chromium',
       args: ['--no-sandbox', '--disable-gpu', '--disable-quic', '--disable-background-networking'],

@@ -40,7 +40,9 @@ test('killed in the middle of a bench session, the program has lost no acknowled
   for (let kill = 0; kill < KILLS; kill += 1) {
     const server = await startServer(folder);
     await signedIn(request, server.address, 'inspector');
-    const { items } = (await (await request.get(`${server.address}/api/lots?station=bench`)).json()) as { items: LotHead[] };
+    const { items } = (await (await request.get(`${server.address}/api/lots?station=bench`)).json()) as {
+      items: LotHead[];
+    };
     lotId = items[0]?.id ?? 0;
     const bench = (await (await request.get(`${server.address}/api/lots/${lotId}/bench`)).json()) as Bench;
     const cells = freeCells(bench);
@@ -70,7 +72,9 @@ test('killed in the middle of a bench session, the program has lost no acknowled
   expect(acknowledged.length).toBeGreaterThanOrEqual(KILLS * BEFORE_THE_KILL);
   expect(acknowledged.filter((id) => !kept.includes(id))).toEqual([]);
   expect(new Set(kept).size).toBe(kept.length);
-  const cells = bench.readings.filter(({ withdrawn }) => !withdrawn).map((one) => `${one.unit}/${one.characteristicKey}/${one.attempt}`);
+  const cells = bench.readings
+    .filter(({ withdrawn }) => !withdrawn)
+    .map((one) => `${one.unit}/${one.characteristicKey}/${one.attempt}`);
   expect(new Set(cells).size).toBe(cells.length);
   const chain = (await (await request.get(`${server.address}/api/audit/verification`)).json()) as { intact: boolean };
   expect(chain.intact).toBe(true);

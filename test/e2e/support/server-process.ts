@@ -20,7 +20,13 @@ function ended(child: ChildProcess): Promise<number | null> {
 export function startServer(dataFolder: string, port = 0): Promise<ServerProcess> {
   const child = spawn('node', ['dist/server/main.js'], {
     cwd: root,
-    env: { ...process.env, PORT: String(port), QUIETRAIL_DATA: dataFolder, PASSWORD_COST: '4', SIGN_IN_ATTEMPTS: '100' },
+    env: {
+      ...process.env,
+      PORT: String(port),
+      QUIETRAIL_DATA: dataFolder,
+      PASSWORD_COST: '4',
+      SIGN_IN_ATTEMPTS: '100',
+    },
     stdio: ['ignore', 'pipe', 'inherit'],
   });
   const exit = ended(child);
