@@ -213,14 +213,16 @@ describe('the bench page', () => {
     open();
     await load(benchReply({ readings: [readingOf(1, 'no_load', 17.1)] }));
     await focusOn(1, 'no_load');
+    const clock = vi.spyOn(performance, 'now').mockReturnValue(1000);
     await press('1');
     expect(document.querySelector('qr-repeat-dialog')?.textContent).toContain('17.10');
     const dialog = document.querySelector('qr-repeat-dialog') ?? page;
     await press('7', dialog);
     await press('3', dialog);
     expect(dialog.querySelector('input:checked')).toBeNull();
-    await new Promise((resolve) => setTimeout(resolve, 450));
+    clock.mockReturnValue(1400);
     await press('2', dialog);
+    clock.mockRestore();
     document.querySelector<HTMLButtonElement>('qr-repeat-dialog button[type=submit]')?.click();
     await fixture.whenStable();
     await vi.waitFor(() => expect(panel()).toContain('Repeat 1 of 2: wrong range or scale'));

@@ -67,9 +67,10 @@ export class RepeatDialog {
    * Somebody who types over a kept reading without looking goes on typing after the first digit; those keys are meant for
    * the reading and choose nothing here. Only a pause shows that the dialog was seen.
    */
-  private isStillTyping({ timeStamp, key }: KeyboardEvent): boolean {
-    const paused = timeStamp - this.lastKey >= PAUSE;
-    this.lastKey = timeStamp;
+  private isStillTyping({ key }: KeyboardEvent): boolean {
+    const now = performance.now();
+    const paused = now - this.lastKey >= PAUSE;
+    this.lastKey = now;
     this.seen ||= paused || key === 'Escape' || key === 'Tab';
     return !this.seen;
   }
