@@ -22,6 +22,8 @@ const BENCH = [
   { keys: ['Esc'], does: 'Undo the edit; again leaves the grid' },
   { keys: ['R'], does: 'Repeat a reading, with a reason' },
   { keys: ['H'], does: 'Set the unit aside, with a reason' },
+  { keys: ['N'], does: 'Note on the reading' },
+  { keys: ['Ctrl', 'Z'], does: 'Take the last kept reading back; it stays on record' },
 ];
 
 /** All keys of the product in one list. */
