@@ -1,6 +1,8 @@
 import { people } from '#db/schema/people';
 import { createApp } from '#server/app';
+import { verifyChain } from '#server/audit/verify-chain';
 import { Stream } from '#server/events/stream';
+import { firstAdminLink } from '#server/sessions/open-site';
 import { eq } from 'drizzle-orm';
 import { type AddressInfo, type Server } from 'node:net';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
@@ -16,6 +18,17 @@ beforeEach(async () => {
   site = await testSite();
 });
 afterEach(() => site.close());
+
+describe('a name with half a character in it', () => {
+  it('does not break the chain of the audit trail', async () => {
+    site.db.$client.exec('delete from person_roles; delete from sessions; delete from people');
+    const link = firstAdminLink(site.context) ?? '';
+    const token = link.slice(link.indexOf('#') + 1);
+    const body = { token, name: 'Addis \ud800', email: 'admin@hollowmere.example', newPassword: NEW_PASSWORD };
+    await site.nobody().post('/api/one-time-link/first-admin').send(body).expect(200);
+    expect(await verifyChain(site.db)).toMatchObject({ entries: 1, intact: true });
+  });
+});
 
 describe('signing out', () => {
   it('ends the session also where only the access cookie is left', async () => {
