@@ -168,9 +168,12 @@ export const reopenLot = endpoint({
   reply: done,
 });
 
+/** Many times the largest sample's readings, and little enough to be read while others wait. */
+const LONGEST_RACK_FILE = 5_000_000;
+
 const rackBody = z.object({
   fileName: z.string().trim().min(1).max(200),
-  text: z.string().min(1, 'The file is empty.'),
+  text: z.string().min(1, 'The file is empty.').max(LONGEST_RACK_FILE, 'A rack file has at most 5 million characters.'),
   /** Instruments the rack measured with, by kind. */
   instrumentIds: z.array(id).max(10),
 });

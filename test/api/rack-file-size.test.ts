@@ -21,6 +21,18 @@ describe('a file that is no rack file of this lot', () => {
     return body as RackPreview;
   }
 
+  it('is refused unread when it is larger than any sample', async () => {
+    const file = {
+      fileName: 'rack.csv',
+      text: `unit,v_loaded\n${`${','.repeat(9_999)}\n`.repeat(501)}`,
+      instrumentIds: [],
+    };
+    const { body } = await site.as('inspector').post(`/api/lots/${lot.id}/rack-file/preview`).send(file).expect(400);
+    expect(body).toMatchObject({
+      errors: [{ path: ['text'], message: 'A rack file has at most 5 million characters.' }],
+    });
+  });
+
   it.each([
     ['with rows without end', `unit,v_loaded\n${'1,12\n'.repeat(300_000)}`, /more than 10 000 rows/],
     ['with more columns than a plan has', `unit${',v_loaded'.repeat(1_000)}\n1`, /1 001 columns/],
