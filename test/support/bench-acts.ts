@@ -32,7 +32,7 @@ export function typedReading(unit: number, characteristicKey: string, text: stri
 export function keep(
   site: TestSite,
   lot: Pick<Lot, 'id'>,
-  reading: ReturnType<typeof typedReading>,
+  reading: object,
   { id = randomUUID() as string, who = 'inspector' as Role } = {},
 ) {
   return site.as(who).put(`/api/lots/${lot.id}/readings/${id}`).send(reading);
