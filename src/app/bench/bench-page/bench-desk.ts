@@ -34,6 +34,7 @@ import { MeasuringGrid } from './measuring-grid/measuring-grid';
 import { NumberPad } from './number-pad';
 import { PanelCaution } from './reading-panel/panel-caution';
 import { ReadingPanel } from './reading-panel/reading-panel';
+import { RefusedActs } from './refused-acts';
 import { RunningVerdict } from './running-verdict';
 import { SampleOverview } from './sample-overview';
 
@@ -51,6 +52,7 @@ const AT_BENCH: readonly LotStatus[] = STATIONS.bench;
     PanelCaution,
     ReadingPanel,
     ReadOnlyNote,
+    RefusedActs,
     RunningVerdict,
     SampleOverview,
   ],
@@ -132,10 +134,10 @@ export class BenchDesk {
   }
 
   protected showRefused(): void {
-    const refused = this.queue.refused().find(({ act }) => act.lotId === this.bench().lot.id);
-    const reading = refused?.act.kind === 'reading' ? refused.act : undefined;
-    if (reading === undefined || !this.draft.mayLeave()) return;
-    this.cursor.choose(reading.unit, reading.body.characteristicKey);
+    const acts = this.queue.refused().map(({ act }) => act);
+    const refused = acts.find((act) => act.kind === 'reading' && act.lotId === this.bench().lot.id);
+    if (refused?.kind !== 'reading' || !this.draft.mayLeave()) return;
+    this.cursor.choose(refused.unit, refused.body.characteristicKey);
     this.grid()?.focusCell();
   }
 }

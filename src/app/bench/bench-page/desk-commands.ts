@@ -3,10 +3,10 @@ import { MatSnackBar } from '@angular/material/snack-bar';
 import { Subject } from 'rxjs';
 import { type BenchCommand } from '#shared/bench/bench-key';
 import { type WalkOrder } from '#shared/bench/grid-walk';
-import { readingText } from '../../ui/values/reading-text';
 import { BenchHand } from '../bench-hand';
 import { BenchCursor } from '../sheet/bench-cursor';
 import { ReadingDraft } from '../sheet/reading-draft';
+import { readingWords } from '../sheet/reading-words';
 import { countingAt } from '../sheet/unit-record';
 import { BenchQuestions } from './dialogs/bench-questions';
 
@@ -150,9 +150,7 @@ export class DeskCommands {
   private standing(): string {
     const { characteristic } = this.cursor.stop();
     const reading = countingAt(this.cursor.record(), characteristic.key);
-    const value = reading?.value ?? null;
-    if (value === null || characteristic.kind === 'attribute') return reading?.pass === true ? 'pass' : 'fail';
-    return readingText(value, characteristic.unit, characteristic.decimals);
+    return reading === undefined ? '' : readingWords(reading, characteristic);
   }
 
   private withdraw(): void {

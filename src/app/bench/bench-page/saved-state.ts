@@ -64,7 +64,9 @@ export class SavedState {
   readonly shown = output();
 
   protected readonly waiting = computed(() => this.ofLot(this.queue.waiting()));
-  protected readonly refused = computed(() => this.ofLot(this.queue.refused()));
+  protected readonly refused = computed(() =>
+    this.ofLot(this.queue.refused().filter(({ act }) => act.kind === 'reading')),
+  );
   protected readonly time = clockTime;
 
   private ofLot(acts: readonly { act: { lotId: number } }[]): number {

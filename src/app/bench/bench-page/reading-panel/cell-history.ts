@@ -2,9 +2,9 @@ import { ChangeDetectionStrategy, Component, computed, inject, input } from '@an
 import { REPEAT_REASON_TITLES } from '#shared/contract/bench';
 import { type Characteristic } from '#shared/contract/plans';
 import { MomentPipe } from '../../../ui/values/moment-pipe';
-import { readingText } from '../../../ui/values/reading-text';
 import { type BenchReading } from '../../sheet/bench-reading';
 import { BenchSheet } from '../../sheet/bench-sheet';
+import { readingWords } from '../../sheet/reading-words';
 
 /** The readings of one cell, each with who took it, when and with what; repeats with their reason. */
 @Component({
@@ -60,19 +60,13 @@ export class CellHistory {
   protected readonly lines = computed(() =>
     this.readings().map((reading) => ({
       id: reading.id,
-      value: this.valueOf(reading),
+      value: readingWords(reading, this.characteristic()),
       takenAt: reading.takenAt,
       withdrawn: reading.withdrawn,
       by: this.byWhom(reading),
       why: this.whyOf(reading),
     })),
   );
-
-  private valueOf({ value, pass }: BenchReading): string {
-    const characteristic = this.characteristic();
-    if (pass !== null || value === null || characteristic.kind === 'attribute') return pass === true ? 'Pass' : 'Fail';
-    return readingText(value, characteristic.unit, characteristic.decimals);
-  }
 
   private byWhom({ takenBy, instrumentId, state, withdrawn }: BenchReading): string {
     const instrument = this.sheet.bench().instruments.find(({ id }) => id === instrumentId);

@@ -6,6 +6,7 @@ import { LOOK_WORDS, lookOf } from '../../../ui/verdict-look';
 import { BenchCursor } from '../../sheet/bench-cursor';
 import { BenchSheet } from '../../sheet/bench-sheet';
 import { ReadingDraft } from '../../sheet/reading-draft';
+import { readingWords } from '../../sheet/reading-words';
 import { readingsAt, refusedAt } from '../../sheet/unit-record';
 
 /** What the panel says about the cell in focus: the value typed or kept, its verdict, its earlier readings. */
@@ -31,7 +32,11 @@ export class PanelCell {
   readonly look = computed(() => lookOf(this.judged().verdict));
   readonly word = computed(() => LOOK_WORDS[this.look()]);
   readonly readings = computed(() => readingsAt(this.cursor.record(), this.cursor.at().key));
-  readonly refused = computed(() => refusedAt(this.cursor.record(), this.cursor.at().key));
+  readonly refused = computed(() => {
+    const reading = refusedAt(this.cursor.record(), this.cursor.at().key);
+    if (reading === undefined) return null;
+    return { id: reading.id, what: readingWords(reading, this.characteristic()), why: reading.refusal };
+  });
   readonly title = computed(() => {
     const { name, condition } = this.characteristic();
     return `Unit ${this.cursor.at().unit}, ${lowerFirst(name)}${condition === '' ? '' : ` ${condition}`}`;
