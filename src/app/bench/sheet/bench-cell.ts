@@ -94,10 +94,11 @@ function mergedCell(column: BenchColumn, cells: readonly BenchCell[]): BenchCell
   const asked = cells.filter(({ unasked, text }) => !unasked || text !== '');
   const judged = asked.filter(({ text }) => text !== '');
   const failing = asked.find(({ look }) => look === 'nok');
+  const text = failing ? 'Fail' : mergedText(judged.length, asked.length);
   return {
     key: column.key,
     shape: column.shape,
-    text: failing ? 'Fail' : mergedText(judged.length, asked.length),
+    text,
     value: null,
     look: failing ? 'nok' : judged.length === asked.length && asked.length > 0 ? 'ok' : 'open',
     unasked: asked.length === 0,
@@ -105,7 +106,7 @@ function mergedCell(column: BenchColumn, cells: readonly BenchCell[]): BenchCell
     typed: cells.some(({ typed }) => typed),
     waiting: cells.some(({ waiting }) => waiting),
     refusal: cells.find(({ refusal }) => refusal !== null)?.refusal ?? null,
-    label: cells.map(({ label }) => label).join('; '),
+    label: [text, ...cells.map(({ label }) => label)].filter((part) => part !== '').join('; '),
   };
 }
 
