@@ -7,9 +7,10 @@ import { type Context } from '#server/context';
 import { findLot } from '#server/lots/lot-rows';
 import { recordLot } from '#server/lots/record-lot';
 import { Conflict, Forbidden, holdVersion, NotFound } from '#server/problems';
+import { type UnitVerdict } from '#shared/verdict/sample-verdict';
 import { and, eq } from 'drizzle-orm';
 import { lotAtBench } from './bench-lot';
-import { countingReadings, unitOf } from '#server/judging/lot-judging';
+import { countingReadings, type LotRules, unitOf } from '#server/judging/lot-judging';
 import { judgeSampleOf } from '#server/judging/sample-judging';
 import { rejudge, type RunningVerdicts } from '#server/judging/running-verdicts';
 
@@ -96,24 +97,37 @@ export function setUnitAside(
   });
 }
 
+/** Readings still to be taken; what is computed from them is not counted beside them. */
+function readingsMissing(units: readonly UnitVerdict[], characteristics: LotRules['characteristics']): number {
+  const computed = new Set(
+    characteristics.flatMap(({ content }) => (content.kind === 'computed' ? [content.key] : [])),
+  );
+  return units.reduce((sum, { missing }) => sum + missing.filter((key) => !computed.has(key)).length, 0);
+}
+
 /** Submits a lot for decision: everything required is judged, or a rejection number is reached. */
 export function submitLot(context: Context, verdicts: RunningVerdicts, caller: Caller, id: number, version: number) {
   const at = context.clock.now();
   context.db.transaction((tx) => {
     const lot = lotAtBench(tx, id);
     holdVersion(`Lot ${lot.number}`, lot.version, version);
-    const { verdict } = judgeSampleOf(tx, lot);
+    const { verdict, rules } = judgeSampleOf(tx, lot);
     const settled = judgeSampleOf(tx, lot, { submitting: true }).verdict.lot;
     // A verdict may hang on a reading that is missing beyond its own group; without it nobody could sign.
     if ((!verdict.lot.stop && !verdict.lot.complete) || settled.verdict === 'continue') {
-      const missing = verdict.units.reduce((sum, unit) => sum + unit.missing.length, 0);
-      throw new Conflict('readings-missing', `${missing} readings are still missing.`);
+      const missing = readingsMissing(verdict.units, rules.characteristics);
+      throw new Conflict(
+        'readings-missing',
+        `${missing} ${missing === 1 ? 'reading is' : 'readings are'} still missing.`,
+      );
     }
     tx.update(lots)
       .set({ status: 'submitted', submittedAt: at.toISOString(), submittedById: caller.id, version: lot.version + 1 })
       .where(eq(lots.id, id))
       .run();
-    recordLot(tx, { at, person: caller, action: 'submitted', lotId: id, note: settled.reason });
+    const shows = settled.verdict === 'accepted' ? 'The sample is acceptable' : 'The sample is to be rejected';
+    const after = { verdict: settled.verdict, reason: settled.reason };
+    recordLot(tx, { at, person: caller, action: 'submitted', lotId: id, note: shows, after });
   });
   verdicts.drop(id);
   return DONE;

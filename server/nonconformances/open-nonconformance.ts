@@ -12,6 +12,7 @@ import { rejectionNotice } from '#server/mail/rejection-notice';
 import { nextNumber } from '#server/numbers/next-number';
 import { findSite } from '#server/site/site-queries';
 import { type Failure } from '#shared/contract/nonconformances';
+import { formatNumber } from '#shared/quantities/format-number';
 import { and, eq } from 'drizzle-orm';
 import { failuresOf } from './failures-of';
 
@@ -92,7 +93,7 @@ export function openNonconformance(context: Context, db: Db, rejection: Rejectio
   const { lot, judged, caller, at } = rejection;
   const number = nextNumber(db, 'NC', at.getUTCFullYear());
   const failures = failuresOf(judged);
-  const containment = `All ${lot.countedQuantity} units are on hold${lot.place === '' ? '' : ` at ${lot.place}`}.`;
+  const containment = `All ${formatNumber(lot.countedQuantity, 0)} units are on hold${lot.place === '' ? '' : ` at ${lot.place}`}.`;
   const { id } = db
     .insert(nonconformances)
     .values({

@@ -97,7 +97,7 @@ describe('a rejected lot', () => {
     expect(failures.map(({ name, readings }) => [name, readings.map(({ unit }) => unit)])).toEqual([
       ['ripple pp', [6, 7, 8, 25, 36, 76]],
     ]);
-    expect(containment).toBe('All 1000 units are on hold at Dock 2.');
+    expect(containment).toBe('All 1\u202f000 units are on hold at Dock 2.');
   });
 
   it('puts the notice into the outbox with the lot, what failed and the readings concerned', async () => {
