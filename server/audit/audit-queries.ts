@@ -3,8 +3,9 @@ import { auditEntries } from '#db/schema/audit';
 import { type Caller, hasRole } from '#server/caller';
 import { pageAfter } from '#server/page-after';
 import { type AuditEntry, type listAudit } from '#shared/contract/audit';
-import { and, desc, eq, lt } from 'drizzle-orm';
+import { and, desc, eq, inArray, lt } from 'drizzle-orm';
 import type * as z from 'zod';
+import { subjectIds, subjectName } from './subject-names';
 
 type Row = typeof auditEntries.$inferSelect;
 
@@ -12,8 +13,9 @@ function readJson(text: string | null): unknown {
   return text === null ? null : JSON.parse(text);
 }
 
-function entryOf({ id, at, actor, action, subject, subjectId, before, after, hash }: Row): AuditEntry {
-  return { id, at, person: actor, action, subject, subjectId, before: readJson(before), after: readJson(after), hash };
+function entryOf(db: Db, { id, at, actor, action, subject, subjectId, before, after, hash }: Row): AuditEntry {
+  const names = { subject, subjectId, subjectName: subjectName(db, subject, subjectId) };
+  return { id, at, person: actor, action, ...names, before: readJson(before), after: readJson(after), hash };
 }
 
 /** Entries, newest first: everybody's for those who audit, otherwise the caller's own. */
@@ -32,7 +34,7 @@ export function listEntries(
         and(
           seesAll ? undefined : eq(auditEntries.personId, caller.id),
           subject === undefined ? undefined : eq(auditEntries.subject, subject),
-          subjectId === undefined ? undefined : eq(auditEntries.subjectId, subjectId),
+          subjectId === undefined ? undefined : inArray(auditEntries.subjectId, subjectIds(db, subject, subjectId)),
           before === undefined ? undefined : lt(auditEntries.id, before),
         ),
       )
@@ -40,5 +42,5 @@ export function listEntries(
       .limit(limit)
       .all(),
   );
-  return { ...page, items: page.items.map(entryOf) };
+  return { ...page, items: page.items.map((row) => entryOf(db, row)) };
 }

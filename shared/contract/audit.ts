@@ -10,6 +10,8 @@ export const auditEntry = z.object({
   action: z.string(),
   subject: z.string(),
   subjectId: z.string(),
+  /** What people call it: a lot's number, a part's number. */
+  subjectName: z.string(),
   before: z.unknown().nullable(),
   after: z.unknown().nullable(),
   hash: z.string(),
@@ -20,7 +22,8 @@ export const listAudit = endpoint({
   method: 'GET',
   path: '/api/audit',
   who: ['receiving', 'inspector', 'quality', 'engineering', 'auditor', 'admin'],
-  summary: 'Audit entries, newest first; receiving, inspectors and engineering see their own.',
+  summary:
+    'Audit entries, newest first, also of one record by its id or number; receiving, inspectors and engineering see their own.',
   query: pageQuery.extend({ subject: z.string().max(40).optional(), subjectId: z.string().max(60).optional() }),
   reply: pageOf(auditEntry),
 });

@@ -2,6 +2,8 @@ import { auditEntries } from '#db/schema/audit';
 import { record } from '#server/audit/record';
 import { type AuditEntry } from '#shared/contract/audit';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
+import { addPlannedPart, drawnLot } from '../support/bench-fixtures';
+import { referenceLot } from '../support/reference-lot';
 import { testSite, type TestSite } from '../support/test-site';
 
 let site: TestSite;
@@ -31,6 +33,18 @@ async function verification() {
 }
 
 describe('the audit trail', () => {
+  it('calls a lot by its number, and finds it by it', async () => {
+    const { plan } = referenceLot('lot-good');
+    const references = addPlannedPart(site.db, site.people.quality.id, plan);
+    const lot = await drawnLot(site, references, 400);
+    const { items } = await list('auditor', `?subjectId=${lot.number}`);
+    expect(items.map(({ action, subjectName }) => [action, subjectName])).toEqual([
+      ['drawn', lot.number],
+      ['booked', lot.number],
+    ]);
+    expect((await list('auditor', '?subject=part&subjectId=WA-12-500')).items).toEqual([]);
+  });
+
   it('is read page by page, newest first', async () => {
     write(5);
     const first = await list('auditor', '?limit=2');

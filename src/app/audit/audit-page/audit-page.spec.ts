@@ -9,6 +9,7 @@ function entry(id: number) {
     action: 'changed',
     subject: 'site',
     subjectId: '1',
+    subjectName: '1',
     before: { waitingTargetHours: 8 },
     after: { waitingTargetHours: 6 },
     hash: 'e3b625fe92'.repeat(6),
