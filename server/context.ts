@@ -1,14 +1,10 @@
 import { type Database } from '#db/open-database';
 import { type Logger } from 'pino';
+import { type Clock } from './clock';
 import { type Environment } from './environment';
 import { type Stream } from './events/stream';
 import { type Outbox } from './mail/outbox';
 import { type Passwords } from './sessions/passwords';
-
-/** Time as the program sees it; tests hold it still. */
-export interface Clock {
-  now(): Date;
-}
 
 /** What every act may use; built once at the start and passed as an argument. */
 export interface Context {
@@ -20,5 +16,3 @@ export interface Context {
   outbox: Outbox;
   stream: Stream;
 }
-
-export const systemClock: Clock = { now: () => new Date() };

@@ -1,4 +1,4 @@
-import { type Clock } from '#server/context';
+import { type Clock } from '#server/clock';
 
 /** The clock of the demo's quarter; it stands where it was set and never goes back. */
 export class DemoClock implements Clock {

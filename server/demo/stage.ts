@@ -13,7 +13,7 @@ import { addSupplier } from '#server/suppliers/keep-supplier';
 import { type InstrumentKind } from '#shared/contract/instruments';
 import { type Cast } from './cast';
 import { type DemoClock } from './demo-clock';
-import { approvePlan } from './plan-steps';
+import { approvePlan } from './approve-plan';
 
 const DAY = 86_400_000;
 

@@ -1,7 +1,7 @@
 import { type Database } from '#db/open-database';
 import { type Counts } from '#shared/contract/counts';
 import { type Response } from 'express';
-import { type Clock } from '#server/context';
+import { type Clock } from '#server/clock';
 import { countStations } from '#server/counts/count-queries';
 
 const DEBOUNCE = 50;

@@ -1,5 +1,5 @@
 import { type Database } from '#db/open-database';
-import { type Clock } from '#server/context';
+import { type Clock } from '#server/clock';
 import { type Logger } from 'pino';
 import { countAttempts, type DueMessage, dueMessages, nextAttempt } from './due-messages';
 import { type AttemptEnd, keepAttempt } from './keep-attempt';

@@ -1,6 +1,6 @@
 import { type Database } from '#db/open-database';
 import { receivedMessages } from '#db/schema/mail';
-import { type Clock } from '#server/context';
+import { type Clock } from '#server/clock';
 import { simpleParser } from 'mailparser';
 import { once } from 'node:events';
 import { type Logger } from 'pino';

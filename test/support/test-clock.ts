@@ -1,4 +1,4 @@
-import { type Clock } from '#server/context';
+import { type Clock } from '#server/clock';
 
 /** A clock that stands still until it is told to go on. */
 export class TestClock implements Clock {
