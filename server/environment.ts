@@ -2,6 +2,7 @@ import path from 'node:path';
 import * as z from 'zod';
 
 const DEMO_SECRET = 'demo-secret-that-production-refuses';
+const DEMO_SENDER = 'Quietrail <quietrail@hollowmere.example>';
 
 const schema = z
   .object({
@@ -13,7 +14,7 @@ const schema = z
     PUBLIC_URL: z.url().optional(),
     TRUST_PROXY: z.coerce.number().int().min(0).max(10).default(0),
     SMTP_URL: z.url({ protocol: /^smtps?$/ }).optional(),
-    MAIL_FROM: z.string().default('Quietrail <quietrail@hollowmere.example>'),
+    MAIL_FROM: z.string().default(DEMO_SENDER),
     LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent']).default('warn'),
     PASSWORD_COST: z.coerce.number().int().min(4).max(15).default(12),
     SIGN_IN_ATTEMPTS: z.coerce.number().int().min(1).default(10),
@@ -25,6 +26,7 @@ const schema = z
       refuse('QUIETRAIL_SECRET', 'Production needs a secret of its own, at least 32 characters.');
     if (given.PASSWORD_COST < 12) refuse('PASSWORD_COST', 'Production hashes passwords at cost 12 or more.');
     if (!given.PUBLIC_URL) refuse('PUBLIC_URL', 'Production needs the address under which people reach it.');
+    if (given.MAIL_FROM === DEMO_SENDER) refuse('MAIL_FROM', 'Production needs the sender of its letters.');
     if (!given.SMTP_URL) refuse('SMTP_URL', 'Production needs a mail server (smtp:// or smtps://).');
   });
 
