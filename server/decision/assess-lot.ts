@@ -1,36 +1,19 @@
 import { type Db } from '#db/open-database';
 import { namesOf } from '#server/bench/bench-queries';
-import { type ReadingRow } from '#server/judging/lot-judging';
 import { judgeSampleOf, type JudgedLot } from '#server/judging/sample-judging';
 import { type Caller } from '#server/caller';
 import { readLot } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
 import { Conflict } from '#server/problems';
-import { findSite } from '#server/site/site-queries';
 import { type Assessment } from '#shared/contract/decision';
 import { characteristicResults } from '#server/judging/characteristic-results';
 import { instrumentsUsed, readingsThatCount, repeatsOf } from '#server/judging/counting';
+import { releaseObjection } from './release-objection';
 
 /** A drawn lot as it is judged now: undecided units count once it is submitted. */
 export function judgedLot(db: Db, lot: LotRow): JudgedLot {
   const submitting = lot.status !== 'drawn' && lot.status !== 'measuring';
   return judgeSampleOf(db, lot, { submitting });
-}
-
-/**
- * Why this person may not release the lot: readings must not all be the releaser's own, unless the site waives that.
- * Readings of a rack count as taken by nobody.
- */
-export function releaseObjection(db: Db, counting: readonly ReadingRow[], caller: Caller): string | null {
-  const takers = new Set(counting.map((reading) => reading.takenById));
-  const onlyOwn = takers.size === 1 && takers.has(caller.id);
-  if (!onlyOwn || releaseOwnAllowed(db)) return null;
-  return 'You took all readings of this lot; somebody else of quality must release it.';
-}
-
-/** Whether the site waives the second person at release. */
-export function releaseOwnAllowed(db: Db): boolean {
-  return findSite(db).releaseOwnReadings;
 }
 
 function unitStates({ verdict }: JudgedLot): Assessment['units'] {
@@ -96,7 +79,7 @@ export function assessLot(db: Db, id: number, caller: Caller): Assessment {
     setAside: judged.units.flatMap(({ unit }) =>
       unit.setAsideReason === null ? [] : [{ unit: unit.unit, reason: unit.setAsideReason }],
     ),
-    objection: releaseObjection(db, counting, caller),
+    objection: releaseObjection(db, lot, judged, caller)?.title ?? null,
     measuredFrom: times[0] ?? null,
     measuredTo: times.at(-1) ?? null,
   };

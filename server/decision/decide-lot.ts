@@ -9,12 +9,12 @@ import { readLot } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
 import { recordLot } from '#server/lots/record-lot';
 import { openNonconformance } from '#server/nonconformances/open-nonconformance';
-import { Conflict, Forbidden, holdVersion } from '#server/problems';
+import { Conflict, holdVersion } from '#server/problems';
 import { type Lot } from '#shared/contract/lots';
 import { eq } from 'drizzle-orm';
-import { judgedLot, releaseObjection, releaseOwnAllowed } from './assess-lot';
-import { readingsThatCount } from '#server/judging/counting';
+import { judgedLot } from './assess-lot';
 import { holdPassword } from './hold-password';
+import { releaseObjection, tookAllReadings, unitsReleased } from './release-objection';
 import { writeSummaries } from './write-summaries';
 
 interface Signing {
@@ -37,11 +37,6 @@ function holdVerdict(judged: JudgedLot, seen: Signing['verdict']): void {
   if (verdict !== seen) throw new Conflict('verdict-changed', `The verdict is another one by now. ${reason}`);
 }
 
-/** Nonconforming units are taken out of an accepted lot. */
-function unitsReleased(lot: LotRow, judged: JudgedLot): number {
-  return lot.countedQuantity - judged.verdict.units.filter(({ verdict }) => verdict === 'nonconforming').length;
-}
-
 interface Decision {
   lot: LotRow;
   judged: JudgedLot;
@@ -51,10 +46,8 @@ interface Decision {
 }
 
 function release(db: Db, { lot, judged, caller, at, note }: Decision): number {
-  const counting = readingsThatCount(judged);
-  const objection = releaseObjection(db, counting, caller);
-  if (objection !== null) throw new Forbidden(objection, 'own-readings');
-  const ownOnly = counting.every(({ takenById }) => takenById === caller.id);
+  const objection = releaseObjection(db, lot, judged, caller);
+  if (objection !== null) throw objection;
   const released = unitsReleased(lot, judged);
   const certificate = issueCertificate(db, { lot, judged, caller, at, unitsReleased: released });
   recordLot(db, {
@@ -67,7 +60,7 @@ function release(db: Db, { lot, judged, caller, at, note }: Decision): number {
       reason: judged.verdict.lot.reason,
       certificate: certificate.number,
       remark: note,
-      secondPersonWaived: ownOnly && releaseOwnAllowed(db),
+      secondPersonWaived: tookAllReadings(judged, caller),
     },
   });
   writeSummaries(db, lot, judged, { verdict: 'accepted', at, unitsReleased: released });
@@ -110,7 +103,7 @@ function writeVerdict(db: Db, { lot, judged, caller, at, note }: Decision, verdi
  *
  * @throws {Refused} for a wrong password
  * @throws {Conflict} when the verdict is not the one the signer saw
- * @throws {Forbidden} when the releaser took all readings
+ * @throws {Problem} when the releaser took all readings, or no unit is left to release
  */
 export async function decideLot(
   context: Context,

@@ -171,6 +171,25 @@ describe('signing', () => {
   });
 });
 
+describe('a lot of which no unit conforms', () => {
+  it('is not released although the acceptance number allows it', async () => {
+    // One unit at AQL 10, code A: plan Ac 1, Re 2 on the whole lot of one.
+    const { plan } = referenceLot('lot-good');
+    const references = addPlannedPart(site.db, site.people.quality.id, {
+      ...plan,
+      classAqls: [{ class: 'major', aql: '10' }],
+      characteristics: plan.characteristics.filter(({ key }) => key === 'v_loaded'),
+    });
+    const lot = await drawnLot(site, references, 1);
+    expect(lot.sampling?.groups[0]).toMatchObject({ wholeLot: true, acceptance: 1, rejection: 2 });
+    const file = { fileName: 'rack.csv', text: 'unit,v_loaded\n1,99\n', instrumentIds: [] };
+    await site.as('inspector').post(`/api/lots/${lot.id}/rack-file`).send(file).expect(201);
+    await site.as('inspector').post(`/api/lots/${lot.id}/submission`).set('if-match', edit(lot)).expect(200);
+    const { body: refused } = await sign(await readLot(lot.id), 'accepted').expect(409);
+    expect((refused as ProblemDetails).code).toBe('nothing-to-release');
+  });
+});
+
 describe('a lot held by quality although acceptable', () => {
   it('waits on hold with the reason, then for its decision again', async () => {
     const lot = await submitted('lot-good');
