@@ -70,6 +70,7 @@ describe('a certificate whose file cannot be made', () => {
     expect(body).toMatchObject({ status: 'released', certificate: { number: 'CC-26-0001' } });
     const shown = async () => (await site.as('quality').get(`/api/certificates/${certificate?.id}`)).body as unknown;
     expect(await shown()).toMatchObject({ status: 'issuing', sha256: null });
+    vi.mocked(certificatePdf).mockRejectedValueOnce(new Error('still no fonts'));
     await site.as('quality').get(`/api/certificates/${certificate?.id}/file`).expect(409);
 
     vi.mocked(certificatePdf).mockRejectedValueOnce(new Error('no fonts yet'));
@@ -80,5 +81,13 @@ describe('a certificate whose file cannot be made', () => {
     expect(await shown()).toMatchObject({ status: 'valid' });
     await site.as('quality').get(`/api/certificates/${certificate?.id}/file`).expect(200);
     expect(site.db.select().from(certificateStatuses).all()).toHaveLength(2);
+  });
+
+  it('is made when somebody opens it', async () => {
+    const lot = await acceptable();
+    vi.mocked(certificatePdf).mockRejectedValueOnce(new Error('no fonts'));
+    const { body } = await sign(lot).expect(200);
+    const { certificate } = body as Lot;
+    await site.as('quality').get(`/api/certificates/${certificate?.id}/file`).expect(200);
   });
 });
