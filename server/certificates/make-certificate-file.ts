@@ -25,7 +25,10 @@ async function makeCertificateFile({ db, clock }: Context, id: number): Promise<
   });
 }
 
-/** Makes the file where that is possible. A release stands without it: what fails is logged, and tried again when it is opened and at the next start. */
+/**
+ * Makes the file where that is possible. A release stands without it: what fails is logged, and tried again when the file is
+ * opened and at the next start.
+ */
 export async function tryCertificateFile(context: Context, id: number): Promise<void> {
   try {
     await makeCertificateFile(context, id);
