@@ -37,6 +37,12 @@ export class ApiProblem extends Error {
   }
 }
 
+/** An answer of another shape than this page knows, as after the program was renewed while the page stood open. */
+export function answerOfAnotherShape(at = new Date()): ApiProblem {
+  const title = 'The answer is not what this page expects; the program may have been renewed. Load the page again.';
+  return new ApiProblem({ title, status: 200, code: NOT_UNDERSTOOD }, at);
+}
+
 /** Whatever was thrown, as a problem a page can show. */
 export function problemOf(thrown: unknown, at = new Date()): ApiProblem {
   if (thrown instanceof ApiProblem) return thrown;

@@ -3,7 +3,7 @@ import { inject, Injectable } from '@angular/core';
 import { map, type Observable } from 'rxjs';
 import type * as z from 'zod';
 import { type Endpoint } from '#shared/contract/endpoint';
-import { problemOf } from './api-problem';
+import { answerOfAnotherShape } from './api-problem';
 
 type NothingNeeded = Record<never, never>;
 
@@ -90,7 +90,7 @@ export function endpointResource<E extends Endpoint>(
 
 function understood<E extends Endpoint>(endpoint: E, raw: unknown): Reply<E> {
   const read = endpoint.reply.safeParse(raw);
-  if (!read.success) throw problemOf(read.error);
+  if (!read.success) throw answerOfAnotherShape();
   return read.data as Reply<E>;
 }
 

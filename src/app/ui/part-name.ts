@@ -9,7 +9,7 @@ import { ChangeDetectionStrategy, Component, input } from '@angular/core';
     :host {
       display: inline-block;
       max-width: 340px;
-      overflow-wrap: break-word;
+      overflow-wrap: anywhere;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -6,7 +6,7 @@ import { cancelLot, correctLot, drawSample, type Lot, readLot } from '#shared/co
 import { ApiClient, endpointResource } from '../../data/api';
 import { LastLots } from '../../lots/evidence/last-lots';
 import { SamplingFacts } from '../../lots/evidence/sampling-facts';
-import { AskReason } from '../../lots/reason-dialog/ask-reason';
+import { AskReason } from '../../shell/reason-dialog/ask-reason';
 import { may } from '../../session/may';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';

@@ -20,6 +20,9 @@ import { ReadingQueue } from '../waiting/reading-queue';
       display: grid;
       gap: 8px;
     }
+    :host([hidden]) {
+      display: none;
+    }
     button {
       min-height: 24px;
       padding: 0;

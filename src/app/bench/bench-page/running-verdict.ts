@@ -25,6 +25,7 @@ import { lowerThan } from './screen-height';
   `,
   styles: `
     :host {
+      --qr-plate-edge: var(--qr-sans);
       display: block;
     }
     :host(.plain) {

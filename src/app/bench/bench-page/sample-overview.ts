@@ -1,20 +1,21 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import { ClassCount } from '../../ui/tally/class-count';
 import { Tally } from '../../ui/tally/tally';
+import { CountPipe } from '../../ui/values/count-pipe';
 import { BenchCursor } from '../sheet/bench-cursor';
 import { BenchSheet } from '../sheet/bench-sheet';
 
 /** The sample at a glance and what each group still allows. */
 @Component({
   selector: 'qr-sample-overview',
-  imports: [ClassCount, Tally],
+  imports: [ClassCount, CountPipe, Tally],
   template: `
     <div class="tally">
       <div class="head">
         <span class="label">Sample</span>
         <span class="num"
-          ><b>{{ sheet.judgedUnits() }}</b
-          >&ngsp;<span class="caption">of {{ sheet.records().length }} judged</span></span
+          ><b>{{ sheet.judgedUnits() | count }}</b
+          >&ngsp;<span class="caption">of {{ sheet.records().length | count }} judged</span></span
         >
       </div>
       <qr-tally [states]="sheet.states()" [current]="cursor.at().unit - 1" [axis]="true" [note]="note()" />

@@ -35,7 +35,11 @@ import { type Characteristic } from '#shared/contract/plans';
       margin-top: 16px;
     }
     td {
+      padding-block: 3px;
       overflow-wrap: anywhere;
+    }
+    td.mono {
+      min-width: 80px;
     }
     p {
       margin-top: 8px;

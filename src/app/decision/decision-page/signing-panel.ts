@@ -5,7 +5,7 @@ import { Router } from '@angular/router';
 import { reopenLot } from '#shared/contract/bench';
 import { type Assessment, decideLot } from '#shared/contract/decision';
 import { ApiClient } from '../../data/api';
-import { AskReason } from '../../lots/reason-dialog/ask-reason';
+import { AskReason } from '../../shell/reason-dialog/ask-reason';
 import { Session } from '../../session/session';
 import { may } from '../../session/may';
 import { MessageNote } from '../../ui/states/message-note';

@@ -20,7 +20,7 @@ import { MeasuredWith } from '../evidence/measured-with';
 import { PlateOfLot } from '../evidence/plate-of-lot';
 import { SampleSheet } from '../evidence/sample-sheet';
 import { SamplingFacts } from '../evidence/sampling-facts';
-import { AskReason } from '../reason-dialog/ask-reason';
+import { AskReason } from '../../shell/reason-dialog/ask-reason';
 import { CertificatePanel } from './certificate-panel';
 import { LotFacts } from './lot-facts';
 import { NonconformancePanel } from './nonconformance-panel';

@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, output } f
 import { MatButton } from '@angular/material/button';
 import { tap } from 'rxjs';
 import { type Plan, type Revision } from '#shared/contract/plans';
-import { AskReason } from '../../lots/reason-dialog/ask-reason';
+import { AskReason } from '../../shell/reason-dialog/ask-reason';
 import { Session } from '../../session/session';
 import { BackLink } from '../../shell/back-link';
 import { Confirm } from '../../ui/confirm/confirm';

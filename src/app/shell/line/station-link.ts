@@ -9,8 +9,8 @@ import { RouterLink } from '@angular/router';
     <a [routerLink]="path()" [class.on]="active()" [attr.aria-current]="active() ? 'page' : null">
       <span class="node">
         @if (count()) {
-          @for (shown of [count()]; track shown) {
-            <span class="count">{{ shown }}</span>
+          @for (shown of [{ count: count() }]; track shown.count) {
+            <span class="count">{{ shown.count }}</span>
           }
         } @else {
           <svg width="14" height="12" viewBox="0 0 14 12" aria-hidden="true"><path d="M1 8l3-4 3 3 2-5 4 5" /></svg>

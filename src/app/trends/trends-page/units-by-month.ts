@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { type YieldRow } from '#shared/contract/yields';
+import { formatNumber } from '#shared/quantities/format-number';
 import { elementWidth } from '../../ui/element-width';
 import { shareText } from '../share-text';
 import { CHART, labelStep, monthPlaces } from './month-scale';
@@ -66,7 +67,7 @@ export class UnitsByMonth {
       key,
       x: MARGIN + at(index),
       y: unitsInspected === 0 ? null : this.yOf(unitsConforming / unitsInspected),
-      label: `${unitsConforming} of ${unitsInspected}`,
+      label: `${formatNumber(unitsConforming, 0)} of ${formatNumber(unitsInspected, 0)}`,
       labelled: (months.length - 1 - index) % step === 0,
     }));
   });

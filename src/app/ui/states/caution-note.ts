@@ -9,7 +9,7 @@ import { Icon } from '../marks/icon';
     <qr-icon name="bolt" />
     <div>
       @if (title()) {
-        <b>{{ title() }}</b>
+        <b>{{ title() }}</b>&ngsp;
       }
       <ng-content />
     </div>

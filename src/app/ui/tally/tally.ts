@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { elementWidth } from '../element-width';
+import { CountPipe } from '../values/count-pipe';
 import { BASE, CELL, pitchOf, tallyShapes, type UnitState } from './tally-shapes';
 
 const SPOKEN = [
@@ -9,12 +10,16 @@ const SPOKEN = [
   ['hold', 'undecided'],
 ] as const;
 
+/** Distances between the unit numbers below the line, of which at most six are shown. */
+const STEPS = [5, 10, 20, 50, 100, 200, 500];
+
 /**
  * The sample at a glance, unit by unit in draw order: a good lot is a flat line, a nonconforming unit a spike as tall as
- * its class is grave. Takes the width of its place; up to 500 units. `states` has one entry per unit of the sample.
+ * its class is grave. Takes the width of its place; 500 units and more. `states` has one entry per unit of the sample.
  */
 @Component({
   selector: 'qr-tally',
+  imports: [CountPipe],
   templateUrl: './tally.html',
   styleUrl: './tally.scss',
   host: { role: 'img', '[attr.aria-label]': 'sentence()' },
@@ -50,7 +55,7 @@ export class Tally {
   protected readonly numbers = computed(() => {
     const units = this.states().length;
     const pitch = pitchOf(units, this.width());
-    const step = [5, 10, 20, 50, 100].find((candidate) => candidate * 6 >= units) ?? 100;
+    const step = STEPS.find((candidate) => candidate * 6 >= units) ?? units;
     const inner = Array.from({ length: Math.floor(units / step) }, (_, index) => (index + 1) * step);
     const shown = [1, ...inner.filter((unit) => units - unit >= step / 2), units];
     return [...new Set(shown)].map((unit) => ({

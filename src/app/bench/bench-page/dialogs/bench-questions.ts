@@ -2,7 +2,7 @@ import { inject, Injectable } from '@angular/core';
 import { MatDialog } from '@angular/material/dialog';
 import { map, type Observable, of } from 'rxjs';
 import { type ReadingBody } from '#shared/contract/bench';
-import { AskReason } from '../../../lots/reason-dialog/ask-reason';
+import { AskReason } from '../../../shell/reason-dialog/ask-reason';
 import { KeysDialog } from '../../../shell/keys-dialog/keys-dialog';
 import { Confirm } from '../../../ui/confirm/confirm';
 import { BenchCursor } from '../../sheet/bench-cursor';

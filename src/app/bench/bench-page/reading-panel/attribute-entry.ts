@@ -28,7 +28,7 @@ import { MatButton } from '@angular/material/button';
     @if (asking() && reasons().length > 0) {
       <p class="label" id="fail-reason">What is wrong</p>
       <ol aria-labelledby="fail-reason">
-        @for (reason of reasons(); track reason) {
+        @for (reason of reasons(); track $index) {
           <li>
             <button type="button" matButton (click)="reasoned.emit(reason)">
               <kbd aria-hidden="true">{{ $index + 1 }}</kbd> {{ reason }}

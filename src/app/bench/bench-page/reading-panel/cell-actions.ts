@@ -23,9 +23,8 @@ import { DeskCommands } from '../desk-commands';
     :host {
       display: flex;
       flex-wrap: wrap;
-      gap: 8px 0;
+      gap: 8px 4px;
       align-items: center;
-      justify-content: space-between;
     }
     button {
       min-width: 0;
