@@ -8,6 +8,7 @@ import { nextNumber } from '#server/numbers/next-number';
 import { Conflict, holdVersion, Refused } from '#server/problems';
 import { type Lot, type LotBody } from '#shared/contract/lots';
 import { type Fault } from '#shared/contract/problem';
+import { formatNumber } from '#shared/quantities/format-number';
 import { eq } from 'drizzle-orm';
 import { readLot } from './lot-queries';
 import { findLot } from './lot-rows';
@@ -40,7 +41,7 @@ export function bookLot(context: Context, caller: Caller, body: LotBody): Lot {
       .values({ ...body, number, status: 'arrived', arrivedAt: at.toISOString(), bookedById: caller.id })
       .returning({ id: lots.id })
       .get();
-    const note = `${body.countedQuantity} counted, ${body.statedQuantity} stated`;
+    const note = `${formatNumber(body.countedQuantity, 0)} counted, ${formatNumber(body.statedQuantity, 0)} stated`;
     recordLot(tx, { at, person: caller, action: 'booked', lotId: id, note, after: { number, ...body } });
     return readLot(tx, id);
   });

@@ -3,6 +3,7 @@ import { type Caller } from '#server/caller';
 import { type Context } from '#server/context';
 import { Conflict, holdVersion } from '#server/problems';
 import { type Lot } from '#shared/contract/lots';
+import { formatNumber } from '#shared/quantities/format-number';
 import { drawPositions } from '#shared/sampling/draw-positions';
 import { eq } from 'drizzle-orm';
 import { randomInt } from 'node:crypto';
@@ -60,7 +61,7 @@ export function drawSample(
       })
       .where(eq(lots.id, id))
       .run();
-    const note = `${sampleSize} of ${lotSize}, ${revision.planNumber} rev ${revision.revision}, ${severity}`;
+    const note = `${formatNumber(sampleSize, 0)} of ${formatNumber(lotSize, 0)}, ${revision.planNumber} rev ${revision.revision}, ${severity}`;
     const after = { seed, sampleSize, revision: revision.id, severity, groups };
     recordLot(tx, { at, person: caller, action: 'drawn', lotId: id, note, after });
     return readLot(tx, id);
