@@ -63,7 +63,9 @@ describe('ApiClient', () => {
   });
 
   it('refuses an answer that has not the shape of the contract', () => {
-    expect(problemOfFront((request) => request.flush({ name: 1 }))?.code).toBe('answer-not-understood');
+    const problem = problemOfFront((request) => request.flush({ name: 1 }));
+    expect(problem?.code).toBe('answer-not-understood');
+    expect(problem?.message).toMatch(/Load the page again\.$/);
   });
 
   it('notes that the server cannot be reached, until it answers again', () => {
