@@ -5,10 +5,23 @@ import { COMPRESSED, preferCompressed } from './compressed-files';
 /** Files with a hash in their name never change. */
 const HASHED = /-[\w-]{8}\.\w+$/;
 
+/** Scripts, styles and fonts open no page, so that what only a page heeds would be sent in vain with each of them. */
+const PAGELESS = /\.(js|css|woff2)$/;
+const FOR_PAGES = [
+  'content-security-policy',
+  'referrer-policy',
+  'x-dns-prefetch-control',
+  'x-download-options',
+  'x-frame-options',
+  'x-permitted-cross-domain-policies',
+  'x-xss-protection',
+];
+
 function setHeaders(response: Response, served: string): void {
   const compressed = served.endsWith(COMPRESSED);
   const file = compressed ? served.slice(0, -COMPRESSED.length) : served;
   if (compressed) response.type(path.extname(file)).set('content-encoding', 'br');
+  if (HASHED.test(file) && PAGELESS.test(file)) for (const header of FOR_PAGES) response.removeHeader(header);
   const caching = HASHED.test(file) ? 'public, max-age=31536000, immutable' : 'no-cache';
   response.set('cache-control', path.basename(file) === 'index.html' ? 'no-store' : caching);
 }

@@ -36,7 +36,7 @@ export class MailPage {
 
   protected readonly boxes = [
     { value: 'outbox', label: 'Outbox' },
-    { value: 'received', label: 'Received by the local mail fake' },
+    { value: 'received', label: 'Received by the local mail server' },
   ] as const;
   protected readonly shown = computed<Box>(() => (this.box() === 'received' ? 'received' : 'outbox'));
 

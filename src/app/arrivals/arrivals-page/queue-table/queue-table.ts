@@ -1,5 +1,6 @@
-import { ChangeDetectionStrategy, Component, ElementRef, inject, input, output } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, ElementRef, inject, input, output } from '@angular/core';
 import { RouterLink } from '@angular/router';
+import { narrowerThan } from '../../../shell/screen-width';
 import { SeverityMark } from '../../../ui/marks/severity-mark';
 import { VerdictChip } from '../../../ui/marks/verdict-chip';
 import { PartName } from '../../../ui/part-name';
@@ -19,6 +20,8 @@ import { countWords, type WaitingLot } from '../../waiting';
 export class QueueTable {
   private readonly element = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
 
+  private readonly narrow = narrowerThan(1280);
+
   readonly lots = input.required<readonly WaitingLot[]>();
   /** Id of the chosen lot. */
   readonly chosen = input<number>();
@@ -26,6 +29,7 @@ export class QueueTable {
   readonly opens = input(false);
   readonly chosenChange = output<number>();
 
+  protected readonly barWidth = computed(() => (this.narrow() ? 76 : 112));
   protected readonly countWords = countWords;
 
   /** Chooses the row below (+1) or above (-1) and takes the focus there. */
