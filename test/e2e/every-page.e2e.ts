@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { type Page } from '@playwright/test';
+import type Axe from 'axe-core';
 import { settling } from './support/settling';
 import { expect, test } from './support/site';
 
@@ -86,7 +87,7 @@ async function misplaced(page: Page): Promise<string[]> {
 /** What somebody cannot read or reach on the page. */
 function unreadable(page: Page): Promise<string[]> {
   return page.evaluate(async () => {
-    const found = await (globalThis as unknown as { axe: typeof import('axe-core') }).axe.run(document, {
+    const found = await (globalThis as unknown as { axe: typeof Axe }).axe.run(document, {
       resultTypes: ['violations'],
     });
     return found.violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => String(target)).join(', ')}`);

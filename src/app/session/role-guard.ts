@@ -16,7 +16,7 @@ export function roleGuard(...roles: readonly Role[]): CanMatchFn {
  */
 export function areaFor(who: Who, area: Route & { path: string; title: string }, paths = [area.path]): Routes {
   if (typeof who === 'string') return [area];
-  const told = { who: whoSentence(area.title, who) };
+  const told = { who: whoSentence(who) };
   const loadComponent = () => import('./forbidden-page').then((file) => file.ForbiddenPage);
   const closed = paths.map((path) => ({
     path,
@@ -27,7 +27,7 @@ export function areaFor(who: Who, area: Route & { path: string; title: string },
   return [{ ...area, canMatch: [roleGuard(...who)] }, ...closed];
 }
 
-/** "Decision is open to: inspector, quality engineer, auditor." */
-function whoSentence(title: string, roles: readonly Role[]): string {
-  return `${title} is open to: ${roles.map((role) => ROLE_TITLES[role].toLowerCase()).join(', ')}.`;
+/** "This page is open to: inspector, quality engineer, auditor." */
+function whoSentence(roles: readonly Role[]): string {
+  return `This page is open to: ${roles.map((role) => ROLE_TITLES[role].toLowerCase()).join(', ')}.`;
 }
