@@ -7,6 +7,7 @@ import { type Context } from '#server/context';
 import { findLot } from '#server/lots/lot-rows';
 import { recordLot } from '#server/lots/record-lot';
 import { Conflict, Forbidden, holdVersion, NotFound } from '#server/problems';
+import { formatNumber } from '#shared/quantities/format-number';
 import { type UnitVerdict } from '#shared/verdict/sample-verdict';
 import { and, eq } from 'drizzle-orm';
 import { lotAtBench } from './bench-lot';
@@ -118,7 +119,7 @@ export function submitLot(context: Context, verdicts: RunningVerdicts, caller: C
       const missing = readingsMissing(verdict.units, rules.characteristics);
       throw new Conflict(
         'readings-missing',
-        `${missing} ${missing === 1 ? 'reading is' : 'readings are'} still missing.`,
+        `${formatNumber(missing, 0)} ${missing === 1 ? 'reading is' : 'readings are'} still missing.`,
       );
     }
     tx.update(lots)
