@@ -1,6 +1,7 @@
 import { type Db } from '#db/open-database';
+import { preparedOnce } from '#db/prepared-once';
 import { auditEntries } from '#db/schema/audit';
-import { desc } from 'drizzle-orm';
+import { desc, sql } from 'drizzle-orm';
 import { createHash } from 'node:crypto';
 import { canonicalJson } from './canonical-json';
 
@@ -35,10 +36,13 @@ export function entryHash(entry: {
 
 export const FIRST_HASH = '0'.repeat(64);
 
+const lastEntry = preparedOnce((db) =>
+  db.select({ hash: auditEntries.hash }).from(auditEntries).orderBy(desc(auditEntries.id)).limit(1).prepare(),
+);
+
 /** The hash that the next entry follows. */
 export function chainHead(db: Db): string {
-  const last = db.select({ hash: auditEntries.hash }).from(auditEntries).orderBy(desc(auditEntries.id)).limit(1).get();
-  return last?.hash ?? FIRST_HASH;
+  return lastEntry(db).get()?.hash ?? FIRST_HASH;
 }
 
 /** A change as the entry that follows the one with `previousHash`. */
@@ -57,9 +61,25 @@ export function chainEntry(change: Change, previousHash: string) {
   return { ...entry, hash: entryHash(entry) };
 }
 
+const insertEntry = preparedOnce((db) =>
+  db
+    .insert(auditEntries)
+    .values({
+      at: sql.placeholder('at'),
+      personId: sql.placeholder('personId'),
+      actor: sql.placeholder('actor'),
+      action: sql.placeholder('action'),
+      subject: sql.placeholder('subject'),
+      subjectId: sql.placeholder('subjectId'),
+      before: sql.placeholder('before'),
+      after: sql.placeholder('after'),
+      previousHash: sql.placeholder('previousHash'),
+      hash: sql.placeholder('hash'),
+    })
+    .prepare(),
+);
+
 /** Appends an audit entry; call it inside the transaction of the change it records. */
 export function record(db: Db, change: Change): void {
-  db.insert(auditEntries)
-    .values(chainEntry(change, chainHead(db)))
-    .run();
+  insertEntry(db).run(chainEntry(change, chainHead(db)));
 }

@@ -1,4 +1,5 @@
 import { type Db } from '#db/open-database';
+import { preparedOnce } from '#db/prepared-once';
 import { lots } from '#db/schema/lots';
 import { people } from '#db/schema/people';
 import { readings } from '#db/schema/readings';
@@ -12,14 +13,31 @@ import { recordLot } from '#server/lots/record-lot';
 import { Conflict, Refused } from '#server/problems';
 import { type Kept, type ReadingBody } from '#shared/contract/bench';
 import { mayRepeat } from '#shared/verdict/counting-reading';
-import { eq } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 import { lotAtBench } from './bench-lot';
 import { entryValue } from './entry-value';
+import { insertReading } from './insert-reading';
 import { countingReadings, unitOf, type LotRules, type ReadingRow, type UnitRows } from '#server/judging/lot-judging';
 import { holdInstrument } from './reading-instrument';
 import { readingView } from './reading-view';
 import { takenAt } from './taken-at';
 import { rejudge, runningVerdict, type RunningVerdict, type RunningVerdicts } from '#server/judging/running-verdicts';
+
+const readingById = preparedOnce((db) =>
+  db
+    .select()
+    .from(readings)
+    .where(eq(readings.id, sql.placeholder('id')))
+    .prepare(),
+);
+
+const personById = preparedOnce((db) =>
+  db
+    .select({ name: people.name })
+    .from(people)
+    .where(eq(people.id, sql.placeholder('id')))
+    .prepare(),
+);
 
 interface Cell {
   characteristicId: number;
@@ -42,8 +60,8 @@ function cellOf(db: Db, lot: LotRow, { characteristics }: LotRules, body: Readin
 }
 
 function nameOf(db: Db, personId: number | null): string {
-  const found = personId && db.select({ name: people.name }).from(people).where(eq(people.id, personId)).get();
-  return found ? found.name : 'a rack';
+  const found = personId === null ? undefined : personById(db).get({ id: personId });
+  return found?.name ?? 'a rack';
 }
 
 /** A cell that has a reading takes another one only as a repeat with its reason, and two of those at most. */
@@ -103,26 +121,23 @@ function insert(
   const worth = entryValue(body.entry, content);
   holdInstrument(db, content, body.instrumentId, dayOf(at));
   holdRepeat(db, cell, body);
-  const row = db
-    .insert(readings)
-    .values({
-      id,
-      lotId: lot.id,
-      unitId: cell.rows.unit.id,
-      characteristicId: cell.characteristicId,
-      attempt: cell.earlier.length + 1,
-      ...worth,
-      entry: body.entry,
-      instrumentId: body.instrumentId,
-      note: body.note,
-      repeatReason: body.repeat?.reason ?? null,
-      repeatNote: body.repeat?.note ?? null,
-      takenById: caller.id,
-      takenAt: takenAt(body.takenAt, lot.drawnAt, at),
-      receivedAt: at.toISOString(),
-    })
-    .returning()
-    .get();
+  const row = insertReading(db, {
+    id,
+    lotId: lot.id,
+    unitId: cell.rows.unit.id,
+    characteristicId: cell.characteristicId,
+    attempt: cell.earlier.length + 1,
+    ...worth,
+    entry: body.entry,
+    instrumentId: body.instrumentId,
+    note: body.note,
+    repeatReason: body.repeat?.reason ?? null,
+    repeatNote: body.repeat?.note ?? null,
+    takenById: caller.id,
+    rackImportId: null,
+    takenAt: takenAt(body.takenAt, lot.drawnAt, at),
+    receivedAt: at.toISOString(),
+  });
   record(db, {
     at,
     person: caller,
@@ -160,7 +175,7 @@ export function keepReading(
 ): Kept {
   const at = context.clock.now();
   const { row, running } = context.db.transaction((tx) => {
-    const known = tx.select().from(readings).where(eq(readings.id, id)).get();
+    const known = readingById(tx).get({ id });
     if (known) return knownAlready(tx, verdicts, known, lotId, body);
     const lot = lotAtBench(tx, lotId);
     const held = verdicts.of(tx, lot);

@@ -1,6 +1,6 @@
 import { type Db } from '#db/open-database';
 import { lots } from '#db/schema/lots';
-import { rackImports, readings } from '#db/schema/readings';
+import { rackImports } from '#db/schema/readings';
 import { type Caller } from '#server/caller';
 import { type Context } from '#server/context';
 import { dayOf } from '#server/instruments/instrument-queries';
@@ -15,6 +15,7 @@ import { type SampleVerdict } from '#shared/verdict/sample-verdict';
 import { eq } from 'drizzle-orm';
 import { createHash, randomUUID } from 'node:crypto';
 import { lotAtBench } from './bench-lot';
+import { insertReading } from './insert-reading';
 import {
   countingReadings,
   judgedReadings,
@@ -145,9 +146,6 @@ function holdFaultless({ content }: ReadFile): void {
   throw new Refused('rack-file-refused', title, errors);
 }
 
-/** SQLite takes a limited number of values in one statement. */
-const ROWS_AT_ONCE = 500;
-
 function insertReadings(db: Db, lot: LotRow, file: ReadFile, rackImportId: number, at: string): void {
   const unitIds = new Map(file.units.map(({ unit, readings: rows }) => [unit.unit, { id: unit.id, rows }]));
   const kinds = new Map(
@@ -156,11 +154,11 @@ function insertReadings(db: Db, lot: LotRow, file: ReadFile, rackImportId: numbe
       content.kind === 'computed' ? null : content.instrumentKind,
     ]),
   );
-  const rows = file.content.readings.map(({ unit, characteristicId, value, pass }) => {
+  for (const { unit, characteristicId, value, pass } of file.content.readings) {
     const known = unitIds.get(unit);
     if (!known) throw new Error(`Unit ${unit} is not in the sample.`);
     const kind = kinds.get(characteristicId) ?? null;
-    return {
+    insertReading(db, {
       id: randomUUID(),
       lotId: lot.id,
       unitId: known.id,
@@ -168,17 +166,17 @@ function insertReadings(db: Db, lot: LotRow, file: ReadFile, rackImportId: numbe
       attempt: known.rows.filter((row) => row.characteristicId === characteristicId).length + 1,
       value,
       pass,
+      entry: null,
       instrumentId: kind === null ? null : (file.instruments.get(kind) ?? null),
       note: '',
+      repeatReason: null,
+      repeatNote: null,
+      takenById: null,
       rackImportId,
       takenAt: at,
       receivedAt: at,
-    };
-  });
-  for (let from = 0; from < rows.length; from += ROWS_AT_ONCE)
-    db.insert(readings)
-      .values(rows.slice(from, from + ROWS_AT_ONCE))
-      .run();
+    });
+  }
 }
 
 /** Imports a rack file: all rows or none. Its readings count as taken by nobody. */

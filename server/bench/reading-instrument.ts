@@ -1,11 +1,20 @@
 import { type Db } from '#db/open-database';
+import { preparedOnce } from '#db/prepared-once';
 import { instruments } from '#db/schema/instruments';
 import { Refused } from '#server/problems';
 import { INSTRUMENT_KIND_TITLES } from '#shared/contract/instruments';
 import { type Characteristic } from '#shared/contract/plans';
-import { eq } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 
 type InstrumentRow = typeof instruments.$inferSelect;
+
+const instrumentById = preparedOnce((db) =>
+  db
+    .select()
+    .from(instruments)
+    .where(eq(instruments.id, sql.placeholder('id')))
+    .prepare(),
+);
 
 /** Why an instrument may not be used on a day; undefined when it may. The due date itself is still good. */
 export function unusable(instrument: InstrumentRow, today: string): string | undefined {
@@ -20,7 +29,7 @@ export function usableInstrument(db: Db, id: number, today: string): InstrumentR
   const refuse = (message: string): never => {
     throw new Refused('instrument-refused', message, [{ path: ['instrumentId'], message }]);
   };
-  const found = db.select().from(instruments).where(eq(instruments.id, id)).get();
+  const found = instrumentById(db).get({ id });
   if (!found) return refuse('This instrument does not exist.');
   const why = unusable(found, today);
   return why === undefined ? found : refuse(why);

@@ -1,4 +1,5 @@
 import { type Db } from '#db/open-database';
+import { preparedOnce } from '#db/prepared-once';
 import { sampleUnits } from '#db/schema/lots';
 import { readings } from '#db/schema/readings';
 import { characteristicsOf, groupsOf } from '#server/lots/lot-sampling-queries';
@@ -8,7 +9,7 @@ import { judgedCharacteristic } from '#shared/plan/judged-characteristic';
 import { countingReading } from '#shared/verdict/counting-reading';
 import { judgingRules, type JudgingRules } from '#shared/verdict/judging-rules';
 import { type UnitReadings } from '#shared/verdict/sample-verdict';
-import { and, asc, eq, type SQL } from 'drizzle-orm';
+import { and, asc, eq, sql } from 'drizzle-orm';
 
 export type ReadingRow = typeof readings.$inferSelect;
 
@@ -39,36 +40,54 @@ export interface UnitRows {
   readings: ReadingRow[];
 }
 
-/**
- * Units with their readings. The readings are asked for by lot, whose index finds them among the readings of years; a join by
- * unit would search them all.
- */
-function unitRows(db: Db, units: readonly UnitRows['unit'][], condition: SQL | undefined): UnitRows[] {
-  const rows = new Map(units.map((unit) => [unit.id, { unit, readings: [] as ReadingRow[] }]));
-  const found = db
+const unitsOfLot = preparedOnce((db) =>
+  db
+    .select()
+    .from(sampleUnits)
+    .where(eq(sampleUnits.lotId, sql.placeholder('lotId')))
+    .orderBy(asc(sampleUnits.unit))
+    .prepare(),
+);
+
+const unitOfLot = preparedOnce((db) =>
+  db
+    .select()
+    .from(sampleUnits)
+    .where(and(eq(sampleUnits.lotId, sql.placeholder('lotId')), eq(sampleUnits.unit, sql.placeholder('unit'))))
+    .prepare(),
+);
+
+/** Readings are asked for by lot, whose index finds them among the readings of years; a join by unit would search them all. */
+const readingsOfLot = preparedOnce((db) =>
+  db
     .select()
     .from(readings)
-    .where(condition)
+    .where(eq(readings.lotId, sql.placeholder('lotId')))
     .orderBy(asc(readings.attempt), asc(readings.receivedAt))
-    .all();
-  for (const reading of found) rows.get(reading.unitId)?.readings.push(reading);
-  return [...rows.values()];
-}
+    .prepare(),
+);
+
+const readingsOfUnit = preparedOnce((db) =>
+  db
+    .select()
+    .from(readings)
+    .where(and(eq(readings.lotId, sql.placeholder('lotId')), eq(readings.unitId, sql.placeholder('unitId'))))
+    .orderBy(asc(readings.attempt), asc(readings.receivedAt))
+    .prepare(),
+);
 
 /** All units of a lot with their readings, in draw order. */
 export function unitsOf(db: Db, lotId: number): UnitRows[] {
-  const units = db.select().from(sampleUnits).where(eq(sampleUnits.lotId, lotId)).orderBy(asc(sampleUnits.unit)).all();
-  return unitRows(db, units, eq(readings.lotId, lotId));
+  const units = unitsOfLot(db).all({ lotId });
+  const rows = new Map(units.map((unit) => [unit.id, { unit, readings: [] as ReadingRow[] }]));
+  for (const reading of readingsOfLot(db).all({ lotId })) rows.get(reading.unitId)?.readings.push(reading);
+  return [...rows.values()];
 }
 
 /** One unit of a lot with its readings; undefined when the lot has no such unit. */
 export function unitOf(db: Db, lotId: number, unit: number): UnitRows | undefined {
-  const found = db
-    .select()
-    .from(sampleUnits)
-    .where(and(eq(sampleUnits.lotId, lotId), eq(sampleUnits.unit, unit)))
-    .get();
-  return found && unitRows(db, [found], and(eq(readings.lotId, lotId), eq(readings.unitId, found.id)))[0];
+  const found = unitOfLot(db).get({ lotId, unit });
+  return found && { unit: found, readings: readingsOfUnit(db).all({ lotId, unitId: found.id }) };
 }
 
 /** The reading that counts for each characteristic of a unit, by characteristic id. */

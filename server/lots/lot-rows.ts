@@ -1,11 +1,12 @@
 import { type Db } from '#db/open-database';
+import { preparedOnce } from '#db/prepared-once';
 import { lots } from '#db/schema/lots';
 import { parts } from '#db/schema/parts';
 import { suppliers } from '#db/schema/suppliers';
 import { NotFound } from '#server/problems';
 import { findSite } from '#server/site/site-queries';
 import { type LotHead } from '#shared/contract/lots';
-import { eq } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 import { provisionalSampling } from './lot-sampling-queries';
 
 /** A lot as its row is. */
@@ -31,9 +32,15 @@ export function lotsJoined(db: Db) {
     .innerJoin(suppliers, eq(suppliers.id, lots.supplierId));
 }
 
+const lotById = preparedOnce((db) =>
+  lotsJoined(db)
+    .where(eq(lots.id, sql.placeholder('id')))
+    .prepare(),
+);
+
 /** @throws {NotFound} */
 export function findLot(db: Db, id: number): JoinedLot {
-  const found = lotsJoined(db).where(eq(lots.id, id)).get();
+  const found = lotById(db).get({ id });
   if (!found) throw new NotFound('This lot');
   return found;
 }

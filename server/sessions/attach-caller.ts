@@ -1,4 +1,5 @@
 import { type RequestHandler } from 'express';
+import { createSecretKey } from 'node:crypto';
 import passport from 'passport';
 import { Strategy, type VerifiedCallback } from 'passport-jwt';
 import { type Caller } from '#server/caller';
@@ -17,7 +18,8 @@ function strategy({ db, clock, environment }: Context): Strategy {
   return new Strategy(
     {
       jwtFromRequest: (request) => cookieOf(request, ACCESS_COOKIE) ?? null,
-      secretOrKey: environment.secret,
+      // The key is made once: a secret given as text would be tried as a public key first, at every request.
+      secretOrKey: createSecretKey(Buffer.from(environment.secret)) as unknown as Buffer,
       algorithms: ['HS256'],
       // The end is checked above, by the clock of the context.
       ignoreExpiration: true,
