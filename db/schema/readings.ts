@@ -58,7 +58,7 @@ export const readings = sqliteTable(
     check('readings_one_value', sql`(${table.value} is null) <> (${table.pass} is null)`),
     check('readings_repeat_reason', oneOf(table.repeatReason, REPEAT_REASONS)),
     check('readings_attempt', sql`${table.attempt} between 1 and 3`),
-    index('readings_lot').on(table.lotId),
+    index('readings_lot').on(table.lotId, table.unitId),
     uniqueIndex('readings_attempt_once')
       .on(table.unitId, table.characteristicId, table.attempt)
       .where(sql`${table.withdrawnAt} is null`),

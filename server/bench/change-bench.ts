@@ -28,7 +28,10 @@ function onUnit(
   context.db.transaction((tx) => {
     const lot = lotAtBench(tx, lotId);
     const held = verdicts.of(tx, lot);
-    rejudge(tx, lot, held, change(tx, at), at);
+    const unit = change(tx, at);
+    const rows = unitOf(tx, lotId, unit);
+    if (!rows) throw new Error(`Lot ${lot.number} has no unit ${unit}.`);
+    rejudge(tx, lot, held, rows, at);
   });
   verdicts.drop(lotId);
   return DONE;

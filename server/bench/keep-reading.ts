@@ -182,7 +182,8 @@ export function keepReading(
     const cell = cellOf(tx, lot, held.rules, body);
     startMeasuring(tx, lot, caller, at);
     const kept = insert(tx, lot, cell, caller, id, body, held.rules, at);
-    return { row: kept, running: rejudge(tx, lot, held, body.unit, at) };
+    const { unit, readings: earlier } = cell.rows;
+    return { row: kept, running: rejudge(tx, lot, held, { unit, readings: [...earlier, kept] }, at) };
   });
   verdicts.commit(lotId, running.unit);
   return acknowledge(context.db, row, body, running);

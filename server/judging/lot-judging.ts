@@ -57,7 +57,7 @@ const unitOfLot = preparedOnce((db) =>
     .prepare(),
 );
 
-/** Readings are asked for by lot, whose index finds them among the readings of years; a join by unit would search them all. */
+/** Readings are asked for by lot, whose index leads on to the unit; a join by unit would search the readings of years. */
 const readingsOfLot = preparedOnce((db) =>
   db
     .select()

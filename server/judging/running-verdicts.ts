@@ -7,7 +7,7 @@ import { judgeLot } from '#shared/verdict/judge-lot';
 import { judgeUnit } from '#shared/verdict/judge-unit';
 import { type LotVerdict, type UnitVerdict } from '#shared/verdict/sample-verdict';
 import { eq } from 'drizzle-orm';
-import { judgedReadings, rulesOf, unitOf, unitsOf, type LotRules } from './lot-judging';
+import { judgedReadings, rulesOf, unitsOf, type LotRules, type UnitRows } from './lot-judging';
 
 /** How many lots are held in memory: about as many as there are benches. */
 const LOTS_HELD = 64;
@@ -78,12 +78,11 @@ export function runningVerdict({ rules, units }: HeldLot, unit: number): Running
  * Judges a lot again after one unit changed inside a transaction, and keeps its stop mark and progress in step.
  *
  * @param held rules and unit verdicts as they were before the change
+ * @param rows the unit and its readings as they are now
  */
-export function rejudge(db: Db, lot: LotRow, held: HeldLot, unit: number, at: Date): RunningVerdict {
-  const rows = unitOf(db, lot.id, unit);
-  if (!rows) throw new Error(`Lot ${lot.number} has no unit ${unit}.`);
+export function rejudge(db: Db, lot: LotRow, held: HeldLot, rows: UnitRows, at: Date): RunningVerdict {
   const verdict = judgeUnit(held.rules.rules, judgedReadings(rows, held.rules.keyOf));
-  const units = [...held.units.values()].map((known) => (known.unit === unit ? verdict : known));
+  const units = [...held.units.values()].map((known) => (known.unit === verdict.unit ? verdict : known));
   return { unit: verdict, lot: keepProgress(db, lot, held.rules, units, at) };
 }
 

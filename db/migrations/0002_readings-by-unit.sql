@@ -1,0 +1,2 @@
+DROP INDEX `readings_lot`;--> statement-breakpoint
+CREATE INDEX `readings_lot` ON `readings` (`lot_id`,`unit_id`);
