@@ -28,7 +28,6 @@ import { rackReadings, type RackContent, type RackReading } from './rack-reading
 import { rackTable } from './rack-table';
 import { usableInstrument } from './reading-instrument';
 import { keepProgress, type RunningVerdicts } from '#server/judging/running-verdicts';
-import { judgeSampleOf } from '#server/judging/sample-judging';
 
 interface RackBody {
   fileName: string;
@@ -94,7 +93,11 @@ function readFile(db: Db, lot: LotRow, body: RackBody, today: string): ReadFile 
 /** The verdicts as they would be with the file's readings. */
 function verdictWith({ rules, units, content }: ReadFile): SampleVerdict {
   const added = new Map<number, RackReading[]>();
-  for (const reading of content.readings) added.set(reading.unit, [...(added.get(reading.unit) ?? []), reading]);
+  for (const reading of content.readings) {
+    const ofUnit = added.get(reading.unit);
+    if (ofUnit) ofUnit.push(reading);
+    else added.set(reading.unit, [reading]);
+  }
   return judgeSample({
     characteristics: rules.rules.characteristics.map(({ characteristic }) => characteristic),
     groups: rules.rules.groups,
@@ -106,8 +109,7 @@ function verdictWith({ rules, units, content }: ReadFile): SampleVerdict {
   });
 }
 
-function previewOf(fileName: string, file: ReadFile): RackPreview {
-  const verdict = verdictWith(file);
+function previewOf(fileName: string, file: ReadFile, verdict: SampleVerdict): RackPreview {
   const { columns, rows, faults } = file.content;
   return {
     fileName,
@@ -132,7 +134,8 @@ function previewOf(fileName: string, file: ReadFile): RackPreview {
 /** What a rack file would bring; nothing is kept. */
 export function previewRackFile(context: Context, lotId: number, body: RackBody): RackPreview {
   const lot = lotAtBench(context.db, lotId);
-  return previewOf(body.fileName, readFile(context.db, lot, body, dayOf(context.clock.now())));
+  const file = readFile(context.db, lot, body, dayOf(context.clock.now()));
+  return previewOf(body.fileName, file, verdictWith(file));
 }
 
 function holdFaultless({ content }: ReadFile): void {
@@ -211,8 +214,9 @@ export function importRackFile(
     if (lot.status === 'drawn') tx.update(lots).set({ status: 'measuring' }).where(eq(lots.id, lotId)).run();
     const note = `${fileName}, ${file.content.readings.length} readings of ${file.content.rows} units`;
     recordLot(tx, { at, person: caller, action: 'imported', lotId, note, after: { sha256, rackImport: id } });
-    keepProgress(tx, lot, file.rules, judgeSampleOf(tx, lot).verdict.units, at);
-    return previewOf(fileName, file);
+    const verdict = verdictWith(file);
+    keepProgress(tx, lot, file.rules, verdict.units, at);
+    return previewOf(fileName, file, verdict);
   });
   verdicts.drop(lotId);
   return preview;
