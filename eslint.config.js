@@ -27,8 +27,19 @@ export default tseslint.config(
   {
     files: ['**/*.{js,mjs}'],
     extends: [eslint.configs.recommended],
-    languageOptions: { globals: { process: 'readonly', console: 'readonly', URL: 'readonly', fetch: 'readonly', setTimeout: 'readonly', clearTimeout: 'readonly', AbortSignal: 'readonly' } },
+    languageOptions: {
+      globals: {
+        process: 'readonly',
+        console: 'readonly',
+        URL: 'readonly',
+        fetch: 'readonly',
+        setTimeout: 'readonly',
+        clearTimeout: 'readonly',
+        AbortSignal: 'readonly',
+      },
+    },
   },
+  { files: ['public/**/*.js'], languageOptions: { globals: { document: 'readonly', localStorage: 'readonly' } } },
   {
     files: ['**/*.ts'],
     extends: [eslint.configs.recommended, ...tseslint.configs.strict, ...tseslint.configs.stylistic],
@@ -53,7 +64,10 @@ export default tseslint.config(
       '@angular-eslint/prefer-on-push-component-change-detection': 'error',
     },
   },
-  { files: ['src/**/*.html'], extends: [...angular.configs.templateRecommended, ...angular.configs.templateAccessibility] },
+  {
+    files: ['src/**/*.html'],
+    extends: [...angular.configs.templateRecommended, ...angular.configs.templateAccessibility],
+  },
   { files: ['shared/**/*.ts'], rules: mayNotImport(['src', 'server', 'db'], [noZod]) },
   { files: ['shared/contract/**/*.ts'], rules: mayNotImport(['src', 'server', 'db']) },
   { files: ['db/**/*.ts'], rules: mayNotImport(['src', 'server']) },

@@ -128,7 +128,7 @@ describe('a sample with a reading missing that the verdict still hangs on', () =
       await keep(site, lot, typedReading(unit, 'ripple', unit === 8 ? '2' : '0.5')).expect(200);
     }
     const { body } = await submit(site, lot).expect(409);
-    expect(body).toMatchObject({ code: 'readings-missing', title: '2 readings are still missing.' });
+    expect(body).toMatchObject({ code: 'readings-missing', title: '1 reading is still missing.' });
     await keep(site, lot, typedReading(8, 'v_no_load', '12')).expect(200);
     await submit(site, lot).expect(200);
   });
