@@ -15,12 +15,14 @@ function stateOf(group: SamplingGroup, unit: UnitVerdict): UnitInGroup['state'] 
   if (unit.verdict === 'undecided') return 'undecided';
   if (unit.worstClass !== null && classRank(unit.worstClass) < classRank(group.class)) return 'judged';
   if (group.characteristicKeys.some((key) => unit.failed.includes(key))) return 'judged';
-  const open = group.characteristicKeys.filter((key) => {
+  let undecided = false;
+  for (const key of group.characteristicKeys) {
     const verdict = unit.characteristics.get(key)?.verdict;
-    return verdict !== 'conforming' && verdict !== 'nonconforming';
-  });
-  if (open.length === 0) return 'judged';
-  return open.some((key) => unit.missing.includes(key)) ? 'open' : 'undecided';
+    if (verdict === 'conforming' || verdict === 'nonconforming') continue;
+    if (unit.missing.includes(key)) return 'open';
+    undecided = true;
+  }
+  return undecided ? 'undecided' : 'judged';
 }
 
 /**
