@@ -44,11 +44,6 @@ function namedVersion(endpoint: Endpoint, request: Request): number {
   return version;
 }
 
-/** Parts of the request are told apart in the fault's path only where they are not the body. */
-function parse<S extends z.ZodType>(schema: S, value: unknown): z.output<S> {
-  return schema.parse(value);
-}
-
 /** A reply that has not its shape is a fault of the program; it must not pass for one of the request. */
 function checked(endpoint: Endpoint, reply: unknown): unknown {
   const read = endpoint.reply.safeParse(reply);
@@ -79,9 +74,9 @@ export function serve<E extends Endpoint>(router: Router, endpoint: E, handle: H
     const caller = authorise(endpoint, request);
     const version = namedVersion(endpoint, request);
     const reply = await handle({
-      params: parse(endpoint.params, request.params) as z.output<E['params']>,
-      query: parse(endpoint.query, request.query) as z.output<E['query']>,
-      body: parse(endpoint.body, request.body) as z.output<E['body']>,
+      params: endpoint.params.parse(request.params) as z.output<E['params']>,
+      query: endpoint.query.parse(request.query) as z.output<E['query']>,
+      body: endpoint.body.parse(request.body) as z.output<E['body']>,
       version,
       // Endpoints for anyone do not look at the caller; all others have one here.
       caller: caller as Caller,
