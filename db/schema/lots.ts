@@ -10,6 +10,7 @@ import { planRevisions } from './plans';
 import { suppliers } from './suppliers';
 
 const VERDICTS = ['accepted', 'rejected'] as const;
+const RULINGS = ['conforming', 'nonconforming'] as const;
 
 export const lots = sqliteTable(
   'lots',
@@ -99,6 +100,11 @@ export const sampleUnits = sqliteTable(
     position: integer().notNull(),
     carton: integer().notNull(),
     setAsideReason: text(),
+    /** Quality's ruling on an undecided unit. */
+    ruling: text({ enum: RULINGS }),
+    rulingReason: text(),
+    ruledById: integer().references(() => people.id),
+    ruledAt: moment(),
   },
   (table) => [
     unique('sample_units_unit').on(table.lotId, table.unit),

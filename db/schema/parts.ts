@@ -1,4 +1,4 @@
-import { FORMS, TOPOLOGIES } from '#shared/contract/parts';
+import { FORMS, TOPOLOGIES, type ExpectedBands } from '#shared/contract/parts';
 import { sql } from 'drizzle-orm';
 import { check, integer, real, sqliteTable, text } from 'drizzle-orm/sqlite-core';
 import { flag, oneOf, version } from './columns';
@@ -22,6 +22,8 @@ export const parts = sqliteTable(
     filterFarads: real(),
     filterTolerance: real(),
     filterEsrOhms: real(),
+    /** What its rectifier ought to give; computed when the part is saved, null where there is no model. */
+    expected: text({ mode: 'json' }).$type<ExpectedBands>(),
     active: flag().notNull().default(true),
     version: version(),
   },

@@ -1,4 +1,4 @@
-import { REVISION_STATUSES, type Characteristic } from '#shared/contract/plans';
+import { DECISION_RULES, REVISION_STATUSES, type StoredCharacteristic } from '#shared/contract/plans';
 import {
   AQLS,
   INSPECTION_LEVELS,
@@ -6,7 +6,7 @@ import {
   type Aql,
   type NonconformityClass,
 } from '#shared/sampling/scheme';
-import { check, integer, primaryKey, sqliteTable, text, unique } from 'drizzle-orm/sqlite-core';
+import { check, integer, primaryKey, real, sqliteTable, text, unique } from 'drizzle-orm/sqlite-core';
 import { moment, oneOf, version } from './columns';
 import { parts } from './parts';
 import { people } from './people';
@@ -21,8 +21,6 @@ export const plans = sqliteTable('plans', {
     .references(() => parts.id),
 });
 
-const DECISION_RULES = ['simple'] as const;
-
 export const planRevisions = sqliteTable(
   'plan_revisions',
   {
@@ -34,6 +32,10 @@ export const planRevisions = sqliteTable(
     status: text({ enum: REVISION_STATUSES }).notNull(),
     level: text({ enum: INSPECTION_LEVELS }).notNull(),
     decisionRule: text({ enum: DECISION_RULES }).notNull().default('simple'),
+    /** k, by which the combined standard uncertainty is expanded. */
+    coverageFactor: real().notNull().default(2),
+    /** Minutes a unit warms up before it is measured; null where the plan asks for none. */
+    warmUpMinutes: integer(),
     changeNote: text().notNull(),
     authorId: integer()
       .notNull()
@@ -79,7 +81,7 @@ export const planCharacteristics = sqliteTable(
       .references(() => planRevisions.id),
     position: integer().notNull(),
     key: text().notNull(),
-    content: text({ mode: 'json' }).$type<Characteristic>().notNull(),
+    content: text({ mode: 'json' }).$type<StoredCharacteristic>().notNull(),
   },
   (table) => [
     unique('plan_characteristics_key').on(table.revisionId, table.key),

@@ -1,11 +1,13 @@
-import { REPEAT_REASONS, type ReadingEntry } from '#shared/contract/bench';
+import { REPEAT_REASONS, type PlausibilityQuestion, type ReadingEntry } from '#shared/contract/bench';
 import { sql } from 'drizzle-orm';
 import { check, index, integer, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
 import { moment, oneOf } from './columns';
-import { instruments } from './instruments';
+import { instrumentRanges, instruments } from './instruments';
 import { lots, sampleUnits } from './lots';
 import { people } from './people';
 import { planCharacteristics } from './plans';
+import { racks } from './racks';
+import { waveforms } from './waveforms';
 
 /** A rack file as it was imported. */
 export const rackImports = sqliteTable('rack_imports', {
@@ -49,6 +51,15 @@ export const readings = sqliteTable(
     /** Null when a rack took it: such readings count as taken by nobody. */
     takenById: integer().references(() => people.id),
     rackImportId: integer().references(() => rackImports.id),
+    /** The rack that sent it by itself. */
+    rackId: integer().references(() => racks.id),
+    rangeId: integer().references(() => instrumentRanges.id),
+    /** U = k u_c in SI base units; null where the instrument has no accuracy specification. */
+    expandedUncertainty: real(),
+    /** The file it was taken from. */
+    waveformId: text().references(() => waveforms.id),
+    /** Where the value is far from what the part can give: how the question was answered. */
+    question: text({ mode: 'json' }).$type<PlausibilityQuestion>(),
     takenAt: moment().notNull(),
     receivedAt: moment().notNull(),
     withdrawnAt: moment(),

@@ -14,6 +14,8 @@ export const site = sqliteTable(
     waitingTargetHours: real().notNull(),
     approveOwnPlans: flag().notNull(),
     releaseOwnReadings: flag().notNull(),
+    /** Whether an instrument is checked against its reference before its first reading of a day. */
+    dailyChecks: flag().notNull().default(false),
     version: version(),
   },
   (table) => [check('site_single', sql`${table.id} = 1`)],

@@ -1,9 +1,11 @@
 import * as z from 'zod';
+import { notedConditions } from './conditions';
 import { byId, done, endpoint } from './endpoint';
 import { id, moment, optionalLine, reason, version } from './fields';
 import { instrument } from './instruments';
 import { lotHead, lotSampling } from './lots';
-import { characteristic } from './plans';
+import { expectedBands } from './parts';
+import { characteristic, decisionRule } from './plans';
 import { type Role } from './roles';
 
 const READERS = ['inspector', 'quality', 'engineering', 'auditor'] as const satisfies readonly Role[];
@@ -17,6 +19,16 @@ export const REPEAT_REASON_TITLES: Record<(typeof REPEAT_REASONS)[number], strin
   'warm-up': 'Not warmed up',
   'wrong-load': 'Wrong load or line voltage',
   typing: 'Typing slip',
+  other: 'Other',
+};
+
+/** Reasons for keeping a reading that is far from what the part can give. */
+export const CONFIRM_REASONS = ['measured-again', 'known-fault', 'other-load', 'model-wrong', 'other'] as const;
+export const CONFIRM_REASON_TITLES: Record<(typeof CONFIRM_REASONS)[number], string> = {
+  'measured-again': 'Measured again, same value',
+  'known-fault': 'The unit is faulty',
+  'other-load': 'Load or line voltage differ',
+  'model-wrong': 'The part’s model does not fit',
   other: 'Other',
 };
 
@@ -40,20 +52,54 @@ export const readingEntry = z.discriminatedUnion('kind', [
         probeFactor,
         coupling,
       }),
+      z.object({
+        form: z.literal('alternate'),
+        higherDivisions: divisions,
+        lowerDivisions: divisions,
+        voltsPerDivision,
+        probeFactor,
+        coupling,
+      }),
     ]),
+    /** The fields as they were typed, shown again so. */
+    typed: z.record(z.string().max(20), z.string().max(40)).optional(),
   }),
+  z.object({ kind: z.literal('waveform'), waveformId: z.uuid() }),
   z.object({ kind: z.literal('attribute'), pass: z.boolean(), reason: optionalLine(120) }),
 ]);
 export type ReadingEntry = z.infer<typeof readingEntry>;
 
 export const repeat = z.object({ reason: z.enum(REPEAT_REASONS), note: optionalLine(200) });
 
+/** A confirmed answer to the plausibility question, or a correction made at it. */
+export const plausibilityAnswer = z.discriminatedUnion('answer', [
+  z.object({ answer: z.literal('confirmed'), reason: z.enum(CONFIRM_REASONS), note: optionalLine(200) }),
+  /** What stood there before it was corrected, and its value in SI base units. */
+  z.object({ answer: z.literal('corrected'), from: readingEntry, fromValue: z.number() }),
+]);
+export type PlausibilityAnswer = z.infer<typeof plausibilityAnswer>;
+
+/** How the question was answered, as kept; "open" while nobody has, as with a rack's readings. */
+export const plausibilityQuestion = z.object({
+  band: z.object({ low: z.number(), high: z.number() }),
+  /** The question in words. */
+  sentence: z.string(),
+  given: z.union([plausibilityAnswer, z.object({ answer: z.literal('open') })]),
+  answeredBy: z.string().nullable(),
+  answeredAt: moment.nullable(),
+});
+export type PlausibilityQuestion = z.infer<typeof plausibilityQuestion>;
+
 export const readingBody = z.object({
   unit: z.int().positive(),
   characteristicKey: z.string().max(32),
   entry: readingEntry,
   instrumentId: id.nullable(),
+  /** The range it was read on; null lets the server take the smallest one that holds the value. */
+  rangeId: id.nullable().default(null),
   note: optionalLine(300),
+  /** Where the value is far from what the part can give: the answer to that question. */
+  question: plausibilityAnswer.nullable().default(null),
   /** Present when the reading repeats an earlier one of the same unit and characteristic. */
   repeat: repeat.nullable(),
   /** When it was typed, by the clock of the bench. */
@@ -71,12 +117,19 @@ export const reading = z.object({
   /** What was typed; null when a rack took it. */
   entry: readingEntry.nullable(),
   instrumentId: id.nullable(),
+  rangeId: id.nullable(),
+  /** U = k u_c in SI base units; null where it is not known. */
+  expandedUncertainty: z.number().nullable(),
+  waveformId: z.uuid().nullable(),
+  question: plausibilityQuestion.nullable(),
   note: z.string(),
   repeat: repeat.nullable(),
   /** 1 for the first reading of its unit and characteristic, then 2, 3. */
   attempt: z.int(),
   withdrawn: z.boolean(),
   takenBy: z.string().nullable(),
+  /** The rack that sent it by itself. */
+  rack: z.string().nullable(),
   takenAt: moment,
   receivedAt: moment,
 });
@@ -87,6 +140,10 @@ export const sampleUnit = z.object({
   position: z.int(),
   carton: z.int(),
   setAside: z.string().nullable(),
+  /** Quality's ruling on an undecided unit. */
+  ruling: z
+    .object({ ruling: z.enum(['conforming', 'nonconforming']), reason: z.string(), by: z.string(), at: moment })
+    .nullable(),
 });
 
 /** Everything the bench needs of one lot. */
@@ -98,6 +155,16 @@ export const bench = z.object({
   units: z.array(sampleUnit),
   readings: z.array(reading),
   instruments: z.array(instrument),
+  decisionRule,
+  coverageFactor: z.number(),
+  warmUpMinutes: z.int().nullable(),
+  /** What the part's rectifier ought to give; null where there is no model. */
+  expected: expectedBands.nullable(),
+  conditions: notedConditions.nullable(),
+  /** Racks whose files may be brought in, with what their columns mean. */
+  racks: z.array(z.object({ id, name: z.string(), mapping: z.record(z.string(), z.string().nullable()) })),
+  /** What to ask for changes since (see readBenchChanges). */
+  cursor: moment,
 });
 export type Bench = z.infer<typeof bench>;
 
@@ -110,6 +177,24 @@ export const readBench = endpoint({
   summary: 'Plan, sample and readings of a drawn lot.',
   params: byId,
   reply: bench,
+});
+
+export const readBenchChanges = endpoint({
+  method: 'GET',
+  path: '/api/lots/:id/bench/changes',
+  who: READERS,
+  summary: 'Readings kept, answered or withdrawn, units set aside or ruled on, and conditions, since a cursor.',
+  params: byId,
+  query: z.object({ since: moment }),
+  reply: z.object({
+    cursor: moment,
+    /** The lot as it is now, when it left the bench or was stopped meanwhile too. */
+    lot: lotHead,
+    version,
+    readings: z.array(reading),
+    units: z.array(sampleUnit),
+    conditions: notedConditions.nullable(),
+  }),
 });
 
 /** What is acknowledged when a reading is kept; the verdicts are the server's. */
@@ -137,6 +222,24 @@ export const withdrawReading = endpoint({
   who: WRITERS,
   summary: 'Undo a kept reading; it stays on record as withdrawn.',
   params: byReading,
+  reply: done,
+});
+export const answerQuestion = endpoint({
+  method: 'POST',
+  path: '/api/lots/:id/readings/:reading/answer',
+  who: WRITERS,
+  summary: 'Confirm a reading of a rack that is far from what the part can give, with a reason.',
+  params: byReading,
+  body: z.object({ reason: z.enum(CONFIRM_REASONS), note: optionalLine(200) }),
+  reply: done,
+});
+export const ruleOnUnit = endpoint({
+  method: 'PUT',
+  path: '/api/lots/:id/units/:unit/ruling',
+  who: ['quality'],
+  summary: 'Rule on an undecided unit, or take the ruling back (null); a failed reading cannot be ruled away.',
+  params: z.object({ id: z.coerce.number().int().positive(), unit: z.coerce.number().int().positive() }),
+  body: z.object({ ruling: z.enum(['conforming', 'nonconforming']).nullable(), reason }),
   reply: done,
 });
 export const setUnitAside = endpoint({
@@ -176,6 +279,10 @@ const rackBody = z.object({
   text: z.string().min(1, 'The file is empty.').max(LONGEST_RACK_FILE, 'A rack file has at most 5 million characters.'),
   /** Instruments the rack measured with, by kind. */
   instrumentIds: z.array(id).max(10),
+  /** The rack whose file it is; what its columns mean is remembered with it. */
+  rackId: id.nullable().default(null),
+  /** Heading to key of a characteristic, "unit" for the unit's number, null to skip; a heading not named here is its own key. */
+  mapping: z.record(z.string().max(200), z.string().max(32).nullable()).default({}),
 });
 
 export const rackFault = z.object({ line: z.int(), column: z.string().nullable(), message: z.string() });
@@ -185,6 +292,10 @@ export const rackPreview = z.object({
   columns: z.array(z.object({ header: z.string(), characteristicKey: z.string().nullable() })),
   readings: z.int(),
   faults: z.array(rackFault),
+  /** Readings far from what the part can give; imported, they wait for an answer. */
+  questions: z.array(
+    z.object({ unit: z.int(), characteristicKey: z.string(), value: z.number(), sentence: z.string() }),
+  ),
   nonconformingUnits: z.array(z.object({ unit: z.int(), failed: z.array(z.string()) })),
   groups: z.array(z.object({ class: z.string(), found: z.int(), acceptance: z.int(), rejection: z.int() })),
   verdict: z.enum(['continue', 'accepted', 'rejected']),

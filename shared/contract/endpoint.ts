@@ -3,8 +3,8 @@ import { type Role } from './roles';
 
 export type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE';
 
-/** Who may call: everybody, everybody who is signed in, or the holders of one of the named roles. */
-export type Who = 'anyone' | 'signed-in' | readonly Role[];
+/** Who may call: everybody, everybody who is signed in, a test rack by its token, or holders of one of the named roles. */
+export type Who = 'anyone' | 'signed-in' | 'rack' | readonly Role[];
 
 /** Names of the `:params` in a path, read from the literal itself. */
 export type PathParams<P extends string> = P extends `${string}:${infer Name}/${infer Rest}`
@@ -37,6 +37,8 @@ export interface Endpoint<
   readonly media: string | undefined;
   /** Whether the body may be large (a file's text): up to 25 MB instead of 200 kB. */
   readonly large: boolean;
+  /** Where the body is a file's bytes as they are: how many at most. The handler reads them as a stream. */
+  readonly upload: number | undefined;
 }
 
 const nothing = z.object({});
@@ -50,6 +52,9 @@ export const file = z.object({
   bytes: z.custom<Uint8Array>((value) => value instanceof Uint8Array),
   fileName: z.string(),
 });
+
+/** The reply of an endpoint that answers with a file from the data folder, sent as a stream. */
+export const storedFile = z.object({ filePath: z.string(), fileName: z.string(), mediaType: z.string() });
 
 /** The usual path parameter. */
 export const byId = z.object({ id: z.coerce.number().int().positive() });
@@ -75,6 +80,7 @@ export function endpoint<
     versioned?: boolean;
     media?: string;
     large?: boolean;
+    upload?: number;
   } & ([PathParams<P>] extends [never]
     ? { params?: undefined }
     : { params: Params & z.ZodType<Record<PathParams<P>, unknown>> }),
@@ -92,5 +98,6 @@ export function endpoint<
     versioned: spec.versioned ?? false,
     media: spec.media,
     large: spec.large ?? false,
+    upload: spec.upload,
   };
 }

@@ -1,5 +1,7 @@
 import * as audit from './audit';
 import * as bench from './bench';
+import * as calibrations from './calibrations';
+import * as conditions from './conditions';
 import * as certificates from './certificates';
 import * as counts from './counts';
 import * as decision from './decision';
@@ -26,6 +28,8 @@ const areas = {
   parts,
   plans,
   instruments,
+  conditions,
+  calibrations,
   lots,
   bench,
   decision,

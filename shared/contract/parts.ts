@@ -44,6 +44,17 @@ export const electricalModel = z
   });
 export type ElectricalModel = z.infer<typeof electricalModel>;
 
+const band = z.object({ low: z.number(), high: z.number() });
+
+/** What the part's rectifier ought to give, over its tolerance corners, in volts; ripple peak to peak. */
+export const expectedBands = z.object({
+  ripple: band,
+  loaded: band,
+  noLoad: band,
+  nominal: z.object({ rippleVolts: z.number(), loadedVolts: z.number(), noLoadVolts: z.number() }),
+});
+export type ExpectedBands = z.infer<typeof expectedBands>;
+
 export const partBody = z.object({
   number: z
     .string()
@@ -57,6 +68,8 @@ export const partBody = z.object({
 export const part = partBody.extend({
   id,
   version,
+  /** Null where the part has no rectifier model. */
+  expected: expectedBands.nullable(),
   plan: z.object({ id, number: z.string(), effectiveRevision: z.int().nullable() }).nullable(),
 });
 export type Part = z.infer<typeof part>;

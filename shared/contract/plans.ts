@@ -15,6 +15,51 @@ export const ENTRY_MODES = ['direct', 'scope'] as const;
 export const REVISION_STATUSES = ['draft', 'in-review', 'effective', 'retired'] as const;
 export type RevisionStatus = (typeof REVISION_STATUSES)[number];
 
+/** How measurement uncertainty enters a verdict (ILAC-G8:09/2019). */
+export const DECISION_RULES = ['simple', 'guarded', 'non-binary'] as const;
+export const decisionRule = z.enum(DECISION_RULES);
+export type DecisionRule = z.infer<typeof decisionRule>;
+export const DECISION_RULE_TITLES: Record<DecisionRule, string> = {
+  simple: 'Simple acceptance',
+  guarded: 'Guarded acceptance',
+  'non-binary': 'Guard band on both sides',
+};
+
+/** What a measured characteristic is of: the model's prediction, the method note and what a waveform yields go by it. */
+export const MEASURANDS = [
+  'ripple',
+  'ripple-rms',
+  'loaded-voltage',
+  'no-load-voltage',
+  'half-winding-peak',
+  'current',
+  'input-power',
+  'output-power',
+  'insulation-resistance',
+  'junction-potential',
+  'frequency',
+  'temperature',
+  'dimension',
+  'other',
+] as const;
+export type Measurand = (typeof MEASURANDS)[number];
+export const MEASURAND_TITLES: Record<Measurand, string> = {
+  ripple: 'Ripple, peak to peak',
+  'ripple-rms': 'Ripple, rms',
+  'loaded-voltage': 'Voltage at full load',
+  'no-load-voltage': 'Voltage without load',
+  'half-winding-peak': 'Peak of a half-winding',
+  current: 'Current',
+  'input-power': 'Power from the mains',
+  'output-power': 'Power at the output',
+  'insulation-resistance': 'Insulation resistance',
+  'junction-potential': 'Junction potential (diode test)',
+  frequency: 'Frequency',
+  temperature: 'Temperature',
+  dimension: 'Dimension',
+  other: 'Something else',
+};
+
 /** Units in which a reading is typed and shown; values are kept in SI base units. */
 export const UNITS = [
   'V',
@@ -74,13 +119,21 @@ export const characteristic = z.discriminatedUnion('kind', [
     ...common,
     ...limits,
     entryMode: z.enum(ENTRY_MODES),
+    measurand: z.enum(MEASURANDS).default('other'),
+    /** Where the alternate peaks of a ripple differ: whether the worst peak or their mean counts. */
+    alternatePeaks: z.enum(['worst', 'mean']).default('worst'),
     instrumentKind: instrumentKind.nullable(),
   }),
   z.object({
     kind: z.literal('computed'),
     ...common,
     ...limits,
-    formula: z.object({ key: z.enum(formulaKeys), inputs: z.record(z.string(), z.string()) }),
+    formula: z.object({
+      key: z.enum(formulaKeys),
+      inputs: z.record(z.string(), z.string()),
+      /** Ratings the formula takes beside readings, as the rated voltage; SI base units. */
+      constants: z.record(z.string(), z.number()).default({}),
+    }),
   }),
   z.object({
     kind: z.literal('attribute'),
@@ -93,6 +146,8 @@ export const characteristic = z.discriminatedUnion('kind', [
   }),
 ]);
 export type Characteristic = z.infer<typeof characteristic>;
+/** As it was stored: a revision made before a field existed lacks it. */
+export type StoredCharacteristic = z.input<typeof characteristic>;
 
 export const classAql = z.object({ class: nonconformityClass, aql });
 
@@ -101,6 +156,11 @@ export const revisionBody = z.object({
   level: inspectionLevel,
   classAqls: z.array(classAql).min(1, 'Give at least one class an AQL.').max(3),
   characteristics: z.array(characteristic).min(1, 'Add a characteristic.').max(40),
+  decisionRule: decisionRule.default('simple'),
+  /** k, by which the combined standard uncertainty is expanded; 2 for about 95 %. */
+  coverageFactor: z.number().min(1, 'At least 1.').max(4, 'At most 4.').default(2),
+  /** Minutes a unit warms up before it is measured; null where the plan asks for none. */
+  warmUpMinutes: z.int().min(1, 'At least 1 minute.').max(600, 'At most 600 minutes.').nullable().default(null),
   changeNote: prose(1000),
 });
 export type RevisionBody = z.infer<typeof revisionBody>;
@@ -109,7 +169,6 @@ export const revision = revisionBody.extend({
   id,
   revision: z.int().positive(),
   status: z.enum(REVISION_STATUSES),
-  decisionRule: z.literal('simple'),
   author: z.string(),
   authorId: id,
   approver: z.string().nullable(),

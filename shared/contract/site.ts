@@ -20,6 +20,8 @@ export const siteBody = z.object({
   waitingTargetHours: positive.max(240, 'At most 240 hours.'),
   approveOwnPlans: z.boolean(),
   releaseOwnReadings: z.boolean(),
+  /** Whether an instrument is checked against its reference before its first reading of a day. */
+  dailyChecks: z.boolean().default(false),
 });
 export const site = siteBody.extend({ version });
 export type Site = z.infer<typeof site>;

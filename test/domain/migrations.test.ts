@@ -1,12 +1,10 @@
 import { openDatabase } from '#db/open-database';
-import { people } from '#db/schema/people';
-import { planCharacteristics } from '#db/schema/plans';
 import { cpSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
-import { addPlannedPart, attribute, measured } from '../support/bench-fixtures';
+import { FIRST_ROWS } from '../support/first-rows';
 
 const ROOT = fileURLToPath(new URL('../..', import.meta.url));
 const JOURNAL = path.join('db', 'migrations', 'meta', '_journal.json');
@@ -16,6 +14,11 @@ interface Journal {
 }
 const journal = JSON.parse(readFileSync(path.join(ROOT, JOURNAL), 'utf8')) as Journal;
 const earlier = journal.entries.slice(0, -1);
+
+/** What must come through: every reading with all it said, and the plan with its standing. */
+const READINGS = 'select id, unit_id, attempt, value, entry, withdrawn_at, taken_by_id from readings order by id';
+const PLANNED =
+  'select r.revision, r.status, r.effective_at, c.content from plan_revisions r join plan_characteristics c on c.revision_id = r.id';
 
 let folder: string;
 beforeEach(() => {
@@ -37,23 +40,19 @@ describe('a database of an earlier version', () => {
   it.each(earlier)('that stood at $tag is brought to the newest with all its data', ({ idx }) => {
     const file = path.join(folder, 'quietrail.db');
     const old = openDatabase(file, rootAt(idx));
-    const author = old
-      .insert(people)
-      .values({ name: 'Quill Averard', email: 'quality@hollowmere.example' })
-      .returning()
-      .get();
-    addPlannedPart(old, author.id, {
-      level: 'II',
-      classAqls: [{ class: 'major', aql: '1.0' }],
-      characteristics: [measured('v_loaded', 'major', { lower: 11.4, upper: 12.9 }), attribute('polarity', 'major')],
-    });
-    const before = old.select().from(planCharacteristics).all();
+    old.$client.exec(FIRST_ROWS);
+    const before = old.$client.prepare(READINGS).all();
+    const planned = old.$client.prepare(PLANNED).all();
     old.$client.close();
 
     const renewed = openDatabase(file, ROOT);
-    expect(renewed.select().from(planCharacteristics).all()).toEqual(before);
+    expect(renewed.$client.prepare(READINGS).all()).toEqual(before);
+    expect(renewed.$client.prepare(PLANNED).all()).toEqual(planned);
+    expect(before).toHaveLength(2);
+    expect(planned).toHaveLength(1);
     expect(renewed.$client.pragma('integrity_check')).toEqual([{ integrity_check: 'ok' }]);
     expect(() => renewed.$client.exec('delete from plan_characteristics')).toThrow(/never edited/);
+    expect(() => renewed.$client.exec('update readings set value = 12')).toThrow(/nothing else/);
     const fresh = openDatabase(':memory:', ROOT);
     const objects = "select type, name, sql from sqlite_master where name not like '__drizzle%' order by type, name";
     expect(renewed.$client.prepare(objects).all()).toEqual(fresh.$client.prepare(objects).all());
