@@ -3,6 +3,7 @@ import { type Logger } from 'pino';
 import { type Clock } from './clock';
 import { type Environment } from './environment';
 import { type Stream } from './events/stream';
+import { type FileStore } from './files/file-store';
 import { type Outbox } from './mail/outbox';
 import { type Passwords } from './sessions/passwords';
 
@@ -15,4 +16,5 @@ export interface Context {
   passwords: Passwords;
   outbox: Outbox;
   stream: Stream;
+  files: FileStore;
 }

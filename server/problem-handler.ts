@@ -34,6 +34,12 @@ function ofSqlite(error: InstanceType<typeof Sqlite.SqliteError>): ProblemDetail
   }
 }
 
+/** The disk of the data folder is full. */
+function ofDisk(error: unknown): ProblemDetails | undefined {
+  if (!(error instanceof Error) || !('code' in error) || error.code !== 'ENOSPC') return undefined;
+  return details(507, 'disk-full', 'The disk of the server is full; nothing was kept.');
+}
+
 /** Errors of Express and its body parsers carry a status of their own. */
 function ofHttp(error: unknown): ProblemDetails | undefined {
   if (!(error instanceof Error) || !('status' in error) || typeof error.status !== 'number') return undefined;
@@ -51,7 +57,7 @@ export function problemOf(error: unknown): ProblemDetails | undefined {
   const cause = error instanceof Error ? error.cause : undefined;
   // Drizzle wraps what the driver threw.
   if (cause instanceof Sqlite.SqliteError) return ofSqlite(cause);
-  return ofHttp(error);
+  return ofDisk(error) ?? ofHttp(error);
 }
 
 /** The one place where errors become answers. */

@@ -3,6 +3,7 @@ import { type Request, type Response, type Router } from 'express';
 import type * as z from 'zod';
 import { type Caller, hasRole } from './caller';
 import { Forbidden, Problem, Unauthenticated } from './problems';
+import { type RackCaller } from './racks/rack-caller';
 
 /** What a handler gets: parsed input, the version named by If-Match, and who calls. */
 export interface Input<E extends Endpoint> {
@@ -11,6 +12,8 @@ export interface Input<E extends Endpoint> {
   body: z.output<E['body']>;
   version: number;
   caller: Caller;
+  /** The rack that calls, where the endpoint is one for racks. */
+  rack: RackCaller;
   request: Request;
   response: Response;
 }
@@ -21,12 +24,23 @@ declare module 'express-serve-static-core' {
   // Express declares its request as an interface to be extended.
   interface Request {
     caller?: Caller;
+    rack?: RackCaller;
   }
+}
+
+/** What a rack does no person does, whatever their roles. */
+function authoriseRack({ rack, caller }: Request): void {
+  if (rack) return;
+  throw caller ? new Forbidden('Only a test rack calls this, by its token.') : new Unauthenticated();
 }
 
 function authorise(endpoint: Endpoint, request: Request): Caller | undefined {
   const caller = request.caller;
   if (endpoint.who === 'anyone') return caller;
+  if (endpoint.who === 'rack') {
+    authoriseRack(request);
+    return caller;
+  }
   if (!caller) throw new Unauthenticated();
   if (endpoint.who !== 'signed-in' && !hasRole(caller, ...endpoint.who))
     throw new Forbidden('Your roles do not allow this.');
@@ -53,13 +67,26 @@ function checked(endpoint: Endpoint, reply: unknown): unknown {
   });
 }
 
+/** A file's bytes, or where it lies. */
+type SentFile = { bytes: Uint8Array; fileName: string } | { filePath: string; fileName: string; mediaType: string };
+
+/** What the program made is shown; what somebody uploaded is only ever saved, and never taken for a page. */
+function sendFile(media: string, response: Response, file: SentFile): void {
+  const fileName = file.fileName.replaceAll(/[^\w.-]/g, '_');
+  if ('bytes' in file) {
+    response.set('content-disposition', `inline; filename="${fileName}"`);
+    response.type(media).send(Buffer.from(file.bytes));
+    return;
+  }
+  response.attachment(fileName).type(file.mediaType);
+  response.sendFile(file.filePath, { cacheControl: false, dotfiles: 'allow' });
+}
+
 function send(endpoint: Endpoint, response: Response, reply: unknown): void {
   const parsed = checked(endpoint, reply);
   response.status(endpoint.status);
   if (endpoint.media !== undefined) {
-    const { bytes, fileName } = parsed as { bytes: Uint8Array; fileName: string };
-    response.set('content-disposition', `inline; filename="${fileName.replaceAll(/[^\w.-]/g, '_')}"`);
-    response.type(endpoint.media).send(Buffer.from(bytes));
+    sendFile(endpoint.media, response, parsed as SentFile);
     return;
   }
   if (typeof parsed === 'object' && parsed !== null && 'version' in parsed)
@@ -80,6 +107,7 @@ export function serve<E extends Endpoint>(router: Router, endpoint: E, handle: H
       version,
       // Endpoints for anyone do not look at the caller; all others have one here.
       caller: caller as Caller,
+      rack: request.rack as RackCaller,
       request,
       response,
     });

@@ -11,6 +11,7 @@ import { type Context } from './context';
 import { playDemo } from './demo/play-demo';
 import { type Environment, EnvironmentRefused } from './environment';
 import { Stream } from './events/stream';
+import { FileStore } from './files/file-store';
 import { type Outbox, startOutbox } from './mail/outbox';
 import { startSmtpFake } from './mail/smtp-fake';
 import { smtpTransport } from './mail/transport';
@@ -25,6 +26,11 @@ export interface Running {
   close(): Promise<void>;
 }
 
+/** Uploaded files lie beside the database. */
+function filesOf(environment: Environment): FileStore {
+  return new FileStore(path.join(environment.dataFolder, 'files'));
+}
+
 /** Starts everything on a database but the listening: mail, its local fake when no server is named, the live counts. */
 async function startOn(db: Database, environment: Environment, passwords: Passwords): Promise<Running> {
   const log = pino({ level: environment.logLevel });
@@ -33,7 +39,9 @@ async function startOn(db: Database, environment: Environment, passwords: Passwo
   const transport = smtpTransport(environment.smtpUrl ?? fake?.url ?? '');
   const outbox = startOutbox({ db, clock, log, transport, from: environment.mailFrom });
   const stream = new Stream({ db, clock });
-  const context = { db, clock, environment, log, passwords, outbox, stream };
+  const files = filesOf(environment);
+  files.sweep(db);
+  const context = { db, clock, environment, log, passwords, outbox, stream, files };
   return {
     context,
     close: async () => {
@@ -57,7 +65,8 @@ async function makeDemo(file: string, environment: Environment, passwords: Passw
   const clock = systemClock;
   const stream = new Stream({ db, clock });
   const log = pino({ level: environment.logLevel });
-  const context = { db, clock, environment, log, passwords, outbox: QUIET_OUTBOX, stream };
+  const files = filesOf(environment);
+  const context = { db, clock, environment, log, passwords, outbox: QUIET_OUTBOX, stream, files };
   await playDemo(context, { until: clock.now(), seed: DEMO_SEED });
   stream.close();
   db.$client.pragma('wal_checkpoint(TRUNCATE)');

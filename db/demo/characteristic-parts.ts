@@ -5,6 +5,8 @@ export type Computed = Extract<Characteristic, { kind: 'computed' }>;
 
 /** A characteristic without condition and caution, sampled as its class is. */
 export const PLAIN = { condition: '', caution: '', ownLevel: null, ownAql: null };
+/** What is usual of a measured characteristic. */
+export const MEASURED = { ...PLAIN, measurand: 'other', alternatePeaks: 'worst' } as const;
 export const UNLIMITED = { target: null, lowerLimit: null, upperLimit: null };
 
 /** Slow or awkward to measure: few units, at their own level. */

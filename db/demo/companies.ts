@@ -9,6 +9,7 @@ export const DEMO_SITE: SiteBody = {
   waitingTargetHours: 8,
   approveOwnPlans: false,
   releaseOwnReadings: false,
+  dailyChecks: false,
 };
 
 /** Its suppliers, invented. */

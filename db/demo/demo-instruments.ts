@@ -1,7 +1,52 @@
+import { type RangeBody } from '#shared/contract/instruments';
 import { type InstrumentBody } from './demo-bodies';
 
 /** An instrument of the demo: its calibration is due so many days after the last day of the quarter. */
-export type DemoInstrument = Omit<InstrumentBody, 'calibrationDue' | 'status'> & { dueInDays: number };
+export type DemoInstrument = Omit<InstrumentBody, 'status'> & { dueInDays: number; ranges: readonly RangeBody[] };
+
+type Digital = Extract<RangeBody, { form: 'digital' }>;
+
+function digital(range: Pick<Digital, 'name' | 'unit' | 'fullScale' | 'resolution'> & Partial<Digital>): Digital {
+  return { form: 'digital', current: 'any', ofReading: 0, ofRange: 0, counts: 0, ...range };
+}
+
+const SCREEN: RangeBody = {
+  form: 'graticule',
+  name: 'Screen, 8 divisions',
+  unit: 'V',
+  screenDivisions: 8,
+  ofReading: 0.02,
+  ofFullScale: 0.002,
+  readingStep: 0.1,
+};
+const SCOPE_RANGES: readonly RangeBody[] = [
+  SCREEN,
+  digital({
+    name: 'Cursors, 40 V',
+    unit: 'V',
+    current: 'dc',
+    fullScale: 40,
+    resolution: 0.02,
+    ofReading: 0.02,
+    counts: 1,
+  }),
+];
+
+const METER_ACCURACY = { unit: 'V', current: 'dc', ofReading: 0.00015, ofRange: 0.00004 } as const;
+const METER_RANGES: readonly RangeBody[] = [
+  digital({ name: 'DC 2 V', ...METER_ACCURACY, fullScale: 2, resolution: 1e-5 }),
+  digital({ name: 'DC 20 V', ...METER_ACCURACY, fullScale: 20, resolution: 1e-4 }),
+  digital({ name: 'DC 200 V', ...METER_ACCURACY, fullScale: 200, resolution: 1e-3 }),
+  digital({
+    name: 'AC 20 V',
+    unit: 'V',
+    current: 'ac',
+    fullScale: 20,
+    resolution: 1e-4,
+    ofReading: 0.002,
+    ofRange: 0.001,
+  }),
+];
 
 export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
   {
@@ -10,6 +55,8 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     description: 'Two-channel oscilloscope, 100 MHz',
     serialNumber: 'Z31-40718',
     place: 'Bench 1',
+    dailyReference: null,
+    ranges: SCOPE_RANGES,
     dueInDays: 148,
   },
   {
@@ -18,6 +65,8 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     description: 'Two-channel oscilloscope, 60 MHz',
     serialNumber: 'Z22-11920',
     place: 'Bench 2',
+    dailyReference: null,
+    ranges: SCOPE_RANGES,
     dueInDays: -12,
   },
   {
@@ -26,6 +75,8 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     description: 'Bench multimeter, 5½ digits',
     serialNumber: '770-0311',
     place: 'Bench 1',
+    dailyReference: { name: 'Reference source, 10 V', unit: 'V', value: 10, tolerance: 0.005 },
+    ranges: METER_RANGES,
     dueInDays: 201,
   },
   {
@@ -34,6 +85,8 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     description: 'Bench multimeter, 5½ digits',
     serialNumber: '770-0312',
     place: 'Bench 2',
+    dailyReference: { name: 'Reference source, 10 V', unit: 'V', value: 10, tolerance: 0.005 },
+    ranges: METER_RANGES,
     dueInDays: 64,
   },
   {
@@ -42,6 +95,27 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     description: 'Electronic load, 80 V, 30 A, 150 W',
     serialNumber: 'LD-2208',
     place: 'Bench 1',
+    dailyReference: null,
+    ranges: [
+      digital({
+        name: '3 A',
+        unit: 'A',
+        current: 'dc',
+        fullScale: 3,
+        resolution: 1e-4,
+        ofReading: 0.0005,
+        ofRange: 0.0005,
+      }),
+      digital({
+        name: '30 A',
+        unit: 'A',
+        current: 'dc',
+        fullScale: 30,
+        resolution: 1e-3,
+        ofReading: 0.0005,
+        ofRange: 0.0005,
+      }),
+    ],
     dueInDays: 9,
   },
   {
@@ -50,6 +124,10 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     description: 'Insulation tester, 500 V DC',
     serialNumber: 'IR5-0093',
     place: 'Cage',
+    dailyReference: null,
+    ranges: [
+      digital({ name: '2 GΩ at 500 V', unit: 'Ω', fullScale: 2e9, resolution: 1e6, ofReading: 0.05, counts: 5 }),
+    ],
     dueInDays: 96,
   },
   {
@@ -58,6 +136,8 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     description: 'Thermometer with thermocouple type K',
     serialNumber: 'K2-5518',
     place: 'Bench 2',
+    dailyReference: null,
+    ranges: [digital({ name: 'Type K', unit: 'K', fullScale: 400, resolution: 0.1, ofReading: 0.001, counts: 7 })],
     dueInDays: 120,
   },
   {
@@ -66,6 +146,11 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     description: 'Power meter, 10 mW to 600 W',
     serialNumber: 'PW-0147',
     place: 'Bench 1',
+    dailyReference: null,
+    ranges: [
+      digital({ name: '1 W', unit: 'W', fullScale: 1, resolution: 1e-4, ofReading: 0.001, ofRange: 0.001 }),
+      digital({ name: '100 W', unit: 'W', fullScale: 100, resolution: 1e-2, ofReading: 0.001, ofRange: 0.001 }),
+    ],
     dueInDays: 230,
   },
   {
@@ -74,6 +159,8 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     description: 'Steel rule, 2 m',
     serialNumber: '',
     place: 'Bench 2',
+    dailyReference: null,
+    ranges: [digital({ name: '2 m', unit: 'm', fullScale: 2, resolution: 0.0005, counts: 1 })],
     dueInDays: 310,
   },
 ];

@@ -18,6 +18,9 @@ export function firstRevision(part: DemoPart): RevisionBody {
     level: 'II',
     classAqls: CLASS_AQLS,
     characteristics: planCharacteristics(part),
+    decisionRule: 'simple',
+    coverageFactor: 2,
+    warmUpMinutes: null,
     changeNote: 'First issue.',
   };
 }

@@ -1,6 +1,6 @@
 import { type Characteristic } from '#shared/contract/plans';
 import { HOT_CAUTION, INSULATION_CAUTION, MAINS_CAUTION, OPEN_FRAME_CAUTION, SCOPE_CAUTION } from './cautions';
-import { type Computed, FEW_UNITS, type Measured, PLAIN, UNLIMITED } from './characteristic-parts';
+import { type Computed, FEW_UNITS, type Measured, MEASURED, PLAIN, UNLIMITED } from './characteristic-parts';
 import { type DemoPart } from './demo-part';
 import { balance, currentLimit, noLoadPower } from './special-characteristics';
 
@@ -51,9 +51,10 @@ function polarity(part: DemoPart): Attribute {
 function insulation(): Measured {
   return {
     kind: 'measured',
-    ...PLAIN,
+    ...MEASURED,
     ...UNLIMITED,
     key: 'insulation',
+    measurand: 'insulation-resistance',
     name: 'Insulation, in to out',
     class: 'critical',
     condition: 'at 500 V DC',
@@ -71,8 +72,9 @@ function noLoad(part: DemoPart): Measured {
   const [lowerLimit, upperLimit] = part.limits.noLoadVolts;
   return {
     kind: 'measured',
-    ...PLAIN,
+    ...MEASURED,
     key: 'v_no_load',
+    measurand: 'no-load-voltage',
     name: 'No-load voltage',
     class: 'major',
     condition: '230 V, no load',
@@ -92,8 +94,9 @@ function loaded(part: DemoPart): Measured {
   const [lowerLimit, upperLimit] = part.limits.loadedVolts;
   return {
     kind: 'measured',
-    ...PLAIN,
+    ...MEASURED,
     key: 'v_loaded',
+    measurand: 'loaded-voltage',
     name: 'Loaded voltage',
     class: 'major',
     condition: loadText(part),
@@ -113,9 +116,10 @@ function ripple(part: DemoPart): Measured {
   const isSwitching = part.body.model.topology === 'switch-mode';
   return {
     kind: 'measured',
-    ...PLAIN,
+    ...MEASURED,
     ...UNLIMITED,
     key: 'ripple_pp',
+    measurand: 'ripple',
     name: 'Ripple',
     class: 'major',
     condition: loadText(part),
@@ -144,17 +148,18 @@ function regulation({ limits }: DemoPart): Computed {
     unit: '%',
     decimals: 1,
     upperLimit: limits.regulation,
-    formula: { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' } },
+    formula: { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' }, constants: {} },
   };
 }
 
 function temperatureRise(part: DemoPart): Measured {
   return {
     kind: 'measured',
-    ...PLAIN,
+    ...MEASURED,
     ...UNLIMITED,
     ...FEW_UNITS,
     key: 'temp_rise',
+    measurand: 'temperature',
     name: isOpenFrame(part) ? 'Temperature rise' : 'Case temperature rise',
     class: 'major',
     condition: `${loadText(part)}, 60 min`,
@@ -188,10 +193,11 @@ export function planCharacteristics(part: DemoPart): Characteristic[] {
 /** Added to a plan in its second revision. */
 export const CABLE_LENGTH: Characteristic = {
   kind: 'measured',
-  ...PLAIN,
+  ...MEASURED,
   ownLevel: 'S-4',
   ownAql: '2.5',
   key: 'cable_length',
+  measurand: 'dimension',
   name: 'Cable length',
   class: 'minor',
   method: 'Cable straight on the table, from the strain relief to the tip of the plug.',

@@ -1,15 +1,16 @@
 import { type Characteristic } from '#shared/contract/plans';
 import { MAINS_CAUTION, OPEN_FRAME_CAUTION } from './cautions';
-import { type Computed, FEW_UNITS, type Measured, PLAIN, UNLIMITED } from './characteristic-parts';
+import { type Computed, FEW_UNITS, type Measured, MEASURED, PLAIN, UNLIMITED } from './characteristic-parts';
 import { type DemoPart } from './demo-part';
 
 function halfPeak(half: 1 | 2): Measured {
   return {
     kind: 'measured',
-    ...PLAIN,
+    ...MEASURED,
     ...UNLIMITED,
     ...FEW_UNITS,
     key: `half${half}_peak`,
+    measurand: 'half-winding-peak',
     name: `Peak of half-winding ${half}`,
     class: 'minor',
     condition: '230 V, no load',
@@ -37,7 +38,7 @@ export function balance({ limits }: DemoPart): Characteristic[] {
     unit: '%',
     decimals: 1,
     upperLimit: limits.balance,
-    formula: { key: 'transformer-balance', inputs: { half1: 'half1_peak', half2: 'half2_peak' } },
+    formula: { key: 'transformer-balance', inputs: { half1: 'half1_peak', half2: 'half2_peak' }, constants: {} },
   };
   return [halfPeak(1), halfPeak(2), computed];
 }
@@ -47,11 +48,12 @@ export function noLoadPower({ limits }: DemoPart): Characteristic[] {
   if (limits.noLoadWatts === null) return [];
   const measured: Measured = {
     kind: 'measured',
-    ...PLAIN,
+    ...MEASURED,
     ...UNLIMITED,
     ownLevel: 'S-4',
     ownAql: '2.5',
     key: 'no_load_power',
+    measurand: 'input-power',
     name: 'No-load power',
     class: 'major',
     condition: '230 V, no load',
@@ -71,10 +73,11 @@ export function currentLimit({ limits }: DemoPart): Characteristic[] {
   const [lowerLimit, upperLimit] = limits.currentLimitAmperes;
   const measured: Measured = {
     kind: 'measured',
-    ...PLAIN,
+    ...MEASURED,
     ownLevel: 'S-4',
     ownAql: '2.5',
     key: 'current_limit',
+    measurand: 'current',
     name: 'Current limit',
     class: 'major',
     condition: 'output down 5 %',

@@ -33,9 +33,9 @@ export interface Stage {
 }
 
 function addInstruments(context: Context, cast: Cast, until: Date): StagedInstrument[] {
-  return DEMO_INSTRUMENTS.map(({ dueInDays, ...instrument }) => {
+  return DEMO_INSTRUMENTS.map(({ dueInDays, ranges, ...instrument }) => {
     const calibrationDue = dayOf(new Date(until.getTime() + dueInDays * DAY));
-    return addInstrument(context, cast.quality[0], { ...instrument, calibrationDue, status: 'in-service' });
+    return addInstrument(context, cast.quality[0], { ...instrument, ranges: [...ranges], calibrationDue, status: 'in-service' });
   });
 }
 

@@ -12,6 +12,7 @@ const PROBLEM = { $ref: '#/components/responses/Problem' };
 export function whoMay({ who }: Endpoint): string {
   if (who === 'anyone') return 'Anyone';
   if (who === 'signed-in') return 'Everybody who is signed in';
+  if (who === 'rack') return 'A test rack, by its token';
   return who.map((role) => ROLE_TITLES[role]).join(', ');
 }
 

@@ -1,6 +1,7 @@
 import { type Db } from '#db/open-database';
 import { lotGroups, type lots } from '#db/schema/lots';
 import { planCharacteristics, planClassAqls, planRevisions, plans } from '#db/schema/plans';
+import { wholeCharacteristic } from '#server/plans/whole-characteristic';
 import { type LotSampling } from '#shared/contract/lots';
 import { type Characteristic } from '#shared/contract/plans';
 import { sampledCharacteristic } from '#shared/plan/judged-characteristic';
@@ -30,7 +31,8 @@ export function characteristicsOf(db: Db, revisionId: number): { id: number; con
     .from(planCharacteristics)
     .where(eq(planCharacteristics.revisionId, revisionId))
     .orderBy(asc(planCharacteristics.position))
-    .all();
+    .all()
+    .map(({ id, content }) => ({ id, content: wholeCharacteristic(content) }));
 }
 
 /** How a lot of this part and size would be sampled now, with the revision it rests on; undefined without an effective plan. */

@@ -8,7 +8,7 @@ import { Refused } from '#server/problems';
 import { type Plan, type RevisionBody } from '#shared/contract/plans';
 import { eq, sql } from 'drizzle-orm';
 import { findPlan } from './plan-queries';
-import { holdPlanRules, keepContent, revisionName } from './revision-rows';
+import { headColumns, holdPlanRules, keepContent, revisionName } from './revision-rows';
 
 /** Plans are never removed, so the next number follows the highest. */
 function nextPlanNumber(db: Db): string {
@@ -54,10 +54,9 @@ export function draftRevision(
   draft: { planId: number; revision: number; authorId: number; now: Date; content: RevisionBody },
 ): void {
   const { planId, revision, authorId, now, content } = draft;
-  const { level, changeNote } = content;
   const { id } = db
     .insert(planRevisions)
-    .values({ planId, revision, status: 'draft', level, changeNote, authorId, createdAt: now.toISOString() })
+    .values({ planId, revision, status: 'draft', ...headColumns(content), authorId, createdAt: now.toISOString() })
     .returning({ id: planRevisions.id })
     .get();
   keepContent(db, id, content);

@@ -8,7 +8,7 @@ import { desc, eq } from 'drizzle-orm';
 import { draftRevision } from './add-plan';
 import { findPlan } from './plan-queries';
 import { contentOf } from './plan-rows';
-import { revisionName } from './revision-rows';
+import { headColumns, revisionName } from './revision-rows';
 
 /** Drafts the next revision as a copy of the newest one; a plan has one open revision at a time. */
 export function addRevision({ db, clock }: Context, caller: Caller, planId: number): Plan {
@@ -27,7 +27,7 @@ export function addRevision({ db, clock }: Context, caller: Caller, planId: numb
       throw new Conflict('revision-open', `Revision ${row.revision} is open already.`);
     const now = clock.now();
     const revision = row.revision + 1;
-    const content = { level: row.level, changeNote: '', ...contentOf(tx, row.id) };
+    const content = { ...headColumns(row), changeNote: '', ...contentOf(tx, row.id) };
     draftRevision(tx, { planId, revision, authorId: caller.id, now, content });
     record(tx, {
       at: now,

@@ -6,6 +6,7 @@ import { type Revision, type RevisionBody } from '#shared/contract/plans';
 import { NONCONFORMITY_CLASSES } from '#shared/sampling/scheme';
 import { asc, count, desc, eq } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/sqlite-core';
+import { wholeCharacteristic } from './whole-characteristic';
 
 const authors = alias(people, 'authors');
 const approvers = alias(people, 'approvers');
@@ -59,7 +60,7 @@ export function contentOf(db: Db, revisionId: number): Pick<RevisionBody, 'class
     .all();
   return {
     classAqls: NONCONFORMITY_CLASSES.flatMap((one) => aqls.filter((entry) => entry.class === one)),
-    characteristics: rows.map(({ content }) => content),
+    characteristics: rows.map(({ content }) => wholeCharacteristic(content)),
   };
 }
 

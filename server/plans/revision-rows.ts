@@ -78,6 +78,16 @@ export function keepContent(
   );
 }
 
+/** What stands in the revision's own row of its content. */
+export function headColumns<Head extends RevisionHeadFields>(body: Head): RevisionHeadFields {
+  const { level, decisionRule, coverageFactor, warmUpMinutes, changeNote } = body;
+  return { level, decisionRule, coverageFactor, warmUpMinutes, changeNote };
+}
+type RevisionHeadFields = Pick<
+  RevisionBody,
+  'level' | 'decisionRule' | 'coverageFactor' | 'warmUpMinutes' | 'changeNote'
+>;
+
 /** Moves a revision on; every step is a new version of it. */
 export function moveRevision(db: Db, revisionId: number, change: Partial<typeof planRevisions.$inferInsert>): void {
   db.update(planRevisions)

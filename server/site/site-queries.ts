@@ -11,6 +11,7 @@ const FRESH: Site = {
   waitingTargetHours: 8,
   approveOwnPlans: false,
   releaseOwnReadings: false,
+  dailyChecks: false,
   version: 1,
 };
 

@@ -34,6 +34,8 @@ export function measured(
     lowerLimit: lower ?? null,
     upperLimit: upper ?? null,
     entryMode: 'direct',
+    measurand: 'other',
+    alternatePeaks: 'worst',
     instrumentKind: null,
     ...more,
   };
@@ -52,8 +54,12 @@ export function attribute(key: string, nonconformityClass: 'critical' | 'major' 
   };
 }
 
+/** What a plan of a test holds; the decision rule is simple acceptance unless it says otherwise. */
+type PlannedContent = Pick<RevisionBody, 'level' | 'classAqls' | 'characteristics'> &
+  Partial<Pick<RevisionBody, 'decisionRule' | 'coverageFactor' | 'warmUpMinutes'>>;
+
 /** A supplier and a part with an effective plan, straight in the database. */
-export function addPlannedPart(db: Db, authorId: number, content: Omit<RevisionBody, 'changeNote'>) {
+export function addPlannedPart(db: Db, authorId: number, content: PlannedContent) {
   const supplier = db
     .insert(suppliers)
     .values({ code: 'KES', name: 'Kestrin Power', address: '', contactName: '', contactEmail: null })
@@ -84,6 +90,9 @@ export function addPlannedPart(db: Db, authorId: number, content: Omit<RevisionB
       revision: 1,
       status: 'draft',
       level: content.level,
+      decisionRule: content.decisionRule,
+      coverageFactor: content.coverageFactor,
+      warmUpMinutes: content.warmUpMinutes,
       changeNote: '',
       authorId,
       createdAt: at,

@@ -7,7 +7,12 @@ const common = { class: 'major', condition: '', method: '', caution: '', ownLeve
 const volts = { unit: 'V', decimals: 2, target: null, lowerLimit: null, upperLimit: null } as const;
 
 export function measured(key: string, given: Partial<Of<'measured'>> = {}): Of<'measured'> {
-  const entry = { entryMode: 'direct', instrumentKind: 'multimeter' } as const;
+  const entry = {
+    entryMode: 'direct',
+    instrumentKind: 'multimeter',
+    measurand: 'other',
+    alternatePeaks: 'worst',
+  } as const;
   return { kind: 'measured', key, name: `Measured ${key}`, ...common, ...volts, ...entry, ...given };
 }
 
@@ -39,11 +44,14 @@ export function revisionBody(given: Partial<RevisionBody> = {}): RevisionBody {
       measured('ripple', { unit: 'V p-p', upperLimit: 2.6, entryMode: 'scope', instrumentKind: 'oscilloscope' }),
       computed(
         'regulation',
-        { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' } },
+        { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' }, constants: {} },
         { upperLimit: 0.2 },
       ),
       attribute('label', { class: 'minor' }),
     ],
+    decisionRule: 'simple',
+    coverageFactor: 2,
+    warmUpMinutes: null,
     changeNote: 'First issue.',
     ...given,
   };

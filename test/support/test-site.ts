@@ -4,11 +4,15 @@ import { createApp } from '#server/app';
 import { type Context } from '#server/context';
 import { type Environment, readEnvironment } from '#server/environment';
 import { Stream } from '#server/events/stream';
+import { FileStore } from '#server/files/file-store';
 import { inProcessPasswords } from '#server/sessions/passwords';
 import { signAccessToken } from '#server/sessions/access-token';
 import { startSession } from '#server/sessions/start-session';
 import { type Role } from '#shared/contract/roles';
 import { type Express } from 'express';
+import { mkdtempSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { pino } from 'pino';
 import request from 'supertest';
@@ -37,6 +41,7 @@ export interface TestSite {
 function testEnvironment(changes: Partial<Environment>): Environment {
   return {
     ...readEnvironment({ LOG_LEVEL: 'silent', PORT: '3000' }, ROOT),
+    dataFolder: mkdtempSync(path.join(tmpdir(), 'quietrail-site-')),
     passwordCost: PASSWORD_COST,
     ...changes,
   };
@@ -52,6 +57,7 @@ function testContext(environment: Environment, clock: TestClock): Context {
     passwords: inProcessPasswords(PASSWORD_COST),
     outbox: { wake: () => undefined, close: () => Promise.resolve(), idle: () => Promise.resolve() },
     stream: new Stream({ db, clock }),
+    files: new FileStore(environment.dataFolder),
   };
 }
 
@@ -100,6 +106,7 @@ export async function testSite(changes: Partial<Environment> = {}): Promise<Test
     close: () => {
       stream.close();
       db.$client.close();
+      rmSync(context.environment.dataFolder, { recursive: true, force: true });
     },
   };
 }

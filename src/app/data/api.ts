@@ -1,6 +1,13 @@
-import { HttpClient, httpResource, type HttpResourceRef, type HttpResponse } from '@angular/common/http';
+import {
+  HttpClient,
+  type HttpEvent,
+  HttpEventType,
+  httpResource,
+  type HttpResourceRef,
+  type HttpResponse,
+} from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
-import { map, type Observable } from 'rxjs';
+import { map, mergeMap, type Observable } from 'rxjs';
 import type * as z from 'zod';
 import { type Endpoint } from '#shared/contract/endpoint';
 import { answerOfAnotherShape } from './api-problem';
@@ -58,6 +65,20 @@ export class ApiClient {
       .pipe(map((raw) => understood(endpoint, raw)));
   }
 
+  /** Sends a file to an endpoint that takes one, and tells how far it is; the last step holds the reply, checked. */
+  upload<E extends Endpoint>(endpoint: E, input: CallInput<E> & { file: Blob }): Observable<UploadStep<Reply<E>>> {
+    const { params, query, version } = input as LooseInput;
+    return this.http
+      .request(endpoint.method, urlOf(endpoint.path, params), {
+        params: queryOf(query),
+        body: input.file,
+        headers: { ...headersOf(endpoint, version), 'content-type': 'application/octet-stream' },
+        observe: 'events',
+        reportProgress: true,
+      })
+      .pipe(mergeMap((event) => stepOf(endpoint, event)));
+  }
+
   /** Calls an endpoint that answers with a file. */
   download<E extends Endpoint>(endpoint: E, input: CallInput<E>): Observable<HttpResponse<Blob>> {
     const { params, query, body, version } = input as LooseInput;
@@ -69,6 +90,17 @@ export class ApiClient {
       observe: 'response',
     });
   }
+}
+
+/** How far an upload is: the share sent, from 0 to 1, then the reply. */
+export type UploadStep<R> =
+  { readonly state: 'sending'; readonly share: number } | { readonly state: 'done'; readonly reply: R };
+
+function stepOf<E extends Endpoint>(endpoint: E, event: HttpEvent<unknown>): UploadStep<Reply<E>>[] {
+  if (event.type === HttpEventType.UploadProgress)
+    return [{ state: 'sending', share: event.total ? event.loaded / event.total : 0 }];
+  if (event.type === HttpEventType.Response) return [{ state: 'done', reply: understood(endpoint, event.body) }];
+  return [];
 }
 
 /**

@@ -13,11 +13,17 @@ export function newCharacteristic(kind: Characteristic['kind']): Characteristic 
     ownAql: null,
   } as const;
   const limits = { decimals: 2, target: null, lowerLimit: null, upperLimit: null } as const;
+  const typed = {
+    entryMode: 'direct',
+    instrumentKind: 'multimeter',
+    measurand: 'other',
+    alternatePeaks: 'worst',
+  } as const;
   switch (kind) {
     case 'measured':
-      return { kind, ...common, ...limits, unit: 'V', entryMode: 'direct', instrumentKind: 'multimeter' };
+      return { kind, ...common, ...limits, unit: 'V', ...typed };
     case 'computed':
-      return { kind, ...common, ...limits, unit: '%', formula: { key: 'load-regulation', inputs: {} } };
+      return { kind, ...common, ...limits, unit: '%', formula: { key: 'load-regulation', inputs: {}, constants: {} } };
     case 'attribute':
       return { kind, ...common, class: 'minor', requirement: '', failReasons: [], instrumentKind: null };
   }
