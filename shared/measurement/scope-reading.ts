@@ -12,14 +12,27 @@ interface ScopeSettings {
   coupling: Coupling;
 }
 
-/** A reading taken off the screen: a whole wave, or one taller than the screen as its two halves, measured apart. */
+/**
+ * A reading taken off the screen: a whole wave, one taller than the screen as its two halves, measured apart, or the heights
+ * of the two alternate peaks of a ripple whose peaks differ.
+ */
 export type ScopeEntry =
   | ({ form: 'whole'; divisions: number } & ScopeSettings)
-  | ({ form: 'halves'; upperDivisions: number; lowerDivisions: number } & ScopeSettings);
+  | ({ form: 'halves'; upperDivisions: number; lowerDivisions: number } & ScopeSettings)
+  | ({ form: 'alternate'; higherDivisions: number; lowerDivisions: number } & ScopeSettings);
+
+/** Which of two alternate peaks counts: the higher one, or their mean. */
+export type AlternatePeaks = 'worst' | 'mean';
 
 /** A field of a scope entry. */
 export type ScopeField =
-  'divisions' | 'upperDivisions' | 'lowerDivisions' | 'voltsPerDivision' | 'probeFactor' | 'coupling';
+  | 'divisions'
+  | 'upperDivisions'
+  | 'lowerDivisions'
+  | 'higherDivisions'
+  | 'voltsPerDivision'
+  | 'probeFactor'
+  | 'coupling';
 
 /** A scope entry that cannot be right; the message is a sentence for the person who typed it. */
 export class ScopeEntryRefused extends RangeError {
@@ -40,6 +53,7 @@ const HEIGHT_NAMES = {
   divisions: 'Divisions',
   upperDivisions: 'Divisions of the upper half',
   lowerDivisions: 'Divisions of the lower half',
+  higherDivisions: 'Divisions of the higher peak',
 } as const;
 
 function height(field: keyof typeof HEIGHT_NAMES, divisions: number): number {
@@ -74,24 +88,54 @@ function checkCoupling(coupling: Coupling, quantity: ScopeQuantity): void {
   }
 }
 
+/** Heights read off the screen, in divisions, and how each enters the result. */
+function heights(entry: ScopeEntry, alternatePeaks: AlternatePeaks): { divisions: number; weight: number }[] {
+  switch (entry.form) {
+    case 'whole':
+      return [{ divisions: height('divisions', entry.divisions), weight: 1 }];
+    case 'halves':
+      return [
+        { divisions: height('upperDivisions', entry.upperDivisions), weight: 1 },
+        { divisions: height('lowerDivisions', entry.lowerDivisions), weight: 1 },
+      ];
+    case 'alternate': {
+      const higher = height('higherDivisions', entry.higherDivisions);
+      const lower = height('lowerDivisions', entry.lowerDivisions);
+      if (alternatePeaks === 'worst') return [{ divisions: Math.max(higher, lower), weight: 1 }];
+      return [higher, lower].map((divisions) => ({ divisions, weight: 1 / 2 }));
+    }
+  }
+}
+
+/**
+ * The edges that were read off the graticule, each with the weight at which its error enters the result: two a height, and
+ * half as much of each where the mean of two heights counts.
+ *
+ * @throws {ScopeEntryRefused} naming the field, in words
+ */
+export function scopeEdges(entry: ScopeEntry, alternatePeaks: AlternatePeaks = 'worst'): number[] {
+  return heights(entry, alternatePeaks).flatMap(({ weight }) => [weight, weight]);
+}
+
 /**
  * The voltage of a reading taken off an oscilloscope's screen, in volts.
  *
  *     divisions × volts per division × probe factor
  *
- * A wave taller than the screen is read as two halves whose heights add. The product is rounded to twelve significant
+ * A wave taller than the screen is read as two halves whose heights add; of two alternate peaks the higher counts, or their mean. The product is rounded to twelve significant
  * digits, so that 3 divisions at 0.1 V give 0.3 V without a trace of binary arithmetic.
  * Common practice, no source.
  *
+ * @param options.alternatePeaks which of two alternate peaks counts; the higher one unless the plan says otherwise
  * @param options.quantity what is read, where the coupling is to be checked: ripple is AC-coupled, a DC level never is
  * @throws {ScopeEntryRefused} naming the field, in words
  */
-export function scopeVolts(entry: ScopeEntry, { quantity }: { quantity?: ScopeQuantity } = {}): number {
+export function scopeVolts(
+  entry: ScopeEntry,
+  { quantity, alternatePeaks = 'worst' }: { quantity?: ScopeQuantity; alternatePeaks?: AlternatePeaks } = {},
+): number {
   if (quantity !== undefined) checkCoupling(entry.coupling, quantity);
-  const divisions =
-    entry.form === 'whole'
-      ? height('divisions', entry.divisions)
-      : height('upperDivisions', entry.upperDivisions) + height('lowerDivisions', entry.lowerDivisions);
+  const divisions = heights(entry, alternatePeaks).reduce((sum, each) => sum + each.weight * each.divisions, 0);
   const scale = positive('voltsPerDivision', 'Volts per division', entry.voltsPerDivision);
   const probe = positive('probeFactor', 'Probe factor', entry.probeFactor);
   return Number((divisions * scale * probe).toPrecision(12));
