@@ -5,8 +5,8 @@ import { type JudgedCharacteristic } from '../verdict/sample-verdict';
 
 function formulaOf(characteristic: Characteristic): JudgedCharacteristic['formula'] {
   if (characteristic.kind !== 'computed') return null;
-  const { key, inputs } = characteristic.formula;
-  return { key: key satisfies FormulaKey, inputs };
+  const { key, inputs, constants } = characteristic.formula;
+  return { key: key satisfies FormulaKey, inputs, constants };
 }
 
 /** A plan's characteristic as the verdicts see it. An attribute has no limits. */

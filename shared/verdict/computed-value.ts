@@ -20,8 +20,8 @@ export type ComputedValue = { state: 'value'; value: number } | { state: 'missin
  * @throws {ReadingNotFinite} for a reading that is NaN or infinite
  */
 export function computedValue(characteristic: JudgedCharacteristic, values: Values): ComputedValue {
-  const { inputs, compute, sources } = boundFormula(characteristic);
-  const given: Record<string, number> = {};
+  const { inputs, compute, sources, constants } = boundFormula(characteristic);
+  const given: Record<string, number> = { ...constants };
   for (const [index, { name }] of inputs.entries()) {
     const value = values.get(sources[index] ?? '');
     if (typeof value !== 'number') return { state: 'missing' };
@@ -31,8 +31,12 @@ export function computedValue(characteristic: JudgedCharacteristic, values: Valu
   return withinDomain(() => compute(given));
 }
 
-/** The formula with the characteristic that each of its inputs takes, in the order of the inputs. */
-function boundFormula({ formula, key }: JudgedCharacteristic) {
+/**
+ * The formula with the characteristic that each of its inputs takes, in the order of the inputs, and its constants.
+ *
+ * @throws {RangeError} where the characteristic has no formula or binds no key to a formula input
+ */
+export function boundFormula({ formula, key }: JudgedCharacteristic) {
   if (formula === null) throw new RangeError(`characteristics: ${key} is computed and needs a formula.`);
   const { inputs, compute } = FORMULAS[formula.key];
   const sources = inputs.map(({ name }) => {
@@ -40,7 +44,7 @@ function boundFormula({ formula, key }: JudgedCharacteristic) {
     if (source === undefined) throw new RangeError(`characteristics: formula of ${key} binds nothing to ${name}.`);
     return source;
   });
-  return { inputs, compute, sources };
+  return { inputs, compute, sources, constants: formula.constants ?? {} };
 }
 
 function withinDomain(compute: () => number): ComputedValue {

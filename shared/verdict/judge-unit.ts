@@ -19,6 +19,11 @@ const isConditional = ({ verdict }: JudgedRule) => verdict.verdict === 'conditio
 const isOpen = (judged: JudgedRule) => judged.verdict.verdict === 'not judged' || isConditional(judged);
 const keyOf = ({ rule }: JudgedRule) => rule.characteristic.key;
 
+/** A conditional reading as quality ruled on it. */
+function settledBy(ruling: UnitReadings['ruling'], verdict: CharacteristicVerdict): CharacteristicVerdict {
+  return ruling && verdict.verdict === 'conditional' ? { ...verdict, verdict: ruling } : verdict;
+}
+
 /** The worst class among failures that count on this unit; where none counts, the worst of all. */
 function worstClassOf(failures: readonly JudgedRule[], unit: number): NonconformityClass | null {
   const counting = failures.filter(({ rule }) => unit <= rule.countsTo);
@@ -54,20 +59,26 @@ function unitVerdict(failures: readonly JudgedRule[], undecided: boolean, missin
  * When the sample is submitted, an undecided unit becomes nonconforming in the characteristics left open on it (where none
  * is, in all it was drawn for but the critical) and counts at the worst class among them and what it failed in anyway.
  *
+ * Quality's ruling settles conditional readings, and a unit set aside; where it rules a unit set aside nonconforming, the unit
+ * fails as it would on submission.
+ *
  * @throws {RangeError} for a unit number that is not a whole number of at least 1, or a value that cannot be judged
  */
 export function judgeUnit(rules: JudgingRules, readings: UnitReadings, options: JudgingOptions = {}): UnitVerdict {
-  const { unit, values, setAside } = readings;
+  const { unit, ruling = null } = readings;
   if (!Number.isSafeInteger(unit) || unit < 1) throw new RangeError(`unit must be a whole number from 1, not ${unit}.`);
   const judged = rules.characteristics.map((rule) => ({
     rule,
-    verdict: judgeCharacteristic(rule.characteristic, values),
+    verdict: settledBy(ruling, judgeCharacteristic(rule.characteristic, readings, rules.decision)),
   }));
   const required = judged.filter(({ rule }) => unit <= rule.requiredTo);
-  const undecided = setAside !== null || judged.some(isConditional);
-  const settled = undecided && options.submitting === true ? takenAsFailed(required, setAside !== null) : [];
+  const setAside = readings.setAside !== null && ruling === null;
+  const undecided = setAside || judged.some(isConditional);
+  const ruledOut = ruling === 'nonconforming' && readings.setAside !== null;
+  const settled =
+    ruledOut || (undecided && options.submitting === true) ? takenAsFailed(required, setAside || ruledOut) : [];
   const failures = judged.filter((each) => fails(each) || settled.includes(each));
-  const missing = setAside !== null ? [] : required.filter(({ verdict }) => verdict.verdict === 'not judged');
+  const missing = setAside || ruledOut ? [] : required.filter(({ verdict }) => verdict.verdict === 'not judged');
   return {
     unit,
     verdict: unitVerdict(failures, undecided, missing.length),

@@ -1,5 +1,7 @@
 import { type SamplingGroup } from '../sampling/sampling-group';
 import { NONCONFORMITY_CLASSES, type NonconformityClass } from '../sampling/scheme';
+import { USUAL_COVERAGE_FACTOR } from '../uncertainty/expanded-uncertainty';
+import { type DecisionRule } from '../uncertainty/guard-band';
 import { type JudgedCharacteristic } from './sample-verdict';
 
 /** A characteristic with the units it is required on. */
@@ -13,11 +15,19 @@ export interface JudgingRule {
   rank: number;
 }
 
+/** How measurement uncertainty enters the verdicts: the rule, and k. */
+export interface DecisionRules {
+  rule: DecisionRule;
+  coverageFactor: number;
+}
+const SIMPLE_ACCEPTANCE: DecisionRules = { rule: 'simple', coverageFactor: USUAL_COVERAGE_FACTOR };
+
 /** What judges the units of one lot, prepared once so that a single unit can be judged again on every keystroke. */
 export interface JudgingRules {
   /** In the order of the plan. */
   characteristics: readonly JudgingRule[];
   groups: readonly SamplingGroup[];
+  decision: DecisionRules;
   /** Units in the whole sample: the largest of all groups. */
   sampleSize: number;
 }
@@ -39,11 +49,13 @@ function requiredTo(key: string, characteristics: readonly JudgedCharacteristic[
  * Each group is judged on its first units in draw order, as many as its sample size; a critical failure counts on every
  * unit measured.
  *
+ * @param decision simple acceptance unless the plan says otherwise
  * @throws {RangeError} where there is no group, or a characteristic belongs to none
  */
 export function judgingRules(
   characteristics: readonly JudgedCharacteristic[],
   groups: readonly SamplingGroup[],
+  decision: DecisionRules = SIMPLE_ACCEPTANCE,
 ): JudgingRules {
   if (groups.length === 0) throw new RangeError('groups must hold at least one sampling group.');
   const reach = new Map(groups.flatMap((group) => group.characteristicKeys.map((key) => [key, group.sampleSize])));
@@ -57,5 +69,6 @@ export function judgingRules(
       rank: classRank(characteristic.class),
     };
   });
-  return { characteristics: rules, groups, sampleSize: Math.max(...groups.map((group) => group.sampleSize)) };
+  const sampleSize = Math.max(...groups.map((group) => group.sampleSize));
+  return { characteristics: rules, groups, decision, sampleSize };
 }

@@ -1,6 +1,7 @@
 import { type FormulaKey } from '../measurement/formula';
 import { type SamplingGroup } from '../sampling/sampling-group';
 import { type NonconformityClass } from '../sampling/scheme';
+import { type Component } from '../uncertainty/component';
 import { type ReadingVerdict } from './reading-verdict';
 
 /** A characteristic of a plan, as far as judging needs it. Limits are in SI base units; null is no limit. */
@@ -11,7 +12,7 @@ export interface JudgedCharacteristic {
   lowerLimit: number | null;
   upperLimit: number | null;
   /** For a computed characteristic: its formula, and for each formula input the key of the characteristic it takes. */
-  formula: { key: FormulaKey; inputs: Record<string, string> } | null;
+  formula: { key: FormulaKey; inputs: Record<string, string>; constants?: Record<string, number> } | null;
 }
 
 /** What was found on one unit. */
@@ -22,6 +23,13 @@ export interface UnitReadings {
   values: ReadonlyMap<string, number | boolean>;
   /** Why the inspector set the unit aside, or null. */
   setAside: string | null;
+  /**
+   * Quality's ruling, which settles doubt: conditional readings and a unit set aside. It makes no failed reading good, and no
+   * missing one.
+   */
+  ruling?: 'conforming' | 'nonconforming' | null;
+  /** Uncertainty budgets of the counting readings by characteristic key, where the decision rule needs them. */
+  components?: ReadonlyMap<string, readonly Component[]>;
 }
 
 /** One characteristic of one unit. */
@@ -29,6 +37,10 @@ export interface CharacteristicVerdict {
   /** The value judged; null where there is none, or where a formula has no value for the readings given. */
   value: number | boolean | null;
   verdict: ReadingVerdict | 'not judged';
+  /** On which side of the limit a conditional one lies. */
+  side: 'inside' | 'outside' | null;
+  /** U of the value; null where it is not known, or where the decision rule does not ask for it. */
+  expandedUncertainty: number | null;
 }
 
 /** One unit. */

@@ -90,6 +90,17 @@ describe('the formulas a plan may name', () => {
     { key: 'output-resistance', inputs: { no_load: 15, loaded: 12, load_current: 0.5 }, expected: 6 },
     { key: 'efficiency', inputs: { output_power: 6, input_power: 8 }, expected: 0.75 },
     { key: 'alternate-peak-difference', inputs: { odd: 12.5, even: 12 }, expected: 0.5 },
+    { key: 'load-regulation-rated', inputs: { no_load: 15, loaded: 12, rated: 12.5 }, expected: 0.24 },
+    { key: 'line-regulation', inputs: { high_line: 13, low_line: 11, rated: 12.5 }, expected: 0.16 },
+    { key: 'ripple-ratio-peak', inputs: { ripple: 3, peak: 15 }, expected: 0.2 },
+    { key: 'ripple-factor', inputs: { ripple_rms: 1.5, loaded: 25 }, expected: 0.06 },
+    { key: 'ripple-rms-estimate', inputs: { ripple: 6 * Math.sqrt(3) }, expected: 3 },
+    {
+      key: 'average-active-efficiency',
+      inputs: { out_100: 8, in_100: 10, out_75: 6, in_75: 8, out_50: 3, in_50: 4, out_25: 1, in_25: 2 },
+      expected: 0.7,
+    },
+    { key: 'time-constant', inputs: { resistance: 470, capacitance: 0.001 }, expected: 0.47 },
   ];
 
   it('are all tried here', () => {
@@ -98,8 +109,9 @@ describe('the formulas a plan may name', () => {
   });
 
   it.each(cases)('$key takes exactly its inputs', ({ key, inputs, expected }) => {
-    expect(FORMULAS[key].inputs.map(({ name }) => name)).toEqual(Object.keys(inputs));
-    expect(FORMULAS[key].compute(inputs)).toBe(expected);
+    const { inputs: taken, constants, compute } = FORMULAS[key];
+    expect([...taken, ...constants].map(({ name }) => name)).toEqual(Object.keys(inputs));
+    expect(compute(inputs)).toBeCloseTo(expected, 12);
   });
 
   it.each(cases)('$key refuses a missing input and one that is no number', ({ key, inputs }) => {

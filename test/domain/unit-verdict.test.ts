@@ -1,6 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { judgeSample, type JudgedCharacteristic } from '#shared/verdict/judge-sample';
-import { GOOD, PLAN, foundIn, groupsOf, judge, sample, unit, measured } from './judged-sample';
+import { judgeUnit } from '#shared/verdict/judge-unit';
+import { judgingRules } from '#shared/verdict/judging-rules';
+import { type UnitReadings } from '#shared/verdict/sample-verdict';
+import { rectangular } from '#shared/uncertainty/component';
+import { GOOD, GROUPS, PLAN, foundIn, groupsOf, judge, sample, unit, measured } from './judged-sample';
 
 describe('a unit', () => {
   it('conforms when every characteristic does', () => {
@@ -11,7 +15,7 @@ describe('a unit', () => {
   it('is not judged while a reading is missing', () => {
     const [verdict] = judge([unit(1, { insulation: 0, ripple: 0, label: true })]).units;
     expect(verdict).toMatchObject({ verdict: 'not judged', failed: [], missing: ['loaded'] });
-    expect(verdict?.characteristics.get('loaded')).toEqual({ value: null, verdict: 'not judged' });
+    expect(verdict?.characteristics.get('loaded')).toMatchObject({ value: null, verdict: 'not judged' });
   });
 
   it('is nonconforming as soon as one characteristic fails, even if others are missing', () => {
@@ -107,7 +111,7 @@ describe('a computed characteristic', () => {
 
   it('does not conform where the readings give it no value', () => {
     const dead = judgeOne({ open: 0, full: 0 });
-    expect(dead?.characteristics.get('regulation')).toEqual({ value: null, verdict: 'nonconforming' });
+    expect(dead?.characteristics.get('regulation')).toMatchObject({ value: null, verdict: 'nonconforming' });
     expect(dead?.failed).toEqual(['regulation']);
   });
 
@@ -128,5 +132,73 @@ describe('a computed characteristic', () => {
       });
     expect(broken(null)).toThrow(/regulation/);
     expect(broken({ key: 'load-regulation', inputs: { no_load: 'open' } })).toThrow(/loaded/);
+  });
+});
+
+describe('a unit under a rule with guard bands', () => {
+  const plan = [measured('ripple', 'major'), measured('loaded', 'major')];
+  const budget = new Map(['ripple', 'loaded'].map((key) => [key, [rectangular('accuracy', 0.1 * Math.sqrt(3))]]));
+  const judgeBy = (rule: 'guarded' | 'non-binary', readings: Partial<UnitReadings> & { ripple: number }) => {
+    const { ripple, ...more } = readings;
+    const rules = judgingRules(plan, groupsOf(plan, 150), { rule, coverageFactor: 2 });
+    const values = new Map([
+      ['ripple', ripple],
+      ['loaded', 0],
+    ]);
+    return judgeUnit(rules, { unit: 1, values, setAside: null, components: budget, ...more });
+  };
+
+  it('fails inside the guard band of guarded acceptance, and conforms at its edge', () => {
+    expect(judgeBy('guarded', { ripple: 0.85 })).toMatchObject({ verdict: 'nonconforming', failed: ['ripple'] });
+    expect(judgeBy('guarded', { ripple: 0.8 }).verdict).toBe('conforming');
+  });
+
+  it('is undecided while a reading is conditional, inside or outside of the limit', () => {
+    const inside = judgeBy('non-binary', { ripple: 0.95 });
+    expect(inside.verdict).toBe('undecided');
+    expect(inside.characteristics.get('ripple')).toMatchObject({ verdict: 'conditional', side: 'inside' });
+    expect(inside.characteristics.get('ripple')?.expandedUncertainty).toBeCloseTo(0.2, 9);
+    expect(judgeBy('non-binary', { ripple: 1.1 }).characteristics.get('ripple')?.side).toBe('outside');
+    expect(judgeBy('non-binary', { ripple: 1.3 }).verdict).toBe('nonconforming');
+  });
+
+  it('is as quality rules where a reading is conditional', () => {
+    expect(judgeBy('non-binary', { ripple: 0.95, ruling: 'conforming' }).verdict).toBe('conforming');
+    expect(judgeBy('non-binary', { ripple: 0.95, ruling: 'nonconforming' })).toMatchObject({
+      verdict: 'nonconforming',
+      failed: ['ripple'],
+      worstClass: 'major',
+    });
+  });
+
+  it('fails whatever quality ruled where a reading fails', () => {
+    expect(judgeBy('non-binary', { ripple: 1.3, ruling: 'conforming' }).verdict).toBe('nonconforming');
+  });
+
+  it('is not judged where the uncertainty of a reading is not known', () => {
+    expect(judgeBy('guarded', { ripple: 0, components: new Map() })).toMatchObject({
+      verdict: 'not judged',
+      missing: ['ripple', 'loaded'],
+    });
+  });
+});
+
+describe('a ruling on a unit set aside', () => {
+  const rules = judgingRules(PLAN, GROUPS);
+
+  it('lets it conform, once nothing is missing on it', () => {
+    const whole = { ...unit(1, GOOD, 'hums'), ruling: 'conforming' as const };
+    const partial = { ...unit(1, { ripple: 0 }, 'hums'), ruling: 'conforming' as const };
+    expect(judgeUnit(rules, whole).verdict).toBe('conforming');
+    expect(judgeUnit(rules, partial).verdict).toBe('not judged');
+  });
+
+  it('lets it fail, in what was open on it', () => {
+    const ruled = { ...unit(1, { ripple: 0, loaded: 0 }, 'hums'), ruling: 'nonconforming' as const };
+    expect(judgeUnit(rules, ruled)).toMatchObject({
+      verdict: 'nonconforming',
+      failed: ['insulation', 'label'],
+      missing: [],
+    });
   });
 });

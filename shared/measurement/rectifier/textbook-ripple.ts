@@ -1,3 +1,4 @@
+import { demandFinite } from '../reading-not-finite';
 import { diodesInPath, type RectifierCircuit } from './rectifier-circuit';
 import { type RectifierResult } from './simulate-rectifier';
 
@@ -40,8 +41,8 @@ export function textbookRipple({ amperes, rippleHertz, farads }: LinearDischarge
  * @throws {RangeError} for a height that is negative or not finite
  */
 export function sawtoothRms(peakToPeakVolts: number): number {
-  if (!(Number.isFinite(peakToPeakVolts) && peakToPeakVolts >= 0))
-    throw new RangeError('peakToPeakVolts must be a number of at least 0.');
+  demandFinite({ peakToPeakVolts });
+  if (peakToPeakVolts < 0) throw new RangeError('peakToPeakVolts must not be negative.');
   return peakToPeakVolts / (2 * Math.sqrt(3));
 }
 
