@@ -3,8 +3,8 @@ import { type WeightedComponent } from './component';
 /** Components of one origin, added. */
 export interface Contribution {
   members: readonly WeightedComponent[];
-  /** Σ c u over the members, with their signs. */
-  signed: number;
+  /** What they contribute together, |c u| for a single one. */
+  standardUncertainty: number;
   degreesOfFreedom: number;
 }
 
@@ -16,10 +16,20 @@ export interface Combined {
   contributions: readonly Contribution[];
 }
 
+/** One gain error and one zero error, each the same for all members; their sizes add as the terms of a specification do. */
+function added(members: readonly WeightedComponent[]): number {
+  let [gain, zero] = [0, 0];
+  for (const { component, sensitivity } of members) {
+    gain += sensitivity * component.proportional;
+    zero += sensitivity * (component.standardUncertainty - Math.abs(component.proportional));
+  }
+  return Math.abs(gain) + Math.abs(zero);
+}
+
 function contributionOf(members: readonly WeightedComponent[]): Contribution {
   return {
     members,
-    signed: members.reduce((sum, { component, sensitivity }) => sum + sensitivity * component.standardUncertainty, 0),
+    standardUncertainty: added(members),
     degreesOfFreedom: Math.min(...members.map(({ component }) => component.degreesOfFreedom)),
   };
 }
@@ -43,16 +53,19 @@ function byOrigin(components: readonly WeightedComponent[]): WeightedComponent[]
 
 /**
  * Combines components: those of one origin are wholly correlated and are added with their signs, all others in quadrature.
+ * Within an origin the part that grows with the value and the part that does not are added each by itself, since the one may
+ * cancel where the other adds (two readings of opposite polarity), and then one to the other without their signs.
  *
- *     u_c² = Σ over origins (Σ c_i u_i)²        ν_eff = u_c⁴ / Σ (u_g⁴ / ν_g)
+ *     u_g = |Σ c_i u_gain,i| + |Σ c_i u_zero,i|        u_c² = Σ u_g²        ν_eff = u_c⁴ / Σ (u_g⁴ / ν_g)
  *
  * Source: JCGM 100:2008, 5.1.2, 5.2.2 (correlation +1) and G.4.1 (Welch-Satterthwaite).
  */
 export function combine(components: readonly WeightedComponent[]): Combined {
   const contributions = byOrigin(components).map(contributionOf);
-  const variance = contributions.reduce((sum, { signed }) => sum + signed * signed, 0);
+  const variance = contributions.reduce((sum, { standardUncertainty: u }) => sum + u * u, 0);
   const weighted = contributions.reduce(
-    (sum, { signed, degreesOfFreedom }) => sum + (degreesOfFreedom === Infinity ? 0 : signed ** 4 / degreesOfFreedom),
+    (sum, { standardUncertainty: u, degreesOfFreedom }) =>
+      sum + (degreesOfFreedom === Infinity ? 0 : u ** 4 / degreesOfFreedom),
     0,
   );
   return {

@@ -14,6 +14,11 @@ export interface Component {
   /** Half of the width of a rectangular one; null for a normal one. */
   halfWidth: number | null;
   standardUncertainty: number;
+  /**
+   * The part of the standard uncertainty that grows with the value, as a gain error does, with the sign of the value; the rest
+   * is the same whatever is read, as a zero error is. It tells what cancels between readings of one origin.
+   */
+  proportional: number;
   /** Infinity where it was not found from repeated readings. */
   degreesOfFreedom: number;
 }
@@ -22,6 +27,8 @@ export interface Component {
 export interface WeightedComponent {
   component: Component;
   sensitivity: number;
+  /** The input of the formula it belongs to; none where the result is the reading itself. */
+  input?: string;
 }
 
 function demandWidth(name: string, value: number): void {
@@ -31,12 +38,26 @@ function demandWidth(name: string, value: number): void {
 /**
  * A component of which only the bounds are known: u = a / √3.
  *
- * @throws {RangeError} for a half-width that is negative or not finite
+ * @param proportional the part of the half-width that grows with the value, with its sign
+ * @throws {RangeError} for a half-width that is negative or not finite, or less than its proportional part
  */
-export function rectangular(name: string, halfWidth: number, origin: string | null = null): Component {
+export function rectangular(
+  name: string,
+  halfWidth: number,
+  origin: string | null = null,
+  proportional = 0,
+): Component {
   demandWidth('halfWidth', halfWidth);
-  const standardUncertainty = halfWidth / Math.sqrt(3);
-  return { origin, name, distribution: 'rectangular', halfWidth, standardUncertainty, degreesOfFreedom: Infinity };
+  if (!(Math.abs(proportional) <= halfWidth)) throw new RangeError('proportional must not be more than halfWidth.');
+  return {
+    origin,
+    name,
+    distribution: 'rectangular',
+    halfWidth,
+    standardUncertainty: halfWidth / Math.sqrt(3),
+    proportional: proportional / Math.sqrt(3),
+    degreesOfFreedom: Infinity,
+  };
 }
 
 /**
@@ -51,7 +72,15 @@ export function normal(
 ): Component {
   demandWidth('standardUncertainty', standardUncertainty);
   if (!(degreesOfFreedom >= 1)) throw new RangeError('degreesOfFreedom must be at least 1.');
-  return { origin, name, distribution: 'normal', halfWidth: null, standardUncertainty, degreesOfFreedom };
+  return {
+    origin,
+    name,
+    distribution: 'normal',
+    halfWidth: null,
+    standardUncertainty,
+    proportional: 0,
+    degreesOfFreedom,
+  };
 }
 
 /** Components that enter their quantity as they are. */

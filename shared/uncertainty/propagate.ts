@@ -14,22 +14,40 @@ export interface Propagated {
   sensitivities: ReadonlyMap<string, number>;
 }
 
+/** The formula has no value on either side of its readings, so that nothing can be said of their uncertainty. */
+export class NoSensitivity extends RangeError {
+  override readonly name = 'NoSensitivity';
+}
+
 /** The step of a derivative, as a share of the input's uncertainty and at least of its value. */
 const STEP_OF_UNCERTAINTY = 1e-2;
 const STEP_OF_VALUE = 1e-7;
 /** At a corner, as of |V1 − V2| where both are equal, the slopes of the two sides differ by more than this share. */
 const CORNER = 0.1;
 
+/** The slope towards one side; undefined where the formula's domain ends there. */
+function slope(f: (x: number) => number, value: number, step: number): number | undefined {
+  try {
+    const found = (f(value + step) - f(value)) / step;
+    return Number.isFinite(found) ? found : undefined;
+  } catch (error) {
+    if (error instanceof RangeError) return undefined;
+    throw error;
+  }
+}
+
 /**
- * ∂f/∂x by central differences; at a corner of the formula the steeper side, so that the uncertainty is not underrated.
+ * ∂f/∂x by central differences; at a corner of the formula the steeper side, so that the uncertainty is not underrated, and at
+ * the end of its domain (a ripple of 0 V) the side that it has.
  */
 function sensitivity(f: (x: number) => number, value: number, standardUncertainty: number): number {
-  const step = Math.max(standardUncertainty * STEP_OF_UNCERTAINTY, Math.abs(value) * STEP_OF_VALUE, Number.MIN_VALUE);
-  const [before, at, after] = [f(value - step), f(value), f(value + step)];
-  const [left, right] = [(at - before) / step, (after - at) / step];
+  const step = Math.max(standardUncertainty * STEP_OF_UNCERTAINTY, Math.abs(value) * STEP_OF_VALUE);
+  const [left, right] = [slope(f, value, -step), slope(f, value, step)];
+  const either = left ?? right;
+  if (either === undefined) throw new NoSensitivity('inputs: the formula has no value beside these readings.');
+  if (left === undefined || right === undefined) return either;
   const steeper = Math.abs(left) > Math.abs(right) ? left : right;
-  const central = (after - before) / (2 * step);
-  return Math.abs(left - right) > CORNER * Math.abs(steeper) ? steeper : central;
+  return Math.abs(left - right) > CORNER * Math.abs(steeper) ? steeper : (left + right) / 2;
 }
 
 /**
@@ -39,20 +57,22 @@ function sensitivity(f: (x: number) => number, value: number, standardUncertaint
  * Source: JCGM 100:2008, 5.1.2 and 5.1.4 (numerical sensitivities).
  *
  * @param compute takes the inputs by name, in SI base units
- * @throws {RangeError} what the formula throws
+ * @throws {NoSensitivity} where the formula has no value beside the readings
+ * @throws {RangeError} what the formula throws at the readings
  */
 export function propagate(
   compute: (inputs: Readonly<Record<string, number>>) => number,
   inputs: ReadonlyMap<string, UncertainInput>,
 ): Propagated {
   const values = Object.fromEntries([...inputs].map(([name, { value }]) => [name, value]));
+  const value = compute(values);
   const sensitivities = new Map<string, number>();
   const components: WeightedComponent[] = [];
-  for (const [name, { value, components: own }] of inputs) {
+  for (const [name, { value: x, components: own }] of inputs) {
     const u = combine(unweighted(own)).standardUncertainty;
-    const slope = u === 0 ? 0 : sensitivity((x) => compute({ ...values, [name]: x }), value, u);
-    sensitivities.set(name, slope);
-    components.push(...own.map((component) => ({ component, sensitivity: slope })));
+    const weight = u === 0 ? 0 : sensitivity((given) => compute({ ...values, [name]: given }), x, u);
+    sensitivities.set(name, weight);
+    components.push(...own.map((component) => ({ component, sensitivity: weight, input: name })));
   }
-  return { value: compute(values), components, sensitivities };
+  return { value, components, sensitivities };
 }

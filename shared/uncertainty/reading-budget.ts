@@ -2,24 +2,40 @@ import { scopeEdges, type AlternatePeaks, type ScopeEntry } from '../measurement
 import { rectangular, type Component } from './component';
 import { type DigitalRange, type GraticuleRange, type InstrumentRange } from './instrument-range';
 
-/** How a value was read; null and other kinds are digits as they stood on a display. */
-export type ReadEntry = { kind: 'scope'; scope: ScopeEntry } | { kind: 'direct' | 'waveform' | 'attribute' } | null;
+/**
+ * How a value was read; null and other kinds are digits as they stood on a display. Of a captured file the resolution of its
+ * samples in volts, where it is known.
+ */
+export type ReadEntry =
+  | { kind: 'scope'; scope: ScopeEntry }
+  | { kind: 'waveform'; resolution?: number }
+  | { kind: 'direct' | 'attribute' }
+  | null;
 
 /** The 1-2-5 sequence of volts per division, from 1 mV to 100 V. */
 const SCALES = [-3, -2, -1, 0, 1].flatMap((power) => [1, 2, 5].map((step) => step * 10 ** power)).concat(100);
 
-/** The origin that all readings of one range share: its error is the same for each of them. */
-function originOf({ id }: InstrumentRange): string {
-  return `range ${id}`;
+/**
+ * The accuracy of a range: the share of the reading is its gain error, all else its zero error, and both are the same for
+ * every reading of the origin.
+ */
+function accuracy({ name, ofReading }: InstrumentRange, value: number, constant: number, origin: string): Component {
+  const gain = ofReading * value;
+  return rectangular(`Accuracy of ${name}`, Math.abs(gain) + constant, origin, gain);
 }
 
-function digitalBudget(value: number, range: DigitalRange): Component[] {
-  const { ofReading, ofRange, counts, fullScale, resolution } = range;
-  const halfWidth = ofReading * Math.abs(value) + ofRange * fullScale + counts * resolution;
-  return [
-    rectangular(`Accuracy of ${range.name}`, halfWidth, originOf(range)),
-    rectangular('Resolution of the display', resolution / 2),
-  ];
+/** A peak-to-peak value out of a captured file lies between two samples, each read to the file's resolution. */
+function sampleResolution(entry: ReadEntry): Component[] {
+  if (entry?.kind !== 'waveform' || entry.resolution === undefined) return [];
+  const half = entry.resolution / 2;
+  return ['Higher', 'Lower'].map((edge) => rectangular(`${edge} sample, resolution of the file`, half));
+}
+
+function digitalBudget(value: number, entry: ReadEntry, range: DigitalRange): Component[] {
+  const { ofRange, counts, fullScale, resolution } = range;
+  const own = accuracy(range, value, ofRange * fullScale + counts * resolution, `range ${range.id}`);
+  if (entry?.kind === 'waveform') return [own, ...sampleResolution(entry)];
+  return [own, rectangular('Resolution of the display', resolution / 2)];
 }
 
 /** Volts for one division at the tip of the probe; of a captured file the smallest scale that shows the wave. */
@@ -35,13 +51,14 @@ function graticuleBudget(
   alternatePeaks: AlternatePeaks,
 ): Component[] {
   const division = voltsPerDivision(value, entry, range);
-  const halfWidth = range.ofReading * Math.abs(value) + range.ofFullScale * range.screenDivisions * division;
-  const accuracy = rectangular(`Accuracy of ${range.name}`, halfWidth, originOf(range));
-  if (entry?.kind !== 'scope') return [accuracy];
+  const constant = range.ofFullScale * range.screenDivisions * division;
+  // Each scale of the attenuator has an error of its own, so that readings of two scales share nothing.
+  const own = accuracy(range, value, constant, `range ${range.id} at ${division} V per division`);
+  if (entry?.kind !== 'scope') return [own, ...sampleResolution(entry)];
   const edges = scopeEdges(entry.scope, alternatePeaks);
   const step = String(range.readingStep);
   return [
-    accuracy,
+    own,
     ...edges.map((weight, index) =>
       rectangular(
         `Edge ${index + 1} of ${edges.length}, read to ${step} division`,
@@ -58,6 +75,9 @@ function graticuleBudget(
  *     a = share of reading · |x| + share of range · full scale + counts · resolution        u = a / √3
  *     resolution δ: u = δ / √12        graticule step r at each edge: u = r · V/div · probe / √12
  *
+ * The accuracy is one component whose origin is the range (for a screen: the range at one scale), so that two readings of it
+ * share one gain error, which follows the value with its sign, and one zero error. Resolutions are each reading's own.
+ *
  * Source: JCGM 100:2008, 4.3.7 and F.2.2.1; EA-4/02 S9. Half a minor division as reading step: common practice, no source.
  *
  * @param value in the SI base unit of the range
@@ -70,5 +90,7 @@ export function readingBudget(
   alternatePeaks: AlternatePeaks = 'worst',
 ): Component[] {
   if (!Number.isFinite(value)) throw new RangeError('value must be a number.');
-  return range.form === 'digital' ? digitalBudget(value, range) : graticuleBudget(value, entry, range, alternatePeaks);
+  return range.form === 'digital'
+    ? digitalBudget(value, entry, range)
+    : graticuleBudget(value, entry, range, alternatePeaks);
 }

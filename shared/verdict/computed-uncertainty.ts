@@ -1,14 +1,14 @@
 import { type Component } from '../uncertainty/component';
-import { propagate, type Propagated, type UncertainInput } from '../uncertainty/propagate';
+import { NoSensitivity, propagate, type Propagated, type UncertainInput } from '../uncertainty/propagate';
 import { boundFormula } from './computed-value';
 import { type JudgedCharacteristic } from './sample-verdict';
 
 /**
  * The uncertainty of a computed characteristic out of the budgets of the readings it is computed from; undefined where one
- * of them is missing or its budget is not known. Values in SI base units.
+ * of them is missing or its budget is not known, and where the formula has no value beside them. Values in SI base units.
  *
  * @param characteristic one of kind "computed", with a value for these readings
- * @throws {RangeError} where the characteristic has no formula, or its formula has no value near these readings
+ * @throws {RangeError} where the characteristic has no formula, or its formula has no value for these readings
  */
 export function computedUncertainty(
   characteristic: JudgedCharacteristic,
@@ -24,5 +24,14 @@ export function computedUncertainty(
     if (typeof value !== 'number' || own === undefined) return undefined;
     uncertain.set(name, { value, components: own });
   }
-  return propagate((given) => compute({ ...constants, ...given }), uncertain);
+  return sensible(() => propagate((given) => compute({ ...constants, ...given }), uncertain));
+}
+
+function sensible(found: () => Propagated): Propagated | undefined {
+  try {
+    return found();
+  } catch (error) {
+    if (error instanceof NoSensitivity) return undefined;
+    throw error;
+  }
 }
