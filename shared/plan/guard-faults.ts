@@ -6,9 +6,9 @@ import { type LimitedCharacteristic } from './plan-content';
 
 type Limits = Pick<LimitedCharacteristic, 'lowerLimit' | 'upperLimit'>;
 
-/** Whether U takes all there is: two guard bands that meet, or an upper limit above 0 that U reaches down to 0 from. */
+/** Whether U takes all there is: two guard bands that meet, or an upper limit above 0 and less than U. */
 function takesAll({ lowerLimit: lower, upperLimit: upper }: Limits, expandedUncertainty: number): boolean {
-  if (lower === null && upper !== null && upper > 0) return expandedUncertainty >= upper;
+  if (lower === null && upper !== null && upper > 0) return expandedUncertainty > upper;
   return leavesNoAcceptance({ lower, upper }, expandedUncertainty);
 }
 

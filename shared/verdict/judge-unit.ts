@@ -16,12 +16,19 @@ interface JudgedRule {
 
 const fails = ({ verdict }: JudgedRule) => verdict.verdict === 'nonconforming';
 const isConditional = ({ verdict }: JudgedRule) => verdict.verdict === 'conditional';
-const isOpen = (judged: JudgedRule) => judged.verdict.verdict === 'not judged' || isConditional(judged);
+const isUnjudged = ({ verdict }: JudgedRule) => verdict.verdict === 'not judged';
+const isRequiredOn =
+  (unit: number) =>
+  ({ rule }: JudgedRule) =>
+    unit <= rule.requiredTo;
 const keyOf = ({ rule }: JudgedRule) => rule.characteristic.key;
 
-/** A conditional reading as quality ruled on it. */
-function settledBy(ruling: UnitReadings['ruling'], verdict: CharacteristicVerdict): CharacteristicVerdict {
-  return ruling && verdict.verdict === 'conditional' ? { ...verdict, verdict: ruling } : verdict;
+/** Conditional readings as quality ruled on them. */
+function settledBy(ruling: UnitReadings['ruling'], judged: readonly JudgedRule[]): readonly JudgedRule[] {
+  if (!ruling) return judged;
+  return judged.map((each) =>
+    isConditional(each) ? { ...each, verdict: { ...each.verdict, verdict: ruling } } : each,
+  );
 }
 
 /** The worst class among failures that count on this unit; where none counts, the worst of all. */
@@ -32,13 +39,17 @@ function worstClassOf(failures: readonly JudgedRule[], unit: number): Nonconform
 }
 
 /**
- * What an undecided unit is taken to fail in when the sample is submitted: its conditional readings and, where it was set
- * aside, every characteristic left open on it. Where none is open, the doubt is about the unit as a whole: it fails in all it
- * was drawn for but the critical ones, since those were measured and conform (in these too where there are no others).
+ * What an undecided unit is taken to fail in when the sample is submitted, or quality rules it nonconforming: its conditional
+ * readings and, where it was set aside, every characteristic it was drawn for and that is left open on it. Where none is open,
+ * the doubt is about the unit as a whole: it fails in all it was drawn for but the critical ones, since those were measured and
+ * conform (in these too where there are no others).
  */
-function takenAsFailed(required: readonly JudgedRule[], setAside: boolean): readonly JudgedRule[] {
-  const open = required.filter(setAside ? isOpen : isConditional);
-  if (open.length > 0 || !setAside) return open;
+function takenAsFailed(judged: readonly JudgedRule[], unit: number, setAside: boolean): readonly JudgedRule[] {
+  const conditional = judged.filter(isConditional);
+  if (!setAside) return conditional;
+  const required = judged.filter(isRequiredOn(unit));
+  const open = [...conditional, ...required.filter(isUnjudged)];
+  if (open.length > 0) return open;
   const lesser = required.filter(({ rule }) => rule.characteristic.class !== 'critical');
   return lesser.length > 0 ? lesser : required;
 }
@@ -59,29 +70,31 @@ function unitVerdict(failures: readonly JudgedRule[], undecided: boolean, missin
  * When the sample is submitted, an undecided unit becomes nonconforming in the characteristics left open on it (where none
  * is, in all it was drawn for but the critical) and counts at the worst class among them and what it failed in anyway.
  *
- * Quality's ruling settles conditional readings, and a unit set aside; where it rules a unit set aside nonconforming, the unit
- * fails as it would on submission.
+ * Quality's ruling settles conditional readings, and a unit set aside: ruled nonconforming, the unit fails as it would on
+ * submission. It makes no failed reading good, and no missing one.
  *
  * @throws {RangeError} for a unit number that is not a whole number of at least 1, or a value that cannot be judged
  */
 export function judgeUnit(rules: JudgingRules, readings: UnitReadings, options: JudgingOptions = {}): UnitVerdict {
   const { unit, ruling = null } = readings;
   if (!Number.isSafeInteger(unit) || unit < 1) throw new RangeError(`unit must be a whole number from 1, not ${unit}.`);
-  const judged = rules.characteristics.map((rule) => ({
+  const found = rules.characteristics.map((rule) => ({
     rule,
-    verdict: settledBy(ruling, judgeCharacteristic(rule.characteristic, readings, rules.decision)),
+    verdict: judgeCharacteristic(rule.characteristic, readings, rules.decision),
   }));
-  const required = judged.filter(({ rule }) => unit <= rule.requiredTo);
-  const setAside = readings.setAside !== null && ruling === null;
-  const undecided = setAside || judged.some(isConditional);
-  const ruledOut = ruling === 'nonconforming' && readings.setAside !== null;
-  const settled =
-    ruledOut || (undecided && options.submitting === true) ? takenAsFailed(required, setAside || ruledOut) : [];
-  const failures = judged.filter((each) => fails(each) || settled.includes(each));
-  const missing = setAside || ruledOut ? [] : required.filter(({ verdict }) => verdict.verdict === 'not judged');
+  const marked = readings.setAside !== null;
+  const setAside = marked && ruling === null;
+  const undecided = setAside || (ruling === null && found.some(isConditional));
+  const ruledOut = ruling === 'nonconforming' || (undecided && options.submitting === true);
+  const taken = ruledOut ? takenAsFailed(found, unit, marked).map(keyOf) : [];
+  const judged = settledBy(ruling, found);
+  const failures = judged.filter((each) => fails(each) || taken.includes(keyOf(each)));
+  const waived = marked && ruling !== 'conforming';
+  const missing = waived ? [] : judged.filter(isRequiredOn(unit)).filter(isUnjudged);
   return {
     unit,
     verdict: unitVerdict(failures, undecided, missing.length),
+    setAside,
     failed: failures.map(keyOf),
     worstClass: worstClassOf(failures, unit),
     missing: missing.map(keyOf),

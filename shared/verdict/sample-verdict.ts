@@ -47,6 +47,8 @@ export interface CharacteristicVerdict {
 export interface UnitVerdict {
   unit: number;
   verdict: 'conforming' | 'nonconforming' | 'undecided' | 'not judged';
+  /** Whether it was set aside and nobody has ruled on it: the doubt is about the unit as a whole. */
+  setAside: boolean;
   /** Keys of the characteristics that fail, in the order of the plan. */
   failed: string[];
   /** The class the unit counts at: the worst it fails in. */

@@ -12,7 +12,7 @@ export interface UnitInGroup {
 
 function stateOf(group: SamplingGroup, unit: UnitVerdict): UnitInGroup['state'] {
   if (unit.unit > group.sampleSize) return 'outside';
-  if (unit.verdict === 'undecided') return 'undecided';
+  if (unit.setAside && unit.verdict === 'undecided') return 'undecided';
   if (unit.worstClass !== null && classRank(unit.worstClass) < classRank(group.class)) return 'judged';
   if (group.characteristicKeys.some((key) => unit.failed.includes(key))) return 'judged';
   let undecided = false;
@@ -30,7 +30,8 @@ function stateOf(group: SamplingGroup, unit: UnitVerdict): UnitInGroup['state'] 
  *
  * A unit counts at its worst class only, once in each group of that class in which it fails, on the units that the group
  * covers; a critical failure counts on every unit. A unit that counts, here or at a worse class, is judged: what is
- * missing on it could not change this group any more.
+ * missing on it could not change this group any more. A unit set aside is undecided in all its groups, one with a conditional
+ * reading in those that judge it.
  * Source: MIL-STD-105E, definitions of the critical, major and minor nonconforming unit.
  */
 export function unitInGroup(group: SamplingGroup, unit: UnitVerdict): UnitInGroup {

@@ -1,5 +1,18 @@
 import { type SamplingGroup } from '../sampling/sampling-group';
 import { formatNumber } from '../quantities/format-number';
+import { type CharacteristicVerdict } from './sample-verdict';
+
+/**
+ * Why a characteristic is not judged: nothing was read (or computed), or its uncertainty is not known under a decision rule that
+ * needs it; null where it is judged.
+ */
+export function unjudgedReason({
+  verdict,
+  value,
+}: Pick<CharacteristicVerdict, 'verdict' | 'value'>): 'no reading' | 'uncertainty unknown' | null {
+  if (verdict !== 'not judged') return null;
+  return value === null ? 'no reading' : 'uncertainty unknown';
+}
 
 const count = (value: number) => formatNumber(value, 0);
 

@@ -1,8 +1,12 @@
 import { describe, expect, it } from 'vitest';
 import { judgeSample, type JudgedCharacteristic } from '#shared/verdict/judge-sample';
+import { judgeGroups } from '#shared/verdict/judge-groups';
+import { judgeLot } from '#shared/verdict/judge-lot';
 import { judgeUnit } from '#shared/verdict/judge-unit';
 import { judgingRules } from '#shared/verdict/judging-rules';
 import { type UnitReadings } from '#shared/verdict/sample-verdict';
+import { unitInGroup } from '#shared/verdict/unit-in-group';
+import { unjudgedReason } from '#shared/verdict/verdict-reason';
 import { rectangular } from '#shared/uncertainty/component';
 import { GOOD, GROUPS, PLAN, foundIn, groupsOf, judge, sample, unit, measured } from './judged-sample';
 
@@ -138,14 +142,20 @@ describe('a computed characteristic', () => {
 describe('a unit under a rule with guard bands', () => {
   const plan = [measured('ripple', 'major'), measured('loaded', 'major')];
   const budget = new Map(['ripple', 'loaded'].map((key) => [key, [rectangular('accuracy', 0.1 * Math.sqrt(3))]]));
-  const judgeBy = (rule: 'guarded' | 'non-binary', readings: Partial<UnitReadings> & { ripple: number }) => {
-    const { ripple, ...more } = readings;
-    const rules = judgingRules(plan, groupsOf(plan, 150), { rule, coverageFactor: 2 });
-    const values = new Map([
+  const rulesOf = (rule: 'guarded' | 'non-binary') =>
+    judgingRules(plan, groupsOf(plan, 150), { rule, coverageFactor: 2 });
+  const readingsOf = (ripple: number): UnitReadings => ({
+    unit: 1,
+    values: new Map([
       ['ripple', ripple],
       ['loaded', 0],
-    ]);
-    return judgeUnit(rules, { unit: 1, values, setAside: null, components: budget, ...more });
+    ]),
+    setAside: null,
+    components: budget,
+  });
+  const judgeBy = (rule: 'guarded' | 'non-binary', readings: Partial<UnitReadings> & { ripple: number }) => {
+    const { ripple, ...more } = readings;
+    return judgeUnit(rulesOf(rule), { ...readingsOf(ripple), ...more });
   };
 
   it('fails inside the guard band of guarded acceptance, and conforms at its edge', () => {
@@ -176,10 +186,94 @@ describe('a unit under a rule with guard bands', () => {
   });
 
   it('is not judged where the uncertainty of a reading is not known', () => {
-    expect(judgeBy('guarded', { ripple: 0, components: new Map() })).toMatchObject({
-      verdict: 'not judged',
-      missing: ['ripple', 'loaded'],
+    const unknown = judgeBy('guarded', { ripple: 0, components: new Map() });
+    expect(unknown).toMatchObject({ verdict: 'not judged', missing: ['ripple', 'loaded'] });
+    const ripple = unknown.characteristics.get('ripple');
+    expect(ripple).toMatchObject({ value: 0, verdict: 'not judged', expandedUncertainty: null });
+    expect(ripple && unjudgedReason(ripple)).toBe('uncertainty unknown');
+  });
+
+  it('that fails beside a conditional reading fails', () => {
+    const values = new Map([
+      ['ripple', 0.95],
+      ['loaded', 5],
+    ]);
+    expect(judgeBy('non-binary', { ripple: 0, values })).toMatchObject({
+      verdict: 'nonconforming',
+      failed: ['loaded'],
     });
+  });
+
+  it('set aside and ruled nonconforming fails in its conditional reading, as it would on submission', () => {
+    const submitted = judgeUnit(rulesOf('non-binary'), { ...readingsOf(0.95), setAside: 'hums' }, { submitting: true });
+    const ruled = judgeBy('non-binary', { ripple: 0.95, setAside: 'hums', ruling: 'nonconforming' });
+    expect(submitted.failed).toEqual(['ripple']);
+    expect(ruled.failed).toEqual(submitted.failed);
+  });
+
+  it('keeps no ruling against readings that conform since', () => {
+    expect(judgeBy('non-binary', { ripple: 0.5, ruling: 'nonconforming' }).verdict).toBe('conforming');
+  });
+
+  it('with a conditional reading still needs its other readings: nothing is complete before', () => {
+    const partial = judgeUnit(rulesOf('non-binary'), { ...readingsOf(0.95), values: new Map([['ripple', 0.95]]) });
+    expect(partial).toMatchObject({ verdict: 'undecided', missing: ['loaded'] });
+    const [group] = rulesOf('non-binary').groups.filter(({ class: own }) => own === 'major');
+    expect(group && unitInGroup(group, partial).state).toBe('open');
+  });
+
+  it('is undecided for the groups that judge its conditional reading, and judged for the others', () => {
+    const twoClasses = [measured('ripple', 'major'), measured('loaded', 'minor')];
+    const rules = judgingRules(twoClasses, groupsOf(twoClasses, 150), { rule: 'non-binary', coverageFactor: 2 });
+    const groups = judgeGroups(rules, [judgeUnit(rules, readingsOf(0.95))]);
+    expect(groups.map(({ group, undecided, judged }) => [group.class, undecided, judged])).toEqual([
+      ['major', 1, 0],
+      ['minor', 0, 1],
+    ]);
+    expect(judgeLot(rules, [], groups).reason).not.toMatch(/Rejected|Accepted/);
+  });
+});
+
+describe('a computed characteristic under a rule with guard bands', () => {
+  const balance: JudgedCharacteristic = {
+    key: 'balance',
+    kind: 'computed',
+    class: 'major',
+    lowerLimit: null,
+    upperLimit: 0.05,
+    formula: { key: 'transformer-balance', inputs: { half1: 'one', half2: 'other' } },
+  };
+  const halves = ['one', 'other'].map((key) => ({ ...measured(key, 'minor'), upperLimit: 100 }));
+  const plan = [...halves, balance];
+  const judgeHalves = (one: number, other: number, origin: string | null, gain = false) => {
+    const values = new Map([
+      ['one', one],
+      ['other', other],
+    ]);
+    const components = new Map(
+      [...values].map(
+        ([key, value]) => [key, [rectangular('accuracy', 0.2, origin, gain ? 0.01 * value : 0)]] as const,
+      ),
+    );
+    const rules = judgingRules(plan, groupsOf(plan, 150), { rule: 'guarded', coverageFactor: 2 });
+    return judgeUnit(rules, { unit: 1, values, setAside: null, components }).characteristics.get('balance');
+  };
+
+  it('has the uncertainty that its readings hand on', () => {
+    // d(V1 - V2) / mean at 20 V: each half enters by 1/20, and 2 · √2 · 0.2 / √3 / 20 = 1.63 %.
+    expect(judgeHalves(20.2, 20, null)?.expandedUncertainty).toBeCloseTo(0.0163, 3);
+    expect(judgeHalves(20.2, 20, null)?.verdict).toBe('conforming');
+    expect(judgeHalves(20.8, 20, null)?.verdict).toBe('nonconforming');
+  });
+
+  it('has less of it where both halves were read on one range, whose error is the same for both', () => {
+    expect(judgeHalves(20.8, 20, 'range 1')?.expandedUncertainty).toBeLessThan(0.001);
+    expect(judgeHalves(20.8, 20, 'range 1')?.verdict).toBe('conforming');
+  });
+
+  it('is judged at the end of its formula too: a half that gives nothing', () => {
+    expect(judgeHalves(20, 0, null)?.verdict).toBe('nonconforming');
+    expect(judgeHalves(0, 0, null)).toMatchObject({ value: null, verdict: 'nonconforming' });
   });
 });
 
