@@ -30,7 +30,7 @@ export function guardFaults(
     if (one.kind === 'attribute' || expandedUncertainty === undefined) return [];
     if (!takesAll(one, expandedUncertainty)) return [];
     const field = one.upperLimit === null ? 'lowerLimit' : 'upperLimit';
-    const message = `Guard bands of ${formatQuantity(expandedUncertainty, one.unit)} leave nothing between the limits to accept. Widen the limits, measure finer, or choose simple acceptance.`;
+    const message = `Guard bands of ${formatQuantity(expandedUncertainty, one.unit)} leave nothing to accept within the limits. Widen the limits, measure finer, or choose simple acceptance.`;
     return [{ path: ['characteristics', index, field], message }];
   });
 }

@@ -11,7 +11,7 @@ interface Limits {
  *
  *     p = Φ((T_U − y) / u) − Φ((T_L − y) / u)
  *
- * Source: JCGM 106:2012, 7.3 and 7.4.
+ * The measured value is taken as normally distributed about the true one. Source: JCGM 106:2012, 7.3 and 7.4.
  *
  * @param value measured value y
  * @param standardUncertainty u; 0 means that the value is known exactly
