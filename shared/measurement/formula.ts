@@ -69,11 +69,12 @@ function ratedFormula<Name extends string, Rating extends string>(
   },
   compute: (given: Record<Name | Rating, number>) => number,
 ): Formula {
-  const pick = (given: Readonly<Record<string, number>>) =>
-    Object.fromEntries([...inputs, ...constants].map(({ name }) => [name, given[name] ?? NaN])) as Record<
-      Name | Rating,
-      number
-    >;
+  const names = [...inputs, ...constants].map(({ name }) => name);
+  const pick = (given: Readonly<Record<string, number>>) => {
+    const picked: Partial<Record<Name | Rating, number>> = {};
+    for (const name of names) picked[name] = given[name] ?? NaN;
+    return picked as Record<Name | Rating, number>;
+  };
   return { title, inputs, constants, unit, compute: (given) => compute(pick(given)) };
 }
 

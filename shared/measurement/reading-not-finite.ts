@@ -17,7 +17,8 @@ export class ReadingNotFinite extends RangeError {
  * @throws {ReadingNotFinite} for NaN or an infinite value
  */
 export function demandFinite(values: Readonly<Record<string, number>>): void {
-  for (const [argument, value] of Object.entries(values)) {
+  for (const argument of Object.keys(values)) {
+    const value = values[argument] ?? NaN;
     if (!Number.isFinite(value)) throw new ReadingNotFinite(argument, value);
   }
 }

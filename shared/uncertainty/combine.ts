@@ -74,3 +74,19 @@ export function combine(components: readonly WeightedComponent[]): Combined {
     contributions,
   };
 }
+
+/**
+ * The combined standard uncertainty alone, as {@link combine} finds it: a verdict needs it for every reading of a sample, and
+ * most readings share nothing.
+ */
+export function combinedStandardUncertainty(components: readonly WeightedComponent[]): number {
+  const origins: string[] = [];
+  let variance = 0;
+  for (const { component, sensitivity } of components) {
+    const { origin, standardUncertainty } = component;
+    if (origin !== null && origins.includes(origin)) return combine(components).standardUncertainty;
+    if (origin !== null) origins.push(origin);
+    variance += (sensitivity * standardUncertainty) ** 2;
+  }
+  return Math.sqrt(variance);
+}

@@ -1,4 +1,4 @@
-import { combine, type Combined } from './combine';
+import { combinedStandardUncertainty, type Combined } from './combine';
 import { unweighted, type Component } from './component';
 
 /** The coverage factor of about 95 % for a normal distribution. */
@@ -9,7 +9,7 @@ export const USUAL_COVERAGE_FACTOR = 2;
  * Source: JCGM 100:2008, 6.2.1.
  */
 export function expandedUncertainty(components: readonly Component[], coverageFactor: number): number {
-  return coverageFactor * combine(unweighted(components)).standardUncertainty;
+  return coverageFactor * combinedStandardUncertainty(unweighted(components));
 }
 
 /**

@@ -1,4 +1,4 @@
-import { combine } from './combine';
+import { combinedStandardUncertainty } from './combine';
 import { unweighted, type Component, type WeightedComponent } from './component';
 
 /** An input of a formula: its value and the components of its uncertainty. */
@@ -25,10 +25,10 @@ const STEP_OF_VALUE = 1e-7;
 /** At a corner, as of |V1 − V2| where both are equal, the slopes of the two sides differ by more than this share. */
 const CORNER = 0.1;
 
-/** The slope towards one side; undefined where the formula's domain ends there. */
-function slope(f: (x: number) => number, value: number, step: number): number | undefined {
+/** The slope from a value of the formula towards one side; undefined where the formula's domain ends there. */
+function slope(f: (x: number) => number, at: number, value: number, step: number): number | undefined {
   try {
-    const found = (f(value + step) - f(value)) / step;
+    const found = (f(value + step) - at) / step;
     return Number.isFinite(found) ? found : undefined;
   } catch (error) {
     if (error instanceof RangeError) return undefined;
@@ -40,9 +40,9 @@ function slope(f: (x: number) => number, value: number, step: number): number | 
  * ∂f/∂x by central differences; at a corner of the formula the steeper side, so that the uncertainty is not underrated, and at
  * the end of its domain (a ripple of 0 V) the side that it has.
  */
-function sensitivity(f: (x: number) => number, value: number, standardUncertainty: number): number {
+function sensitivity(f: (x: number) => number, at: number, value: number, standardUncertainty: number): number {
   const step = Math.max(standardUncertainty * STEP_OF_UNCERTAINTY, Math.abs(value) * STEP_OF_VALUE);
-  const [left, right] = [slope(f, value, -step), slope(f, value, step)];
+  const [left, right] = [slope(f, at, value, -step), slope(f, at, value, step)];
   const either = left ?? right;
   if (either === undefined) throw new NoSensitivity('inputs: the formula has no value beside these readings.');
   if (left === undefined || right === undefined) return either;
@@ -56,21 +56,24 @@ function sensitivity(f: (x: number) => number, value: number, standardUncertaint
  *
  * Source: JCGM 100:2008, 5.1.2 and 5.1.4 (numerical sensitivities).
  *
- * @param compute takes the inputs by name, in SI base units
+ * @param compute takes inputs and constants by name, in SI base units
+ * @param constants ratings that the formula takes beside readings; they are exact
  * @throws {NoSensitivity} where the formula has no value beside the readings
  * @throws {RangeError} what the formula throws at the readings
  */
 export function propagate(
   compute: (inputs: Readonly<Record<string, number>>) => number,
   inputs: ReadonlyMap<string, UncertainInput>,
+  constants: Readonly<Record<string, number>> = {},
 ): Propagated {
-  const values = Object.fromEntries([...inputs].map(([name, { value }]) => [name, value]));
+  const values: Record<string, number> = { ...constants };
+  for (const [name, { value }] of inputs) values[name] = value;
   const value = compute(values);
   const sensitivities = new Map<string, number>();
   const components: WeightedComponent[] = [];
   for (const [name, { value: x, components: own }] of inputs) {
-    const u = combine(unweighted(own)).standardUncertainty;
-    const weight = u === 0 ? 0 : sensitivity((given) => compute({ ...values, [name]: given }), x, u);
+    const u = combinedStandardUncertainty(unweighted(own));
+    const weight = u === 0 ? 0 : sensitivity((given) => compute({ ...values, [name]: given }), value, x, u);
     sensitivities.set(name, weight);
     components.push(...own.map((component) => ({ component, sensitivity: weight, input: name })));
   }

@@ -24,7 +24,7 @@ export function computedUncertainty(
     if (typeof value !== 'number' || own === undefined) return undefined;
     uncertain.set(name, { value, components: own });
   }
-  return sensible(() => propagate((given) => compute({ ...constants, ...given }), uncertain));
+  return sensible(() => propagate(compute, uncertain, constants));
 }
 
 function sensible(found: () => Propagated): Propagated | undefined {

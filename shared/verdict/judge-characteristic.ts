@@ -1,4 +1,4 @@
-import { combine } from '../uncertainty/combine';
+import { combinedStandardUncertainty } from '../uncertainty/combine';
 import { expandedUncertainty } from '../uncertainty/expanded-uncertainty';
 import { computedUncertainty } from './computed-uncertainty';
 import { computedValue } from './computed-value';
@@ -36,7 +36,7 @@ function uncertaintyOfComputed(
 ): number | null {
   if (decision.rule === 'simple' || components === undefined) return null;
   const propagated = computedUncertainty(characteristic, values, components);
-  return propagated === undefined ? null : decision.coverageFactor * combine(propagated.components).standardUncertainty;
+  return propagated === undefined ? null : decision.coverageFactor * combinedStandardUncertainty(propagated.components);
 }
 
 function judgeComputed(

@@ -120,6 +120,7 @@ describe('decisions by uncertainty', () => {
           halfWidths.map((one, index) => rectangular(`line ${index}`, one * by, shared ? 'range 1' : null));
         const U = expandedUncertainty(budget(1), 2);
         expect(expandedUncertainty(budget(factor), 2)).toBeCloseTo(factor * U, 6);
+        expect(U).toBeCloseTo(2 * combine(unweighted(budget(1))).standardUncertainty, 9);
         expect(expandedUncertainty(budget(1), 2 * factor)).toBeCloseTo(factor * U, 6);
         expect(U).toBeGreaterThanOrEqual(expandedUncertainty(budget(1).slice(1), 2) - 1e-9);
       }),

@@ -200,6 +200,19 @@ describe('the uncertainty of a computed characteristic', () => {
   });
 });
 
+describe('the rated voltage a formula takes', () => {
+  it('is exact: the uncertainty is that of the readings against it', () => {
+    const inputs = new Map([
+      ['no_load', { value: 16, components: [rectangular('no load', 0.3)] }],
+      ['loaded', { value: 12, components: [rectangular('loaded', 0.4)] }],
+    ]);
+    const { value, components } = propagate(FORMULAS['load-regulation-rated'].compute, inputs, { rated: 10 });
+    expect(value).toBeCloseTo(0.4, 12);
+    expect(components).toHaveLength(2);
+    expect(combine(components).standardUncertainty).toBeCloseTo(0.05 / Math.sqrt(3), 9);
+  });
+});
+
 describe('a formula at the end of its domain', () => {
   const rippleRatio = (given: Readonly<Record<string, number>>) => FORMULAS['ripple-ratio'].compute(given);
   const inputs = (ripple: number, loaded: number) =>
