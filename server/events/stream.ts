@@ -1,5 +1,5 @@
 import { type Database } from '#db/open-database';
-import { type Counts } from '#shared/contract/counts';
+import { type Counts, type LotChange } from '#shared/contract/counts';
 import { type Response } from 'express';
 import { type Clock } from '#server/clock';
 import { countStations } from '#server/counts/count-queries';
@@ -16,10 +16,14 @@ interface Listener {
   told: string;
 }
 
-/** Sends the line's counts to everybody who looks at it, whenever they change and as a heartbeat. */
+/**
+ * Sends the line's counts to everybody who looks at it, whenever they change and as a heartbeat, and says which lots
+ * changed.
+ */
 export class Stream {
   private readonly listeners = new Set<Listener>();
   private readonly heartbeat: NodeJS.Timeout;
+  private readonly changedLots = new Set<number>();
   private pending: NodeJS.Timeout | undefined;
 
   constructor(private readonly source: { db: Database; clock: Clock; heartbeat?: number }) {
@@ -42,13 +46,20 @@ export class Stream {
     this.pending.unref();
   }
 
+  /** Says that something of a lot was changed; listeners hear its id and ask for what they may read of it. */
+  announceLot(lotId: number): void {
+    if (this.listeners.size === 0) return;
+    this.changedLots.add(lotId);
+    this.announce();
+  }
+
   /** Adds a listener, who gets the counts at once; it leaves when its response closes. */
   listen(response: Response, mayListen: () => boolean): void {
     const listener = { response, mayListen, told: '' };
     response.once('close', () => this.listeners.delete(listener));
     response.writeHead(200, { 'content-type': 'text/event-stream', 'x-accel-buffering': 'no' });
     this.listeners.add(listener);
-    tell(listener, this.count());
+    response.write(countsMessage(listener, this.count()));
   }
 
   /** Ends every listener's response. */
@@ -65,24 +76,34 @@ export class Stream {
 
   private tellChanges(): void {
     const counts = this.count();
-    for (const listener of this.listeners) if (listener.told !== figures(counts)) tellOrEnd(listener, counts);
+    const lots = [...this.changedLots].map((lotId) => message('lot', { lotId } satisfies LotChange)).join('');
+    this.changedLots.clear();
+    for (const listener of this.listeners) {
+      const news = listener.told === figures(counts) ? '' : countsMessage(listener, counts);
+      sendOrEnd(listener, news + lots);
+    }
   }
 
   private beat(): void {
     if (this.listeners.size === 0) return;
     const counts = this.count();
-    for (const listener of this.listeners) tellOrEnd(listener, counts);
+    for (const listener of this.listeners) sendOrEnd(listener, countsMessage(listener, counts));
   }
 }
 
-function tellOrEnd(listener: Listener, counts: Counts): void {
-  if (listener.mayListen()) tell(listener, counts);
-  else listener.response.end();
+function sendOrEnd({ response, mayListen }: Listener, text: string): void {
+  if (text === '') return;
+  if (mayListen()) response.write(text);
+  else response.end();
 }
 
-function tell(listener: Listener, counts: Counts): void {
+function countsMessage(listener: Listener, counts: Counts): string {
   listener.told = figures(counts);
-  listener.response.write(`event: counts\ndata: ${JSON.stringify(counts)}\n\n`);
+  return message('counts', counts);
+}
+
+function message(event: string, data: unknown): string {
+  return `event: ${event}\ndata: ${JSON.stringify(data)}\n\n`;
 }
 
 /** The counts without their time, to be compared. */

@@ -13,6 +13,10 @@ export const counts = z.object({
 });
 export type Counts = z.infer<typeof counts>;
 
+/** What /api/events sends (event "lot") when something of a lot was changed; what it is, the lot's own endpoints tell. */
+export const lotChange = z.object({ lotId: z.int() });
+export type LotChange = z.infer<typeof lotChange>;
+
 export const readCounts = endpoint({
   method: 'GET',
   path: '/api/counts',

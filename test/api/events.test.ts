@@ -41,25 +41,26 @@ async function cookieOf(role: 'receiving' | 'quality' | 'admin'): Promise<string
   return sentBack(answer, 'qr_access');
 }
 
-/** Listens as a browser does; each call of `next` gives the next counts, undefined at the end. */
+/** Listens as a browser does; `nextOf` gives the next event of a kind, `next` the next counts, undefined at the end. */
 async function listen(cookie: string) {
   const controller = new AbortController();
   leaving.push(controller);
   const response = await fetch(`${address}/api/events`, { headers: { cookie }, signal: controller.signal });
   const reader = response.body?.pipeThrough(new TextDecoderStream()).getReader();
   let text = '';
-  const next = async (): Promise<Counts | undefined> => {
+  const nextOf = async (kind: string): Promise<unknown> => {
     while (!text.includes('\n\n')) {
       const piece = await reader?.read();
       if (!piece || piece.done) return undefined;
       text += piece.value;
     }
-    const [event = '', ...rest] = text.split('\n\n');
+    const [message = '', ...rest] = text.split('\n\n');
     text = rest.join('\n\n');
-    expect(event).toMatch(/^event: counts\ndata: \{.*\}$/);
-    return JSON.parse(event.replace(/^event: counts\ndata: /, '')) as Counts;
+    const [, event, data = ''] = /^event: (\w+)\ndata: (\{.*\})$/.exec(message) ?? [];
+    return event === kind ? JSON.parse(data) : nextOf(kind);
   };
-  return { response, next };
+  const next = async () => (await nextOf('counts')) as Counts | undefined;
+  return { response, next, nextOf };
 }
 
 function addLot(number: string) {
@@ -89,6 +90,31 @@ describe('the stream of counts', () => {
     const cookie = await cookieOf('receiving');
     await fetch(`${address}/api/session`, { method: 'DELETE', headers: { cookie } });
     expect(await next()).toMatchObject({ arrivals: 1 });
+  });
+
+  it('names each lot that somebody changed, once however often within a moment', async () => {
+    const { nextOf } = await listen(await cookieOf('receiving'));
+    const [first, second] = [addLot('1'), addLot('2')];
+    stream.announceLot(first.id);
+    stream.announceLot(first.id);
+    stream.announceLot(second.id);
+    expect(await nextOf('lot')).toEqual({ lotId: first.id });
+    expect(await nextOf('lot')).toEqual({ lotId: second.id });
+  });
+
+  it('names a lot after a change by a request, and not after one that was refused', async () => {
+    const cookie = await cookieOf('receiving');
+    const { nextOf } = await listen(cookie);
+    const [refused, cancelled] = [addLot('1'), addLot('2')];
+    const cancel = (id: number, reason: string) =>
+      fetch(`${address}/api/lots/${id}/cancellation`, {
+        method: 'POST',
+        headers: { cookie, 'content-type': 'application/json', 'if-match': '"1"' },
+        body: JSON.stringify({ reason }),
+      });
+    expect((await cancel(refused.id, '')).status).toBe(400);
+    expect((await cancel(cancelled.id, 'Booked in twice')).status).toBe(200);
+    expect(await nextOf('lot')).toEqual({ lotId: cancelled.id });
   });
 
   it('beats with the time even when nothing changes', async () => {

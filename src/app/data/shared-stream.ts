@@ -1,14 +1,16 @@
 /** What the owner of a shared stream is told. */
 export interface StreamListener {
-  message(data: string): void;
+  message(event: string, data: string): void;
   /** The connection is gone; the stream goes on trying. */
   lost(): void;
   /** Runs before each connection is opened, in the tab that opens it. */
   before(): Promise<void>;
 }
 
-type Relayed = { kind: 'message'; data: string } | { kind: 'lost' };
+type Relayed = { kind: 'message'; event: string; data: string } | { kind: 'lost' };
 
+/** Names the lock of the tab that holds the connection, and the channel by which it passes on what comes. */
+const SHARED_NAME = 'quietrail.events';
 const RETRY = 3_000;
 const LONGEST_RETRY = 60_000;
 
@@ -24,12 +26,12 @@ export class SharedStream {
 
   constructor(
     private readonly address: string,
-    private readonly event: string,
+    private readonly events: readonly string[],
     private readonly listener: StreamListener,
   ) {
     if (typeof EventSource === 'undefined') return;
     if ('locks' in navigator && typeof BroadcastChannel !== 'undefined') {
-      this.channel = new BroadcastChannel(`quietrail.${event}`);
+      this.channel = new BroadcastChannel(SHARED_NAME);
       this.channel.onmessage = ({ data }: MessageEvent<Relayed>) => this.hear(data);
       this.standForElection();
     }
@@ -43,13 +45,15 @@ export class SharedStream {
   }
 
   private standForElection(): void {
-    const held = navigator.locks.request(`quietrail.${this.event}`, { signal: this.closing.signal }, () => this.lead());
+    const held = navigator.locks.request(SHARED_NAME, { signal: this.closing.signal }, () => this.lead());
     // A request that is withdrawn because the tab closes is no fault.
     held.catch(() => undefined);
   }
 
   /** Holds the connection, and with it the lock, until the stream is closed. */
   private async lead(): Promise<void> {
+    // What came between the last tab's end and this one's beginning nobody heard.
+    this.pass({ kind: 'lost' });
     this.connect();
     await new Promise<void>((resolve) => this.closing.signal.addEventListener('abort', () => resolve()));
   }
@@ -65,7 +69,8 @@ export class SharedStream {
     const source = new EventSource(this.address);
     this.source = source;
     source.onopen = () => (this.wait = RETRY);
-    source.addEventListener(this.event, ({ data }: MessageEvent<string>) => this.pass({ kind: 'message', data }));
+    for (const event of this.events)
+      source.addEventListener(event, ({ data }: MessageEvent<string>) => this.pass({ kind: 'message', event, data }));
     source.onerror = () => {
       source.close();
       this.pass({ kind: 'lost' });
@@ -87,7 +92,7 @@ export class SharedStream {
 
   private hear(relayed: Relayed): void {
     if (this.closing.signal.aborted) return;
-    if (relayed.kind === 'message') this.listener.message(relayed.data);
+    if (relayed.kind === 'message') this.listener.message(relayed.event, relayed.data);
     else this.listener.lost();
   }
 }

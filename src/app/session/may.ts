@@ -5,9 +5,5 @@ import { Session } from './session';
 /** Whether the person may call an endpoint, as the contract says. Call it where injection is possible. */
 export function may(endpoint: Pick<Endpoint, 'who'>): Signal<boolean> {
   const session = inject(Session);
-  return computed(() => {
-    const { who } = endpoint;
-    if (who === 'anyone') return true;
-    return who === 'signed-in' ? session.me() !== null : session.holds(...who);
-  });
+  return computed(() => session.mayCall(endpoint));
 }

@@ -35,7 +35,9 @@ export class Session {
 
   /** Whether the person is among those whom the contract lets call an endpoint. */
   mayCall({ who }: { readonly who: Who }): boolean {
-    return typeof who === 'string' ? who === 'anyone' || this.person() !== null : this.holds(...who);
+    if (who === 'anyone') return true;
+    if (who === 'rack') return false;
+    return who === 'signed-in' ? this.person() !== null : this.holds(...who);
   }
 
   signIn(body: CallInput<typeof signIn>['body']): Observable<Me> {
