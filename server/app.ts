@@ -17,6 +17,9 @@ import { partRoutes } from './parts/part-routes';
 import { peopleRoutes } from './people/people-routes';
 import { planRoutes } from './plans/plan-routes';
 import { yieldRoutes } from './yields/yield-routes';
+import { rackRoutes } from './racks/rack-routes';
+import { attachRack } from './racks/attach-rack';
+import { RunningVerdicts } from './judging/running-verdicts';
 import { problemHandler } from './problem-handler';
 import { NotFound, Problem } from './problems';
 import { searchRoutes } from './search/search-routes';
@@ -32,7 +35,7 @@ import { requestLog } from './web/request-log';
 import { securityHeaders } from './web/security-headers';
 import { staticApp } from './web/static-app';
 
-const AREAS: readonly ((router: Router, context: Context) => void)[] = [
+const AREAS: readonly ((router: Router, context: Context, verdicts: RunningVerdicts) => void)[] = [
   sessionRoutes,
   siteRoutes,
   peopleRoutes,
@@ -45,6 +48,7 @@ const AREAS: readonly ((router: Router, context: Context) => void)[] = [
   instrumentRoutes,
   lotRoutes,
   benchRoutes,
+  rackRoutes,
   decisionRoutes,
   certificateRoutes,
   nonconformanceRoutes,
@@ -83,10 +87,12 @@ export function createApp(context: Context): Express {
   app.set('trust proxy', environment.trustProxy);
   app.use(requestLog(log), securityHeaders(environment), compressed);
 
-  app.use('/api', neverCached, originCheck(environment), cookieParser(), attachCaller(context), jsonBody());
+  app.use('/api', neverCached, originCheck(environment), cookieParser());
+  app.use('/api', attachCaller(context), attachRack(context), jsonBody());
   app.use('/api', announceChanges(stream));
   const router = Router();
-  for (const area of AREAS) area(router, context);
+  const verdicts = new RunningVerdicts();
+  for (const area of AREAS) area(router, context, verdicts);
   app.use(router);
   app.use('/api', noSuchEndpoint);
 

@@ -41,6 +41,7 @@ function authorise(endpoint: Endpoint, request: Request): Caller | undefined {
     authoriseRack(request);
     return caller;
   }
+  if (request.rack) throw new Forbidden('A test rack may not do this; its token works under /api/rack.');
   if (!caller) throw new Unauthenticated();
   if (endpoint.who !== 'signed-in' && !hasRole(caller, ...endpoint.who))
     throw new Forbidden('Your roles do not allow this.');

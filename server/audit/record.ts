@@ -8,8 +8,10 @@ import { canonicalJson } from './canonical-json';
 /** What is written down of one change. */
 export interface Change {
   at: Date;
-  /** Null when the program itself acted. */
+  /** Null when no person acted. */
   person: { id: number; name: string } | null;
+  /** Who acted when it was no person, as "Rack 2"; the program itself unless given. */
+  actor?: string;
   action: string;
   subject: string;
   subjectId: string | number;
@@ -50,7 +52,7 @@ export function chainEntry(change: Change, previousHash: string) {
   const entry = {
     at: change.at.toISOString(),
     personId: change.person?.id ?? null,
-    actor: change.person?.name ?? 'Quietrail',
+    actor: change.person?.name ?? change.actor ?? 'Quietrail',
     action: change.action,
     subject: change.subject,
     subjectId: String(change.subjectId),

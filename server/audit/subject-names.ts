@@ -5,6 +5,7 @@ import { lots } from '#db/schema/lots';
 import { nonconformances } from '#db/schema/nonconformances';
 import { parts } from '#db/schema/parts';
 import { people } from '#db/schema/people';
+import { racks } from '#db/schema/racks';
 import { suppliers } from '#db/schema/suppliers';
 import { eq } from 'drizzle-orm';
 
@@ -17,6 +18,8 @@ const NAMES = {
   supplier: { table: suppliers, name: suppliers.code },
   instrument: { table: instruments, name: instruments.assetNumber },
   person: { table: people, name: people.email },
+  rack: { table: racks, name: racks.name },
+  'reading-batch': { table: lots, name: lots.number },
 } as const;
 
 function isNamed(subject: string): subject is keyof typeof NAMES {

@@ -7,33 +7,36 @@ import { dayOf } from '#server/instruments/instrument-queries';
 import { type LotRow } from '#server/lots/lot-rows';
 import { recordLot } from '#server/lots/record-lot';
 import { Refused } from '#server/problems';
-import { type RackPreview } from '#shared/contract/bench';
-import { INSTRUMENT_KIND_TITLES, type InstrumentKind } from '#shared/contract/instruments';
+import { type importRackFile as contract, type RackPreview } from '#shared/contract/bench';
+import { type InstrumentKind } from '#shared/contract/instruments';
 import { mayRepeat } from '#shared/verdict/counting-reading';
-import { judgeSample } from '#shared/verdict/judge-sample';
+import { judgeGroups } from '#shared/verdict/judge-groups';
+import { judgeLot } from '#shared/verdict/judge-lot';
+import { judgeUnit } from '#shared/verdict/judge-unit';
 import { type SampleVerdict } from '#shared/verdict/sample-verdict';
 import { eq } from 'drizzle-orm';
 import { createHash, randomUUID } from 'node:crypto';
+import type * as z from 'zod';
+import { racksOf, rememberMapping } from '#server/racks/rack-mapping';
 import { lotAtBench } from './bench-lot';
-import { insertReading } from './insert-reading';
+import { expectedOf } from './expected-of';
+import { insertReading, type FreshReading } from './insert-reading';
 import {
   countingReadings,
   judgedReadings,
   rulesOf,
   unitsOf,
   type LotRules,
+  type ReadingRow,
   type UnitRows,
 } from '#server/judging/lot-judging';
-import { rackReadings, type RackContent, type RackReading } from './rack-readings';
+import { rackReadings, type RackContent } from './rack-readings';
 import { rackTable } from './rack-table';
-import { usableInstrument } from './reading-instrument';
+import { questionOf, readingFacts } from './reading-facts';
+import { instrumentFaults, instrumentIdFor, instrumentsByKind } from './rack-instruments';
 import { keepProgress, type RunningVerdicts } from '#server/judging/running-verdicts';
 
-interface RackBody {
-  fileName: string;
-  text: string;
-  instrumentIds: number[];
-}
+type RackBody = z.output<(typeof contract)['body']>;
 
 interface ReadFile {
   rules: LotRules;
@@ -42,33 +45,15 @@ interface ReadFile {
   instruments: ReadonlyMap<InstrumentKind, number>;
 }
 
-function instrumentsByKind(db: Db, ids: readonly number[], today: string): Map<InstrumentKind, number> {
-  return new Map(ids.map((id) => [usableInstrument(db, id, today).kind, id]));
-}
-
-/** Each measured column needs the instrument that its characteristic asks for. */
-function instrumentFaults(
-  { characteristics }: LotRules,
-  content: RackContent,
-  given: ReadonlyMap<InstrumentKind, number>,
-) {
-  const wanted = characteristics.flatMap(({ content: one }) =>
-    one.kind !== 'computed' &&
-    one.instrumentKind !== null &&
-    content.columns.some((c) => c.characteristicKey === one.key)
-      ? [one.instrumentKind]
-      : [],
-  );
-  return [...new Set(wanted)]
-    .filter((kind) => !given.has(kind))
-    .map((kind) => ({
-      line: 1,
-      column: null,
-      message: `Name the ${INSTRUMENT_KIND_TITLES[kind].toLowerCase()} the rack used.`,
-    }));
+/** A file is named after a rack only where that rack may measure this part. */
+function holdRack(db: Db, lot: LotRow, rackId: number | null): void {
+  if (rackId === null || racksOf(db, lot.partId).some(({ id }) => id === rackId)) return;
+  const message = 'This rack is not set up for this part.';
+  throw new Refused('rack-refused', message, [{ path: ['rackId'], message }]);
 }
 
 function readFile(db: Db, lot: LotRow, body: RackBody, today: string): ReadFile {
+  holdRack(db, lot, body.rackId);
   const rules = rulesOf(db, lot);
   const units = unitsOf(db, lot.id);
   const instruments = instrumentsByKind(db, body.instrumentIds, today);
@@ -80,7 +65,14 @@ function readFile(db: Db, lot: LotRow, body: RackBody, today: string): ReadFile 
   const taken = new Map(units.map((rows) => [rows.unit.unit, countingReadings(rows.readings)]));
   const everTaken = new Map(units.map((rows) => [rows.unit.unit, rows.readings]));
   const ofCell = (unit: number, id: number) => (everTaken.get(unit) ?? []).filter((row) => row.characteristicId === id);
+  const expected = expectedOf(db, lot.partId);
   const content = rackReadings(table, {
+    mapping: body.mapping,
+    factsOf: (characteristic, value) => {
+      const given = { value, entry: null, instrumentId: instrumentIdFor(characteristic, instruments), rangeId: null };
+      const question = questionOf(characteristic, expected, given) ?? null;
+      return { ...readingFacts(db, rules.revision, characteristic, given), question };
+    },
     characteristics: rules.characteristics,
     sampleSize: units.length,
     hasReading: (unit, id) => taken.get(unit)?.has(id) ?? false,
@@ -91,22 +83,15 @@ function readFile(db: Db, lot: LotRow, body: RackBody, today: string): ReadFile 
 }
 
 /** The verdicts as they would be with the file's readings. */
-function verdictWith({ rules, units, content }: ReadFile): SampleVerdict {
-  const added = new Map<number, RackReading[]>();
-  for (const reading of content.readings) {
-    const ofUnit = added.get(reading.unit);
-    if (ofUnit) ofUnit.push(reading);
-    else added.set(reading.unit, [reading]);
-  }
-  return judgeSample({
-    characteristics: rules.rules.characteristics.map(({ characteristic }) => characteristic),
-    groups: rules.rules.groups,
-    units: units.map((rows) => {
-      const judged = judgedReadings(rows, rules.keyOf);
-      const more = (added.get(judged.unit) ?? []).map(({ key, value, pass }) => [key, value ?? pass ?? false] as const);
-      return { ...judged, values: new Map([...judged.values, ...more]) };
-    }),
+function verdictWith(db: Db, { rules, units }: ReadFile, fresh: readonly FreshReading[]): SampleVerdict {
+  const added = new Map(units.map(({ unit }) => [unit.id, [] as ReadingRow[]]));
+  for (const reading of fresh) added.get(reading.unitId)?.push({ ...reading, withdrawnAt: null, withdrawnById: null });
+  const judged = units.map(({ unit, readings }) => {
+    const rows = { unit, readings: [...readings, ...(added.get(unit.id) ?? [])] };
+    return judgeUnit(rules.rules, judgedReadings(db, rows, rules));
   });
+  const groups = judgeGroups(rules.rules, judged);
+  return { units: judged, groups, lot: judgeLot(rules.rules, judged, groups) };
 }
 
 function previewOf(fileName: string, file: ReadFile, verdict: SampleVerdict): RackPreview {
@@ -117,6 +102,9 @@ function previewOf(fileName: string, file: ReadFile, verdict: SampleVerdict): Ra
     columns,
     readings: file.content.readings.length,
     faults,
+    questions: file.content.readings.flatMap(({ unit, key, value, question }) =>
+      question === null || value === null ? [] : [{ unit, characteristicKey: key, value, sentence: question.sentence }],
+    ),
     nonconformingUnits: verdict.units
       .filter((unit) => unit.verdict === 'nonconforming')
       .map(({ unit, failed }) => ({ unit, failed })),
@@ -134,8 +122,10 @@ function previewOf(fileName: string, file: ReadFile, verdict: SampleVerdict): Ra
 /** What a rack file would bring; nothing is kept. */
 export function previewRackFile(context: Context, lotId: number, body: RackBody): RackPreview {
   const lot = lotAtBench(context.db, lotId);
-  const file = readFile(context.db, lot, body, dayOf(context.clock.now()));
-  return previewOf(body.fileName, file, verdictWith(file));
+  const at = context.clock.now();
+  const file = readFile(context.db, lot, body, dayOf(at));
+  const origin = { rackImportId: null, rackId: body.rackId, at: at.toISOString() };
+  return previewOf(body.fileName, file, verdictWith(context.db, file, freshReadings(lot, file, origin)));
 }
 
 function holdFaultless({ content }: ReadFile): void {
@@ -149,37 +139,48 @@ function holdFaultless({ content }: ReadFile): void {
   throw new Refused('rack-file-refused', title, errors);
 }
 
-function insertReadings(db: Db, lot: LotRow, file: ReadFile, rackImportId: number, at: string): void {
-  const unitIds = new Map(file.units.map(({ unit, readings: rows }) => [unit.unit, { id: unit.id, rows }]));
-  const kinds = new Map(
-    file.rules.characteristics.map(({ id, content }) => [
-      id,
-      content.kind === 'computed' ? null : content.instrumentKind,
-    ]),
+/** The readings of a file as they are to be kept; they count as taken by nobody. */
+function freshReadings(
+  lot: LotRow,
+  file: ReadFile,
+  origin: { rackImportId: number | null; rackId: number | null; at: string },
+): FreshReading[] {
+  const { rackImportId, rackId, at } = origin;
+  const unitRows = new Map(file.units.map((rows) => [rows.unit.unit, rows]));
+  const instrumentOf = new Map(
+    file.rules.characteristics.map(({ id, content }) => [id, instrumentIdFor(content, file.instruments)]),
   );
-  for (const { unit, characteristicId, value, pass } of file.content.readings) {
-    const known = unitIds.get(unit);
-    if (!known) throw new Error(`Unit ${unit} is not in the sample.`);
-    const kind = kinds.get(characteristicId) ?? null;
-    insertReading(db, {
-      id: randomUUID(),
-      lotId: lot.id,
-      unitId: known.id,
-      characteristicId,
-      attempt: known.rows.filter((row) => row.characteristicId === characteristicId).length + 1,
-      value,
-      pass,
-      entry: null,
-      instrumentId: kind === null ? null : (file.instruments.get(kind) ?? null),
-      note: '',
-      repeatReason: null,
-      repeatNote: null,
-      takenById: null,
-      rackImportId,
-      takenAt: at,
-      receivedAt: at,
-    });
-  }
+  return file.content.readings.map(
+    ({ unit, characteristicId, value, pass, rangeId, expandedUncertainty, question }) => {
+      const known = unitRows.get(unit);
+      if (!known) throw new Error(`Unit ${unit} is not in the sample.`);
+      return {
+        id: randomUUID(),
+        lotId: lot.id,
+        unitId: known.unit.id,
+        characteristicId,
+        attempt: known.readings.filter((row) => row.characteristicId === characteristicId).length + 1,
+        ...{ value, pass, rangeId, expandedUncertainty, question },
+        entry: null,
+        instrumentId: instrumentOf.get(characteristicId) ?? null,
+        note: '',
+        repeatReason: null,
+        repeatNote: null,
+        takenById: null,
+        rackImportId,
+        rackId,
+        waveformId: null,
+        takenAt: at,
+        receivedAt: at,
+      };
+    },
+  );
+}
+
+/** What was said of the columns that the file has; of others nothing was shown to be so. */
+function ofFile({ content }: ReadFile, { mapping }: RackBody): RackBody['mapping'] {
+  const headers = new Set(content.columns.map(({ header }) => header));
+  return Object.fromEntries(Object.entries(mapping).filter(([header]) => headers.has(header)));
 }
 
 /** Imports a rack file: all rows or none. Its readings count as taken by nobody. */
@@ -210,11 +211,13 @@ export function importRackFile(
       })
       .returning({ id: rackImports.id })
       .get();
-    insertReadings(tx, lot, file, id, at.toISOString());
+    const fresh = freshReadings(lot, file, { rackImportId: id, rackId: body.rackId, at: at.toISOString() });
+    for (const reading of fresh) insertReading(tx, reading);
+    if (body.rackId !== null) rememberMapping(tx, caller, { rackId: body.rackId, mapping: ofFile(file, body), at });
     if (lot.status === 'drawn') tx.update(lots).set({ status: 'measuring' }).where(eq(lots.id, lotId)).run();
     const note = `${fileName}, ${file.content.readings.length} readings of ${file.content.rows} units`;
     recordLot(tx, { at, person: caller, action: 'imported', lotId, note, after: { sha256, rackImport: id } });
-    const verdict = verdictWith(file);
+    const verdict = verdictWith(tx, file, fresh);
     keepProgress(tx, lot, file.rules, verdict.units, at);
     return previewOf(fileName, file, verdict);
   });

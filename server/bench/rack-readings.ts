@@ -1,12 +1,19 @@
-import { type RackPreview } from '#shared/contract/bench';
+import { Refused } from '#server/problems';
+import { type PlausibilityQuestion, type RackPreview } from '#shared/contract/bench';
 import { type Characteristic } from '#shared/contract/plans';
 import { parseReading } from '#shared/quantities/parse-reading';
+import { type ReadingFacts } from './reading-facts';
+import { columnsOf, type RackColumn } from './rack-columns';
 import { type RackTable } from './rack-table';
 
 type Fault = RackPreview['faults'][number];
+type Measured = Extract<Characteristic, { kind: 'measured' }>;
+
+/** What goes with a reading beside its value. */
+export type RackFacts = ReadingFacts & { question: PlausibilityQuestion | null };
 
 /** One reading of a rack file. Value in SI base units, or pass or fail. */
-export interface RackReading {
+export interface RackReading extends RackFacts {
   unit: number;
   characteristicId: number;
   key: string;
@@ -25,49 +32,17 @@ export interface RackContent {
 export interface RackTarget {
   characteristics: readonly { id: number; content: Characteristic }[];
   sampleSize: number;
+  /** What the file's headings mean; a heading not named is a key itself. */
+  mapping: Readonly<Record<string, string | null>>;
   /** Whether a unit has a counting reading of a characteristic already. */
   hasReading(unit: number, characteristicId: number): boolean;
   /** Whether the reading was taken, and taken back, as often as it may be. */
   isUsedUp(unit: number, characteristicId: number): boolean;
+  /** Range, uncertainty and plausibility of a value. @throws {Refused} for one that its instrument cannot have shown */
+  factsOf(characteristic: Measured, value: number): RackFacts;
 }
 
-interface Column {
-  header: string;
-  index: number;
-  characteristic: { id: number; content: Characteristic };
-}
-
-const UNIT = 'unit';
-
-function columnFault(header: string, target: RackTarget, seen: ReadonlySet<string>): string | undefined {
-  if (header === '') return 'A column has no name.';
-  if (seen.has(header)) return `Two columns are named ${header}.`;
-  if (header === UNIT) return undefined;
-  const found = target.characteristics.find(({ content }) => content.key === header);
-  if (!found) return `The plan has no characteristic ${header}.`;
-  if (found.content.kind === 'computed') return `${found.content.name} is computed from other readings; leave it out.`;
-  return undefined;
-}
-
-function columnsOf(table: Extract<RackTable, { state: 'table' }>, target: RackTarget) {
-  const faults: Fault[] = [];
-  const columns: Column[] = [];
-  const seen = new Set<string>();
-  table.headers.forEach((header, index) => {
-    const message = columnFault(header, target, seen);
-    seen.add(header);
-    const characteristic = target.characteristics.find(({ content }) => content.key === header);
-    if (message !== undefined) faults.push({ line: table.headerLine, column: header || null, message });
-    else if (characteristic) columns.push({ header, index, characteristic });
-  });
-  if (!seen.has(UNIT))
-    faults.push({
-      line: table.headerLine,
-      column: UNIT,
-      message: 'The column unit is missing: the number of the unit in draw order.',
-    });
-  return { columns, faults };
-}
+const NO_FACTS: RackFacts = { rangeId: null, expandedUncertainty: null, question: null };
 
 function unitOf(text: string, sampleSize: number, seen: ReadonlyMap<number, number>): number | string {
   if (!/^\d{1,7}$/.test(text)) return `"${text}" is not a unit number.`;
@@ -84,66 +59,72 @@ const PASS = new Map([
   ['f', false],
 ]);
 
-function cellValue(
-  text: string,
-  content: Characteristic,
-  decimalComma: boolean,
-): { value: number | null; pass: boolean | null } {
+type CellValue = { value: number | null; pass: boolean | null } & RackFacts;
+
+function cellValue(text: string, content: Characteristic, decimalComma: boolean, target: RackTarget): CellValue {
   if (content.kind === 'attribute') {
     const pass = PASS.get(text.toLowerCase());
     if (pass === undefined) throw new RangeError(`"${text}" is neither pass nor fail.`);
-    return { value: null, pass };
+    return { value: null, pass, ...NO_FACTS };
   }
   if (content.kind === 'computed') throw new RangeError(`${content.name} is computed.`);
-  return { value: parseReading(text, content.unit, { decimalComma }), pass: null };
+  const value = parseReading(text, content.unit, { decimalComma });
+  return { value, pass: null, ...target.factsOf(content, value) };
+}
+
+/** Why the cell of a unit takes no reading now; undefined where it does. */
+function cellFault(unit: number, id: number, target: RackTarget): string | undefined {
+  if (target.hasReading(unit, id)) return `Unit ${unit} has this reading already.`;
+  if (target.isUsedUp(unit, id)) return `Unit ${unit} has had this reading three times; set the unit aside.`;
+  return undefined;
+}
+
+function readingOf(
+  cell: { unit: number; text: string; column: RackColumn; decimalComma: boolean },
+  target: RackTarget,
+): RackReading | string {
+  const { unit, text, column, decimalComma } = cell;
+  const { id, content } = column.characteristic;
+  const fault = cellFault(unit, id, target);
+  if (fault !== undefined) return fault;
+  try {
+    return { unit, characteristicId: id, key: content.key, ...cellValue(text, content, decimalComma, target) };
+  } catch (error) {
+    if (error instanceof RangeError) return error.message;
+    if (error instanceof Refused) return error.title;
+    throw error;
+  }
 }
 
 /** Reads the cells of a rack file against the plan. An empty cell is a reading not taken; every other fault is named. */
 export function rackReadings(table: Extract<RackTable, { state: 'table' }>, target: RackTarget): RackContent {
-  const { columns, faults } = columnsOf(table, target);
-  const unitIndex = table.headers.indexOf(UNIT);
+  const { columns, faults, unitIndex, unitHeader } = columnsOf(table, target);
   const seen = new Map<number, number>();
   const readings: RackReading[] = [];
   for (const { line, cells } of table.rows) {
     if (cells.length !== table.headers.length) {
-      faults.push({
-        line,
-        column: null,
-        message: `${cells.length} columns, where the head has ${table.headers.length}.`,
-      });
+      const message = `${cells.length} columns, where the head has ${table.headers.length}.`;
+      faults.push({ line, column: null, message });
       continue;
     }
     const unit = unitIndex < 0 ? '' : unitOf(cells[unitIndex] ?? '', target.sampleSize, seen);
     if (typeof unit === 'string') {
-      if (unitIndex >= 0) faults.push({ line, column: UNIT, message: unit });
+      if (unitIndex >= 0) faults.push({ line, column: unitHeader, message: unit });
       continue;
     }
     seen.set(unit, line);
-    for (const { header, index, characteristic } of columns) {
-      const text = cells[index] ?? '';
+    for (const column of columns) {
+      const text = cells[column.index] ?? '';
       if (text === '') continue;
-      const { id, content } = characteristic;
-      if (target.hasReading(unit, id)) {
-        faults.push({ line, column: header, message: `Unit ${unit} has this reading already.` });
-        continue;
-      }
-      if (target.isUsedUp(unit, id)) {
-        const message = `Unit ${unit} has had this reading three times; set the unit aside.`;
-        faults.push({ line, column: header, message });
-        continue;
-      }
-      try {
-        readings.push({ unit, characteristicId: id, key: header, ...cellValue(text, content, table.decimalComma) });
-      } catch (error) {
-        if (!(error instanceof RangeError)) throw error;
-        faults.push({ line, column: header, message: error.message });
-      }
+      const read = readingOf({ unit, text, column, decimalComma: table.decimalComma }, target);
+      if (typeof read === 'string') faults.push({ line, column: column.header, message: read });
+      else readings.push(read);
     }
   }
   return {
-    columns: table.headers.map((header) => ({
+    columns: table.headers.map((header, index) => ({
       header,
-      characteristicKey: columns.find((column) => column.header === header)?.header ?? null,
+      characteristicKey: columns.find((column) => column.index === index)?.characteristic.content.key ?? null,
     })),
     rows: table.rows.length,
     readings,

@@ -107,6 +107,8 @@ export class LotPlay {
       fileName: `rack2-${number}.csv`,
       text,
       instrumentIds,
+      rackId: null,
+      mapping: {},
     });
     this.measure(truths, later(at, 3));
   }

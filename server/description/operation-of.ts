@@ -6,6 +6,7 @@ import * as z from 'zod';
 type Described = Endpoint & { readonly area: string };
 
 export const COOKIE_SCHEME = 'session';
+export const TOKEN_SCHEME = 'rackToken';
 const PROBLEM = { $ref: '#/components/responses/Problem' };
 
 /** Who may call, in words. */
@@ -38,6 +39,11 @@ function requestOf(endpoint: Described): RouteConfig['request'] {
   };
 }
 
+function securityOf({ who }: Endpoint): Record<string, string[]>[] {
+  if (who === 'anyone') return [];
+  return [{ [who === 'rack' ? TOKEN_SCHEME : COOKIE_SCHEME]: [] }];
+}
+
 /** The refusals an endpoint can answer with, as far as its entry in the contract tells. */
 function problemStatuses({ who, path, versioned, method }: Endpoint): number[] {
   return [
@@ -46,6 +52,7 @@ function problemStatuses({ who, path, versioned, method }: Endpoint): number[] {
     ...(path.includes(':') ? [404] : []),
     ...(method === 'GET' ? [] : [409, 422]),
     ...(versioned ? [412, 428] : []),
+    ...(who === 'rack' ? [429] : []),
   ];
 }
 
@@ -70,7 +77,7 @@ export function operationOf(name: string, endpoint: Described): RouteConfig {
     tags: [endpoint.area],
     summary: endpoint.summary,
     description: `May be called by: ${whoMay(endpoint)}.`,
-    security: endpoint.who === 'anyone' ? [] : [{ [COOKIE_SCHEME]: [] }],
+    security: securityOf(endpoint),
     request: requestOf(endpoint),
     responses: responsesOf(endpoint),
   };

@@ -8,6 +8,8 @@ export function recordLot(
   change: {
     at: Date;
     person: { id: number; name: string } | null;
+    /** Who acted when it was no person. */
+    actor?: string;
     action: LotAction;
     lotId: number;
     note: string;
@@ -15,6 +17,6 @@ export function recordLot(
     after?: Record<string, unknown>;
   },
 ): void {
-  const { at, person, action, lotId, note, before, after } = change;
-  record(db, { at, person, action, subject: 'lot', subjectId: lotId, before, after: { ...after, note } });
+  const { lotId, note, after, ...rest } = change;
+  record(db, { ...rest, subject: 'lot', subjectId: lotId, after: { ...after, note } });
 }

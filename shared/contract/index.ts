@@ -14,6 +14,7 @@ import * as nonconformances from './nonconformances';
 import * as parts from './parts';
 import * as people from './people';
 import * as plans from './plans';
+import * as racks from './racks';
 import * as session from './session';
 import * as site from './site';
 import * as suppliers from './suppliers';
@@ -32,6 +33,7 @@ const areas = {
   calibrations,
   lots,
   bench,
+  racks,
   decision,
   certificates,
   nonconformances,

@@ -1,3 +1,4 @@
+import { type Endpoint } from '#shared/contract/endpoint';
 import { ENDPOINTS } from '#shared/contract/index';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { testSite, type TestSite } from '../support/test-site';
@@ -9,6 +10,11 @@ interface Document {
     Record<string, { operationId: string; security: unknown[]; responses: Record<string, unknown> }>
   >;
   components: { responses: object; securitySchemes: object };
+}
+
+function securityOf({ who }: Endpoint): object[] {
+  if (who === 'anyone') return [];
+  return who === 'rack' ? [{ rackToken: [] }] : [{ session: [] }];
 }
 
 let site: TestSite;
@@ -27,7 +33,7 @@ describe('the description of the interface', () => {
       const path = endpoint.path.replaceAll(/:(\w+)/g, '{$1}');
       const operation = document.paths[path]?.[endpoint.method.toLowerCase()];
       expect(operation?.operationId).toBe(name);
-      expect(operation?.security).toEqual(endpoint.who === 'anyone' ? [] : [{ session: [] }]);
+      expect(operation?.security).toEqual(securityOf(endpoint));
       expect(operation?.responses).toHaveProperty(String(endpoint.status));
       if (endpoint.versioned) expect(operation?.responses).toHaveProperty('412');
     }

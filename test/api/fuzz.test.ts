@@ -1,5 +1,6 @@
 import { lots } from '#db/schema/lots';
 import { people, personRoles } from '#db/schema/people';
+import { rackParts, racks } from '#db/schema/racks';
 import { verifyChain } from '#server/audit/verify-chain';
 import { type Endpoint } from '#shared/contract/endpoint';
 import { ENDPOINTS } from '#shared/contract/index';
@@ -15,7 +16,8 @@ import { addInstrument, addPlannedPart, attribute, booking, drawnLot, measured }
 import { typedReading } from '../support/bench-acts';
 import { inputFor } from '../support/odd-input';
 import { PASSWORD } from '../support/test-people';
-import { testSite, type TestSite } from '../support/test-site';
+import { addTestRack, addTestToken } from '../support/test-rack';
+import { type Agent, testSite, type TestSite } from '../support/test-site';
 
 /** Enough for a short run; QUIETRAIL_FUZZ asks for more. */
 const RUNS = Number(process.env['QUIETRAIL_FUZZ'] ?? 1500);
@@ -56,12 +58,20 @@ const RACK = fc.oneof(
   fc.string({ unit: 'binary', minLength: 1, maxLength: 300 }),
 );
 
+/** The only rack there is. */
+const RACK_ID = 1;
+
 const HINTS = {
   characteristicKey: fc.constantFrom('v_loaded', 'v_no_load', 'label', 'insulation', '__proto__'),
   unit: fc.integer({ min: 1, max: 4 }),
   instrumentId: fc.constantFrom(null, 1, 2),
   partId: fc.integer({ min: 1, max: 2 }),
   supplierId: fc.constant(1),
+  partIds: fc.constantFrom([1], [1], [], [999]),
+  rackId: fc.constantFrom(null, RACK_ID, 999),
+  instrument: fc.constantFrom(null, 'MM-01', 'OS-01', 'MM-99'),
+  // A rack's own id of a reading.
+  id: fc.constantFrom('r-1', 'r-2', 'r-3', '\u0000', '__proto__'),
   instrumentIds: fc.constantFrom([], [1], [1], [2], [1, 1, 999]),
   // Of a rack file, of a typed reading and of a search alike.
   text: fc.oneof(RACK, fc.constantFrom('12.1', '1e300', '5e-324', '-12', '4k7', '12,1', '0')),
@@ -81,11 +91,20 @@ const step = fc.oneof(
   { weight: 9, arbitrary: fc.constantFrom('1', '1', '2', '3', '3', '4', '5', '6', '7', '8', '9') },
   { weight: 1, arbitrary: fc.constantFrom(...ODD_STEPS) },
 );
+const lotNumber = fc.oneof(
+  { weight: 9, arbitrary: fc.constantFrom('L-26-0003', 'L-26-0003', 'L-26-0001', 'L-26-0004', 'L-26-0006') },
+  { weight: 1, arbitrary: step },
+);
 const readingStep = fc.oneof(
   { weight: 6, arbitrary: fc.uuid() },
   { weight: 2, arbitrary: fc.constantFrom(KNOWN_READING) },
   { weight: 1, arbitrary: step },
 );
+
+function stepFor(name: string): fc.Arbitrary<string> {
+  if (name === 'number') return lotNumber;
+  return name === 'reading' ? readingStep : step;
+}
 
 /** Mostly the version that is current when the request is sent. */
 const version = fc.oneof(
@@ -94,11 +113,13 @@ const version = fc.oneof(
 );
 
 /** Where the work of the line is done; asked more often than the rest. */
-const OFTEN = /^\/api\/lots\/:id\/|^\/api\/plans\/:id\/revisions/;
+const OFTEN = /^\/api\/lots\/:id\/|^\/api\/rack\/|^\/api\/plans\/:id\/revisions/;
+
+type Caller = Role | 'nobody' | 'rack';
 
 interface Attempt {
   endpoint: Endpoint;
-  who: Role | 'nobody';
+  who: Caller;
   path: string;
   query: unknown;
   body: unknown;
@@ -107,13 +128,14 @@ interface Attempt {
 
 function attemptAt(endpoint: Endpoint): fc.Arbitrary<Attempt> {
   const names = [...endpoint.path.matchAll(/:(\w+)/g)].map(([, name]) => name ?? '');
-  const steps = fc.tuple(...names.map((name) => (name === 'reading' ? readingStep : step)));
-  const allowed = typeof endpoint.who === 'string' ? ROLES : endpoint.who;
+  const steps = fc.tuple(...names.map(stepFor));
+  const allowed: readonly Caller[] =
+    endpoint.who === 'rack' ? ['rack'] : typeof endpoint.who === 'string' ? ROLES : endpoint.who;
   return fc.record({
     endpoint: fc.constant(endpoint),
     who: fc.oneof(
       { weight: 8, arbitrary: fc.constantFrom(...allowed) },
-      { weight: 1, arbitrary: fc.constantFrom(...ROLES, 'nobody' as const) },
+      { weight: 1, arbitrary: fc.constantFrom<Caller[]>(...ROLES, 'nobody', 'rack') },
     ),
     path: steps.map((given) =>
       names.reduce((path, name, at) => path.replace(`:${name}`, given[at] ?? ''), endpoint.path as string),
@@ -134,8 +156,14 @@ function queryText(query: unknown): string {
   ).toString();
 }
 
+function agentOf(site: TestSite, who: Caller): Agent {
+  if (who === 'nobody') return site.nobody();
+  // A token of its own for each request: none is revoked, and none is used too often.
+  return who === 'rack' ? addTestToken(site, RACK_ID).agent : site.as(who);
+}
+
 function send(site: TestSite, { endpoint, who, path, query, body, version: named }: Attempt): Promise<Response> {
-  const agent = who === 'nobody' ? site.nobody() : site.as(who);
+  const agent = agentOf(site, who);
   const method = endpoint.method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete';
   const request = agent[method](`${path}?${queryText(query)}`);
   if (endpoint.versioned) void request.set('if-match', named === 'current' ? currentVersion(site, path) : named);
@@ -143,12 +171,16 @@ function send(site: TestSite, { endpoint, who, path, query, body, version: named
   return Promise.resolve(request.set('content-type', 'application/json').send(JSON.stringify(body)));
 }
 
+/** Where the table has another name than the path. */
+const TABLES: Readonly<Record<string, string>> = { reviews: 'instrument_reviews' };
+
 /** The version of what a path names; 1 where there is no such thing. */
 function currentVersion({ db }: TestSite, path: string): string {
-  const [, , table = '', id = '', , revision = ''] = path.split('/');
-  const named = table === 'plans' ? 'plan_revisions where plan_id = ? and revision = ?' : `${table} where id = ?`;
+  const [, , named = '', id = '', , revision = ''] = path.split('/');
+  const table = TABLES[named] ?? named;
+  const place = table === 'plans' ? 'plan_revisions where plan_id = ? and revision = ?' : `${table} where id = ?`;
   const values = table === 'plans' ? [id, revision] : [table === 'site' ? '1' : id];
-  const found = db.$client.prepare(`select version from ${named}`).get(values) as { version: number } | undefined;
+  const found = db.$client.prepare(`select version from ${place}`).get(values) as { version: number } | undefined;
   return `"${found?.version ?? 1}"`;
 }
 
@@ -158,6 +190,8 @@ function letEverybodyIn({ db, people: persons }: TestSite, passwordHash: string)
     db.update(people).set({ active: true, passwordHash }).where(eq(people.id, persons[role].id)).run();
     db.insert(personRoles).values({ personId: persons[role].id, role }).onConflictDoNothing().run();
   }
+  db.update(racks).set({ active: true }).where(eq(racks.id, RACK_ID)).run();
+  db.insert(rackParts).values({ rackId: RACK_ID, partId: 1 }).onConflictDoNothing().run();
 }
 
 async function lotsAlongTheLine(site: TestSite): Promise<void> {
@@ -170,6 +204,7 @@ async function lotsAlongTheLine(site: TestSite): Promise<void> {
     .post('/api/lots')
     .send(booking(references, 1, { cartons: 1 }))
     .expect(201);
+  addTestRack(site, { partIds: [references.partId] });
   for (let lot = 0; lot < 7; lot += 1) await drawnLot(site, references, 3);
   await site
     .as('inspector')

@@ -3,6 +3,7 @@ import { ENDPOINTS } from '#shared/contract/index';
 import { ROLES, type Role } from '#shared/contract/roles';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import * as z from 'zod';
+import { addTestRack } from '../support/test-rack';
 import { type Agent, testSite, type TestSite } from '../support/test-site';
 
 /** Calls an endpoint with nothing that it could do: ids that do not exist, and no body unless one is given. */
@@ -24,8 +25,10 @@ const endpoints = [...ENDPOINTS.entries()];
 
 describe('who may call what', () => {
   let site: TestSite;
+  let rackAgent: Agent;
   beforeAll(async () => {
     site = await testSite();
+    rackAgent = addTestRack(site).agent;
   });
   afterAll(() => site.close());
 
@@ -56,6 +59,14 @@ describe('who may call what', () => {
     });
   }
 
+  it.each(endpoints)('%s, asked by a test rack', async (_name, endpoint) => {
+    const answer = await call(rackAgent, endpoint);
+    const isAsked = endpoint.who === 'rack' || endpoint.who === 'anyone';
+    if (!isAsked) expect(answer.status).toBe(403);
+    else if (endpoint.who === 'rack') expect([400, 404]).toContain(answer.status);
+    expect(answer.status).toBeLessThan(500);
+  });
+
   it('answers what is not in the contract as unknown', async () => {
     const answer = await site.as('quality').get('/api/nothing').expect(404);
     expect(answer.body).toMatchObject({ code: 'no-such-endpoint' });
@@ -64,13 +75,16 @@ describe('who may call what', () => {
 
 describe('a body that has not the shape', () => {
   let site: TestSite;
+  let rackAgent: Agent;
   beforeAll(async () => {
     site = await testSite({ signInAttempts: 100 });
+    rackAgent = addTestRack(site).agent;
   });
   afterAll(() => site.close());
 
   const withBody = endpoints.filter(([, { body }]) => !(body instanceof z.ZodUndefined));
   const agentFor = ({ who }: Endpoint): Agent => {
+    if (who === 'rack') return rackAgent;
     const [role] = typeof who === 'string' ? ROLES : who;
     return site.as(role ?? 'quality');
   };
@@ -103,9 +117,10 @@ describe('a body that has not the shape', () => {
     expect(answer.body).toMatchObject({ code: 'not-understood' });
   });
 
-  it('a file may be large where the contract expects one, from whoever is signed in', async () => {
+  it('a file may be large where the contract expects one, from whoever is signed in and from racks', async () => {
     const body = { fileName: 'rack.csv', text: 'unit\n'.repeat(60_000), instrumentIds: [] };
     await site.as('inspector').post('/api/lots/999999/rack-file/preview').send(body).expect(404);
+    await rackAgent.post('/api/rack/lots/L-26-0001/readings').send(body).expect(400);
     await site.nobody().post('/api/lots/999999/rack-file/preview').send(body).expect(413);
   });
 

@@ -13,6 +13,7 @@ interface JsonSchema {
   maximum?: number;
   exclusiveMinimum?: number;
   properties?: Record<string, JsonSchema>;
+  required?: string[];
   propertyNames?: JsonSchema;
   additionalProperties?: JsonSchema | boolean;
   items?: JsonSchema;
@@ -96,7 +97,8 @@ function fittingNumber(schema: JsonSchema): fc.Arbitrary<number> {
     return fc.oneof({ weight: 6, arbitrary: small }, { weight: 2, arbitrary: fc.integer({ min, max }) });
   }
   const { min, max } = bounds(schema, 1e300);
-  const usual = fc.double({ min: Math.max(min, 0.001), max: Math.min(max, 0.9), noNaN: true });
+  const least = Math.max(min, 0.001);
+  const usual = fc.double({ min: least, max: Math.max(least, Math.min(max, 0.9)), noNaN: true });
   return fc.oneof(
     { weight: 6, arbitrary: usual },
     { weight: 2, arbitrary: fc.double({ min, max, noNaN: true }) },
@@ -112,7 +114,7 @@ function fittingObject(schema: JsonSchema, hints: Hints): fc.Arbitrary<unknown> 
   const known = Object.fromEntries(entries.map(([name, inner]) => [name, hints[name] ?? valueFor(inner, hints)]));
   if (entries.length === 0 && typeof schema.additionalProperties === 'object')
     return fc.dictionary(oddText, valueFor(schema.additionalProperties, hints), { maxKeys: 3 });
-  return fc.record(known);
+  return fc.record(known, { requiredKeys: schema.required ?? [] });
 }
 
 function fitting(schema: JsonSchema, hints: Hints): fc.Arbitrary<unknown> {

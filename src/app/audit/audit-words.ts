@@ -12,6 +12,8 @@ export const SUBJECT_TITLES: Readonly<Record<string, string>> = {
   supplier: 'Supplier',
   instrument: 'Instrument',
   person: 'Person',
+  rack: 'Rack',
+  'reading-batch': 'Reading batch',
   site: 'Site',
 };
 
