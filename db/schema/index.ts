@@ -1,6 +1,7 @@
 export * from './audit';
 export * from './calibrations';
 export * from './certificates';
+export * from './gauge-studies';
 export * from './instruments';
 export * from './lot-conditions';
 export * from './lots';
