@@ -30,7 +30,7 @@ import {
   type ReadingRow,
   type UnitRows,
 } from '#server/judging/lot-judging';
-import { rackReadings, type RackContent } from './rack-readings';
+import { rackReadings, type RackContent, type RackReading } from './rack-readings';
 import { rackTable } from './rack-table';
 import { questionOf, readingFacts } from './reading-facts';
 import { instrumentFaults, instrumentIdFor, instrumentsByKind } from './rack-instruments';
@@ -82,13 +82,65 @@ function readFile(db: Db, lot: LotRow, body: RackBody, today: string): ReadFile 
   return { rules, units, instruments, content: { ...content, faults } };
 }
 
-/** The verdicts as they would be with the file's readings. */
-function verdictWith(db: Db, { rules, units }: ReadFile, fresh: readonly FreshReading[]): SampleVerdict {
-  const added = new Map(units.map(({ unit }) => [unit.id, [] as ReadingRow[]]));
-  for (const reading of fresh) added.get(reading.unitId)?.push({ ...reading, withdrawnAt: null, withdrawnById: null });
-  const judged = units.map(({ unit, readings }) => {
-    const rows = { unit, readings: [...readings, ...(added.get(unit.id) ?? [])] };
-    return judgeUnit(rules.rules, judgedReadings(db, rows, rules));
+/** Where readings of a file come from, beside the file itself. */
+interface Origin {
+  rackImportId: number | null;
+  rackId: number | null;
+  at: string;
+}
+
+/** A reading of the file as it is to be kept; it counts as taken by nobody. */
+function freshReading({ instruments }: ReadFile, { unit, readings }: UnitRows, read: RackReading, origin: Origin) {
+  const { id: characteristicId, content } = read.characteristic;
+  const { value, pass, rangeId, expandedUncertainty, question } = read;
+  const { rackImportId, rackId, at } = origin;
+  return {
+    id: randomUUID(),
+    lotId: unit.lotId,
+    unitId: unit.id,
+    characteristicId,
+    attempt: readings.filter((row) => row.characteristicId === characteristicId).length + 1,
+    value,
+    pass,
+    entry: null,
+    instrumentId: instrumentIdFor(content, instruments),
+    note: '',
+    repeatReason: null,
+    repeatNote: null,
+    takenById: null,
+    rackImportId,
+    rackId,
+    rangeId,
+    expandedUncertainty,
+    waveformId: null,
+    question,
+    takenAt: at,
+    receivedAt: at,
+  };
+}
+
+function byUnit(readings: readonly RackReading[]): Map<number, RackReading[]> {
+  const units = new Map<number, RackReading[]>();
+  for (const reading of readings) {
+    const ofUnit = units.get(reading.unit);
+    if (ofUnit) ofUnit.push(reading);
+    else units.set(reading.unit, [reading]);
+  }
+  return units;
+}
+
+/**
+ * The verdicts with the file's readings, which are taken in unit by unit: a large file's rows are never all in memory.
+ *
+ * @param take keeps a reading, or only makes its row
+ */
+function verdictWith(db: Db, file: ReadFile, origin: Origin, take: (fresh: FreshReading) => ReadingRow): SampleVerdict {
+  const { rules, units, content } = file;
+  const added = byUnit(content.readings);
+  const judged = units.map((rows) => {
+    const taken = (added.get(rows.unit.unit) ?? []).map((read) => take(freshReading(file, rows, read, origin)));
+    const all = { unit: rows.unit, readings: [...rows.readings, ...taken] };
+    return judgeUnit(rules.rules, judgedReadings(db, all, rules));
   });
   const groups = judgeGroups(rules.rules, judged);
   return { units: judged, groups, lot: judgeLot(rules.rules, judged, groups) };
@@ -102,8 +154,10 @@ function previewOf(fileName: string, file: ReadFile, verdict: SampleVerdict): Ra
     columns,
     readings: file.content.readings.length,
     faults,
-    questions: file.content.readings.flatMap(({ unit, key, value, question }) =>
-      question === null || value === null ? [] : [{ unit, characteristicKey: key, value, sentence: question.sentence }],
+    questions: file.content.readings.flatMap(({ unit, characteristic, value, question }) =>
+      question === null || value === null
+        ? []
+        : [{ unit, characteristicKey: characteristic.content.key, value, sentence: question.sentence }],
     ),
     nonconformingUnits: verdict.units
       .filter((unit) => unit.verdict === 'nonconforming')
@@ -125,7 +179,12 @@ export function previewRackFile(context: Context, lotId: number, body: RackBody)
   const at = context.clock.now();
   const file = readFile(context.db, lot, body, dayOf(at));
   const origin = { rackImportId: null, rackId: body.rackId, at: at.toISOString() };
-  return previewOf(body.fileName, file, verdictWith(context.db, file, freshReadings(lot, file, origin)));
+  const verdict = verdictWith(context.db, file, origin, (fresh) => ({
+    ...fresh,
+    withdrawnAt: null,
+    withdrawnById: null,
+  }));
+  return previewOf(body.fileName, file, verdict);
 }
 
 function holdFaultless({ content }: ReadFile): void {
@@ -137,44 +196,6 @@ function holdFaultless({ content }: ReadFile): void {
   }));
   const title = `The file has ${faults.length} ${faults.length === 1 ? 'fault' : 'faults'}; nothing was imported.`;
   throw new Refused('rack-file-refused', title, errors);
-}
-
-/** The readings of a file as they are to be kept; they count as taken by nobody. */
-function freshReadings(
-  lot: LotRow,
-  file: ReadFile,
-  origin: { rackImportId: number | null; rackId: number | null; at: string },
-): FreshReading[] {
-  const { rackImportId, rackId, at } = origin;
-  const unitRows = new Map(file.units.map((rows) => [rows.unit.unit, rows]));
-  const instrumentOf = new Map(
-    file.rules.characteristics.map(({ id, content }) => [id, instrumentIdFor(content, file.instruments)]),
-  );
-  return file.content.readings.map(
-    ({ unit, characteristicId, value, pass, rangeId, expandedUncertainty, question }) => {
-      const known = unitRows.get(unit);
-      if (!known) throw new Error(`Unit ${unit} is not in the sample.`);
-      return {
-        id: randomUUID(),
-        lotId: lot.id,
-        unitId: known.unit.id,
-        characteristicId,
-        attempt: known.readings.filter((row) => row.characteristicId === characteristicId).length + 1,
-        ...{ value, pass, rangeId, expandedUncertainty, question },
-        entry: null,
-        instrumentId: instrumentOf.get(characteristicId) ?? null,
-        note: '',
-        repeatReason: null,
-        repeatNote: null,
-        takenById: null,
-        rackImportId,
-        rackId,
-        waveformId: null,
-        takenAt: at,
-        receivedAt: at,
-      };
-    },
-  );
 }
 
 /** What was said of the columns that the file has; of others nothing was shown to be so. */
@@ -211,13 +232,12 @@ export function importRackFile(
       })
       .returning({ id: rackImports.id })
       .get();
-    const fresh = freshReadings(lot, file, { rackImportId: id, rackId: body.rackId, at: at.toISOString() });
-    for (const reading of fresh) insertReading(tx, reading);
+    const origin = { rackImportId: id, rackId: body.rackId, at: at.toISOString() };
+    const verdict = verdictWith(tx, file, origin, (fresh) => insertReading(tx, fresh));
     if (body.rackId !== null) rememberMapping(tx, caller, { rackId: body.rackId, mapping: ofFile(file, body), at });
     if (lot.status === 'drawn') tx.update(lots).set({ status: 'measuring' }).where(eq(lots.id, lotId)).run();
     const note = `${fileName}, ${file.content.readings.length} readings of ${file.content.rows} units`;
     recordLot(tx, { at, person: caller, action: 'imported', lotId, note, after: { sha256, rackImport: id } });
-    const verdict = verdictWith(tx, file, fresh);
     keepProgress(tx, lot, file.rules, verdict.units, at);
     return previewOf(fileName, file, verdict);
   });

@@ -1,7 +1,7 @@
 import { Refused } from '#server/problems';
 import { type PlausibilityQuestion, type RackPreview } from '#shared/contract/bench';
 import { type Characteristic } from '#shared/contract/plans';
-import { parseReading } from '#shared/quantities/parse-reading';
+import { readingReader } from '#shared/quantities/parse-reading';
 import { type ReadingFacts } from './reading-facts';
 import { columnsOf, type RackColumn } from './rack-columns';
 import { type RackTable } from './rack-table';
@@ -15,8 +15,7 @@ export type RackFacts = ReadingFacts & { question: PlausibilityQuestion | null }
 /** One reading of a rack file. Value in SI base units, or pass or fail. */
 export interface RackReading extends RackFacts {
   unit: number;
-  characteristicId: number;
-  key: string;
+  characteristic: RackColumn['characteristic'];
   value: number | null;
   pass: boolean | null;
 }
@@ -61,15 +60,23 @@ const PASS = new Map([
 
 type CellValue = { value: number | null; pass: boolean | null } & RackFacts;
 
-function cellValue(text: string, content: Characteristic, decimalComma: boolean, target: RackTarget): CellValue {
-  if (content.kind === 'attribute') {
-    const pass = PASS.get(text.toLowerCase());
-    if (pass === undefined) throw new RangeError(`"${text}" is neither pass nor fail.`);
-    return { value: null, pass, ...NO_FACTS };
-  }
-  if (content.kind === 'computed') throw new RangeError(`${content.name} is computed.`);
-  const value = parseReading(text, content.unit, { decimalComma });
-  return { value, pass: null, ...target.factsOf(content, value) };
+/** Reads a cell of one column. @throws {RangeError | Refused} saying what is wrong with it */
+type CellReader = (text: string) => CellValue;
+
+function passOrFail(text: string): CellValue {
+  const pass = PASS.get(text.toLowerCase());
+  if (pass === undefined) throw new RangeError(`"${text}" is neither pass nor fail.`);
+  return { value: null, pass, ...NO_FACTS };
+}
+
+/** A column is looked at once; its cells are many. */
+function cellReader({ content }: RackColumn['characteristic'], decimalComma: boolean, target: RackTarget): CellReader {
+  if (content.kind !== 'measured') return passOrFail;
+  const read = readingReader(content.unit);
+  return (text) => {
+    const value = read(text, { decimalComma });
+    return { value, pass: null, ...target.factsOf(content, value) };
+  };
 }
 
 /** Why the cell of a unit takes no reading now; undefined where it does. */
@@ -80,15 +87,15 @@ function cellFault(unit: number, id: number, target: RackTarget): string | undef
 }
 
 function readingOf(
-  cell: { unit: number; text: string; column: RackColumn; decimalComma: boolean },
+  cell: { unit: number; text: string; column: RackColumn; read: CellReader },
   target: RackTarget,
 ): RackReading | string {
-  const { unit, text, column, decimalComma } = cell;
-  const { id, content } = column.characteristic;
-  const fault = cellFault(unit, id, target);
+  const { unit, text, column, read } = cell;
+  const { characteristic } = column;
+  const fault = cellFault(unit, characteristic.id, target);
   if (fault !== undefined) return fault;
   try {
-    return { unit, characteristicId: id, key: content.key, ...cellValue(text, content, decimalComma, target) };
+    return { unit, characteristic, ...read(text) };
   } catch (error) {
     if (error instanceof RangeError) return error.message;
     if (error instanceof Refused) return error.title;
@@ -99,6 +106,10 @@ function readingOf(
 /** Reads the cells of a rack file against the plan. An empty cell is a reading not taken; every other fault is named. */
 export function rackReadings(table: Extract<RackTable, { state: 'table' }>, target: RackTarget): RackContent {
   const { columns, faults, unitIndex, unitHeader } = columnsOf(table, target);
+  const readers = columns.map((column) => ({
+    column,
+    read: cellReader(column.characteristic, table.decimalComma, target),
+  }));
   const seen = new Map<number, number>();
   const readings: RackReading[] = [];
   for (const { line, cells } of table.rows) {
@@ -113,12 +124,12 @@ export function rackReadings(table: Extract<RackTable, { state: 'table' }>, targ
       continue;
     }
     seen.set(unit, line);
-    for (const column of columns) {
+    for (const { column, read } of readers) {
       const text = cells[column.index] ?? '';
       if (text === '') continue;
-      const read = readingOf({ unit, text, column, decimalComma: table.decimalComma }, target);
-      if (typeof read === 'string') faults.push({ line, column: column.header, message: read });
-      else readings.push(read);
+      const found = readingOf({ unit, text, column, read }, target);
+      if (typeof found === 'string') faults.push({ line, column: column.header, message: found });
+      else readings.push(found);
     }
   }
   return {

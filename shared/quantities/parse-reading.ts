@@ -2,6 +2,23 @@ import { unitParts } from './display-unit';
 import { type NumeralOptions } from './numeral';
 import { readQuantity, toNumber } from './read-quantity';
 
+/** Reads texts as readings of one characteristic, in SI base units. */
+export type ReadingReader = (text: string, options?: NumeralOptions) => number;
+
+/**
+ * What parseReading does, for many readings of one characteristic: its unit is looked at once.
+ *
+ * @param unit display unit of the characteristic, "" for a plain number
+ * @throws {UnitNotKnown} for an unknown unit
+ */
+export function readingReader(unit: string): ReadingReader {
+  const wanted = unitParts(unit);
+  return (text, options = {}) => {
+    const written = readQuantity(text, wanted, options);
+    return toNumber(written, text, written.bare ? wanted.places : 0);
+  };
+}
+
 /**
  * Reads a reading typed for a characteristic and gives it in SI base units.
  *
@@ -14,7 +31,5 @@ import { readQuantity, toNumber } from './read-quantity';
  * @throws {UnitNotKnown} for an unknown unit
  */
 export function parseReading(text: string, unit: string, options: NumeralOptions = {}): number {
-  const wanted = unitParts(unit);
-  const written = readQuantity(text, wanted, options);
-  return toNumber(written, text, written.bare ? wanted.places : 0);
+  return readingReader(unit)(text, options);
 }
