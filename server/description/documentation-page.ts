@@ -1,7 +1,9 @@
 import { type Endpoint } from '#shared/contract/endpoint';
 import { ENDPOINTS } from '#shared/contract/index';
+import { escape } from './escape';
 import { type OpenApiDocument } from './openapi-document';
 import { templateOf, whoMay } from './operation-of';
+import { rackSection } from './rack-section';
 import { type Field, fieldsOf, type Schema } from './schema-fields';
 
 const STYLE = `
@@ -12,16 +14,12 @@ const STYLE = `
   h3 { font-size: 1rem; margin: 2rem 0 0; overflow-wrap: anywhere }
   p { margin: .25rem 0 }
   .frame { overflow-x: auto }
+  pre { margin: .5rem 0; padding: .5rem .75rem; overflow-x: auto; font: 13px/1.5 'Roboto Mono', ui-monospace, monospace; border: 1px solid; border-color: color-mix(in srgb, currentColor 20%, transparent) }
+  li { margin-bottom: 1.5rem }
   table { border-collapse: collapse; margin: .5rem 0; font-size: .875rem }
   caption, th { text-align: left; font-weight: 500 }
   th, td { padding: .125rem 1.5rem .125rem 0; border-bottom: 1px solid; border-color: color-mix(in srgb, currentColor 20%, transparent); vertical-align: top }
 `;
-
-const ESCAPES: Record<string, string> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', "'": '&#39;' };
-
-function escape(text: string): string {
-  return text.replaceAll(/[&<>"']/g, (letter) => ESCAPES[letter] ?? letter);
-}
 
 function table(caption: string, fields: readonly Field[]): string {
   if (fields.length === 0) return '';
@@ -79,6 +77,7 @@ export function documentationPage(document: OpenApiDocument): string {
 <head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1">
 <title>Quietrail interface</title><style>${STYLE}</style></head>
 <body><main><h1>Quietrail interface</h1><p>${about}</p><p><a href="/api/openapi.json">OpenAPI document</a></p>
+${rackSection()}
 ${parts.join('\n')}
 </main></body></html>`;
 }

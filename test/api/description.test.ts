@@ -1,5 +1,8 @@
 import { type Endpoint } from '#shared/contract/endpoint';
 import { ENDPOINTS } from '#shared/contract/index';
+import * as racks from '#shared/contract/racks';
+import { escape } from '#server/description/escape';
+import { EXAMPLE_ANSWER, EXAMPLE_LOT, EXAMPLE_READINGS, RACK_STEPS } from '#server/description/rack-example';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { testSite, type TestSite } from '../support/test-site';
 
@@ -44,6 +47,18 @@ describe('the description of the interface', () => {
     const references = new Set([...text.matchAll(/"\$ref":"#\/([^"]+)"/g)].map(([, place]) => place ?? ''));
     for (const place of references)
       expect(place.split('/').reduce<unknown>((inner, step) => Reflect.get(Object(inner), step), body)).toBeDefined();
+  });
+
+  it('shows the whole conversation of a test rack, with bodies that the contract takes', async () => {
+    expect(racks.rackLot.parse(EXAMPLE_LOT)).toEqual(EXAMPLE_LOT);
+    expect(racks.sendRackReadings.body.parse(EXAMPLE_READINGS)).toEqual(EXAMPLE_READINGS);
+    expect(racks.sendRackReadings.reply.parse(EXAMPLE_ANSWER)).toEqual(EXAMPLE_ANSWER);
+    const { text } = await site.nobody().get('/api/docs').expect(200);
+    for (const { about, typed } of RACK_STEPS)
+      for (const words of [about, typed]) expect(text).toContain(escape(words));
+    expect(text).toContain('Authorization: Bearer $TOKEN');
+    const { body } = await site.nobody().get('/api/openapi.json').expect(200);
+    expect(body).toMatchObject({ components: { securitySchemes: { rackToken: { type: 'http', scheme: 'bearer' } } } });
   });
 
   it('is a page that needs no script', async () => {
