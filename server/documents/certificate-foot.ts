@@ -1,11 +1,10 @@
 import { type CertificateData, type Signature } from '#shared/papers/certificate-data';
-import { BOTTOM, LEFT, type Paper, WIDTH } from './paper';
-import { INK, LINE } from './paper-colours';
+import { BOTTOM, LEFT, type Paper } from './paper';
+import { INK } from './paper-colours';
 import { utcMinute } from './paper-time';
 import { type Piece, type TextLine } from './text-lines';
 import { STYLES } from './text-style';
 
-const RIGHT = LEFT + WIDTH;
 const SIGNATURE_WIDTH = 309;
 const ROOM_TO_SIGN = 20;
 const BELOW_LINE = 6;
@@ -58,23 +57,4 @@ export function signatures(paper: Paper, parent: Element, { inspector, quality }
 }
 
 /** The digest as people compare it: its first sixteen digits in fours. */
-const shortDigest = (digest: string) => digest.slice(0, 16).replaceAll(/(.{4})(?=.)/g, '$1 ');
-
-/** Number, digest and page n of m at the foot of every page. */
-export function feet(paper: Paper, number: string, dataDigest: string): void {
-  const { doc } = paper;
-  const style = STYLES.footer;
-  const { count } = doc.bufferedPageRange();
-  const y = BOTTOM + 22;
-  for (let page = 0; page < count; page++) {
-    doc.switchToPage(page);
-    paper.rule(LEFT, y, WIDTH, LINE);
-    paper.artifact(() => {
-      const digest = `Data digest ${shortDigest(dataDigest)}`;
-      const width = paper.measure({ text: digest, style });
-      paper.line([{ text: number, style }], LEFT, y + 9, style.leading);
-      paper.line([{ text: digest, style }], LEFT + (WIDTH - width) / 2, y + 9, style.leading);
-      paper.lineEndingAt(`Page ${page + 1} of ${count}`, style, RIGHT, y + 9);
-    }, 'Pagination');
-  }
-}
+export const shortDigest = (digest: string) => digest.slice(0, 16).replaceAll(/(.{4})(?=.)/g, '$1 ');
