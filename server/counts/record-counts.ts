@@ -5,6 +5,7 @@ import { lots } from '#db/schema/lots';
 import { nonconformances } from '#db/schema/nonconformances';
 import { parts } from '#db/schema/parts';
 import { people } from '#db/schema/people';
+import { racks } from '#db/schema/racks';
 import { suppliers } from '#db/schema/suppliers';
 import { type Caller, mayCall } from '#server/caller';
 import { dayOf } from '#server/instruments/instrument-queries';
@@ -17,6 +18,7 @@ import { listNonconformances } from '#shared/contract/nonconformances';
 import { listParts } from '#shared/contract/parts';
 import { listPeople } from '#shared/contract/people';
 import { listPlans } from '#shared/contract/plans';
+import { listRacks } from '#shared/contract/racks';
 import { listSuppliers } from '#shared/contract/suppliers';
 import { and, count, eq, lte } from 'drizzle-orm';
 import { type SQLiteTable } from 'drizzle-orm/sqlite-core';
@@ -57,6 +59,7 @@ export function countRecords(db: Db, caller: Caller, now: Date): RecordCounts {
       instruments: rowsOf(db, instruments),
       instrumentsDue: instrumentsDue(db, now),
     }),
+    ...(mayCall(caller, listRacks) && { racks: rowsOf(db, racks) }),
     ...(mayCall(caller, listCertificates) && { certificates: rowsOf(db, certificates) }),
     ...(mayCall(caller, listNonconformances) && { openNonconformances: openNonconformances(db, caller) }),
     ...(mayCall(caller, listPeople) && { people: rowsOf(db, people) }),

@@ -32,6 +32,7 @@ export const recordCounts = z.object({
   suppliers: z.int().optional(),
   instruments: z.int().optional(),
   instrumentsDue: z.int().optional(),
+  racks: z.int().optional(),
   certificates: z.int().optional(),
   openNonconformances: z.int().optional(),
   people: z.int().optional(),

@@ -13,7 +13,12 @@ const meaning = z.string().trim().min(1, 'Name a characteristic’s key, or “u
 
 /** Heading of a column in a rack's files to what it stands for; null for a column to be skipped. */
 export const rackMapping = z
-  .record(z.string().trim().min(1, 'A column has no heading.').max(200, 'At most 200 characters.'), meaning.nullable())
+  .record(z.string(), meaning.nullable())
+  .refine((mapping) => Object.keys(mapping).every((heading) => heading.trim() !== ''), 'A column has no heading.')
+  .refine(
+    (mapping) => Object.keys(mapping).every(({ length }) => length <= 200),
+    'A heading has at most 200 characters.',
+  )
   .refine((mapping) => Object.keys(mapping).length <= 2000, 'At most 2 000 columns.');
 
 /** A token as people see it: its first characters, never the whole. */

@@ -13,6 +13,8 @@ z.config({
       case 'invalid_value':
       case 'invalid_union':
         return 'Choose one of those offered.';
+      case 'invalid_key':
+        return 'A name in this list does not fit.';
       case 'invalid_format':
         return FORMATS[issue.format];
       default:

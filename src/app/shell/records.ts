@@ -8,6 +8,7 @@ import { listNonconformances } from '#shared/contract/nonconformances';
 import { listParts } from '#shared/contract/parts';
 import { listPeople } from '#shared/contract/people';
 import { listPlans } from '#shared/contract/plans';
+import { listRacks } from '#shared/contract/racks';
 import { readSite } from '#shared/contract/site';
 import { listSuppliers } from '#shared/contract/suppliers';
 import { type Reply } from '../data/api';
@@ -29,6 +30,7 @@ export const RECORDS: readonly (readonly RecordArea[])[] = [
     { path: 'parts', title: 'Parts', who: listParts.who, count: 'parts' },
     { path: 'suppliers', title: 'Suppliers', who: listSuppliers.who, count: 'suppliers' },
     { path: 'instruments', title: 'Instruments', who: listInstruments.who, count: 'instruments' },
+    { path: 'racks', title: 'Racks', who: listRacks.who, count: 'racks' },
   ],
   [
     { path: 'certificates', title: 'Certificates', who: listCertificates.who, count: 'certificates' },

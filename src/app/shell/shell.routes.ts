@@ -11,6 +11,7 @@ import { listNonconformances } from '#shared/contract/nonconformances';
 import { listParts } from '#shared/contract/parts';
 import { listPeople } from '#shared/contract/people';
 import { listPlans } from '#shared/contract/plans';
+import { listRacks } from '#shared/contract/racks';
 import { readSite } from '#shared/contract/site';
 import { listSuppliers } from '#shared/contract/suppliers';
 import { readYields } from '#shared/contract/yields';
@@ -55,6 +56,7 @@ export default [
         title: 'Instruments',
         loadChildren: () => import('../instruments/instruments.routes'),
       }),
+      ...areaFor(listRacks.who, { path: 'racks', title: 'Racks', loadChildren: () => import('../racks/racks.routes') }),
       ...areaFor(listCertificates.who, {
         path: 'certificates',
         title: 'Certificates',
