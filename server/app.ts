@@ -9,6 +9,7 @@ import { eventRoutes } from './events/event-routes';
 import { benchRoutes } from './bench/bench-routes';
 import { certificateRoutes } from './certificates/certificate-routes';
 import { decisionRoutes } from './decision/decision-routes';
+import { gaugeStudyRoutes } from './gauge-studies/gauge-study-routes';
 import { instrumentRoutes } from './instruments/instrument-routes';
 import { lotRoutes } from './lots/lot-routes';
 import { mailRoutes } from './mail/mail-routes';
@@ -46,6 +47,7 @@ const AREAS: readonly ((router: Router, context: Context, verdicts: RunningVerdi
   partRoutes,
   planRoutes,
   instrumentRoutes,
+  gaugeStudyRoutes,
   lotRoutes,
   benchRoutes,
   rackRoutes,

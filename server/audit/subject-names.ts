@@ -1,5 +1,6 @@
 import { type Db } from '#db/open-database';
 import { certificates } from '#db/schema/certificates';
+import { gaugeStudies } from '#db/schema/gauge-studies';
 import { instruments } from '#db/schema/instruments';
 import { lots } from '#db/schema/lots';
 import { nonconformances } from '#db/schema/nonconformances';
@@ -17,6 +18,7 @@ const NAMES = {
   part: { table: parts, name: parts.number },
   supplier: { table: suppliers, name: suppliers.code },
   instrument: { table: instruments, name: instruments.assetNumber },
+  'gauge-study': { table: gaugeStudies, name: gaugeStudies.number },
   person: { table: people, name: people.email },
   rack: { table: racks, name: racks.name },
   'reading-batch': { table: lots, name: lots.number },

@@ -7,6 +7,7 @@ import * as counts from './counts';
 import * as decision from './decision';
 import * as description from './description';
 import { type Endpoint } from './endpoint';
+import * as gaugeStudies from './gauge-studies';
 import * as instruments from './instruments';
 import * as lots from './lots';
 import * as mail from './mail';
@@ -31,6 +32,7 @@ const areas = {
   instruments,
   conditions,
   calibrations,
+  gaugeStudies,
   lots,
   bench,
   racks,

@@ -49,7 +49,7 @@ export function spreadAnalysis(found: FoundVariances, tolerance: number | null):
         sigma,
         ofVariation: total === 0 ? null : sigma / Math.sqrt(total),
         ofVariance: total === 0 ? null : variances[spread] / total,
-        ofTolerance: tolerance === null ? null : (SPREAD_WIDTH * sigma) / tolerance,
+        ofTolerance: tolerance === null ? null : finite((SPREAD_WIDTH * sigma) / tolerance),
         setToZero: own < 0,
       };
     },
@@ -57,6 +57,12 @@ export function spreadAnalysis(found: FoundVariances, tolerance: number | null):
   return { shares, categories: categoriesOf(variances) };
 }
 
+/** Readings that hardly differ can make a quotient that is no number; then nothing is said. */
+function finite(quotient: number): number | null {
+  return Number.isFinite(quotient) ? quotient : null;
+}
+
 function categoriesOf({ gauge, parts }: Record<Spread, number>): number | null {
-  return gauge === 0 ? null : Math.trunc((CATEGORY_FACTOR * Math.sqrt(parts)) / Math.sqrt(gauge));
+  const categories = Math.trunc((CATEGORY_FACTOR * Math.sqrt(parts)) / Math.sqrt(gauge));
+  return Number.isSafeInteger(categories) ? categories : null;
 }

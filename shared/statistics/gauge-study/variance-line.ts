@@ -16,8 +16,8 @@ export function meanSquare({ sum, degrees }: Squares): number {
 /** A line of the table; without a divisor nothing is tested. */
 export function varianceLine(source: VarianceSource, squares: Squares, divisor: Divisor | null): VarianceLine {
   const own = meanSquare(squares);
-  const other = divisor === null ? 0 : meanSquare(divisor.squares);
-  const f = divisor === null || other === 0 ? null : own / other;
+  const quotient = divisor === null ? Number.NaN : own / meanSquare(divisor.squares);
+  const f = Number.isFinite(quotient) ? quotient : null;
   return {
     source,
     degreesOfFreedom: squares.degrees,

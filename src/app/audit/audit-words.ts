@@ -11,6 +11,7 @@ export const SUBJECT_TITLES: Readonly<Record<string, string>> = {
   part: 'Part',
   supplier: 'Supplier',
   instrument: 'Instrument',
+  'gauge-study': 'Gauge study',
   person: 'Person',
   rack: 'Rack',
   'reading-batch': 'Reading batch',
