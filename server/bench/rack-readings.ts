@@ -41,6 +41,10 @@ export interface RackTarget {
   factsOf(characteristic: Measured, value: number): RackFacts;
 }
 
+/** What is shown of a column so that people know it again. */
+const SAMPLED = 3;
+const LONGEST_SAMPLE = 40;
+
 const NO_FACTS: RackFacts = { rangeId: null, expandedUncertainty: null, question: null };
 
 function unitOf(text: string, sampleSize: number, seen: ReadonlyMap<number, number>): number | string {
@@ -136,6 +140,7 @@ export function rackReadings(table: Extract<RackTable, { state: 'table' }>, targ
     columns: table.headers.map((header, index) => ({
       header,
       characteristicKey: columns.find((column) => column.index === index)?.characteristic.content.key ?? null,
+      samples: table.rows.slice(0, SAMPLED).map(({ cells }) => (cells[index] ?? '').slice(0, LONGEST_SAMPLE)),
     })),
     rows: table.rows.length,
     readings,

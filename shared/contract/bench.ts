@@ -289,7 +289,14 @@ export const rackFault = z.object({ line: z.int(), column: z.string().nullable()
 export const rackPreview = z.object({
   fileName: z.string(),
   rows: z.int(),
-  columns: z.array(z.object({ header: z.string(), characteristicKey: z.string().nullable() })),
+  columns: z.array(
+    z.object({
+      header: z.string(),
+      characteristicKey: z.string().nullable(),
+      /** Its first cells, as they stand in the file. */
+      samples: z.array(z.string()),
+    }),
+  ),
   readings: z.int(),
   faults: z.array(rackFault),
   /** Readings far from what the part can give; imported, they wait for an answer. */

@@ -64,11 +64,11 @@ describe('the columns of a rack file', () => {
     const { faults, columns, readings: found } = await preview(bound, body());
     expect(faults).toEqual([]);
     expect(columns).toEqual([
-      { header: 'DUT no', characteristicKey: null },
-      { header: 'Vout [V]', characteristicKey: 'v_loaded' },
-      { header: 'Vpp [mV]', characteristicKey: 'ripple_pp' },
-      { header: 'Label', characteristicKey: 'marking' },
-      { header: 'Operator', characteristicKey: null },
+      { header: 'DUT no', characteristicKey: null, samples: ['1', '2', '3'] },
+      { header: 'Vout [V]', characteristicKey: 'v_loaded', samples: ['12,01', '12,02', '11,98'] },
+      { header: 'Vpp [mV]', characteristicKey: 'ripple_pp', samples: ['600', '610', '590'] },
+      { header: 'Label', characteristicKey: 'marking', samples: ['pass', 'pass', 'fail'] },
+      { header: 'Operator', characteristicKey: null, samples: ['ines', 'ines', 'ines'] },
     ]);
     expect(found).toBe(9);
   });

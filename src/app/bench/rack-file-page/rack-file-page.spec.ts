@@ -1,7 +1,10 @@
+import { type HarnessLoader } from '@angular/cdk/testing';
+import { TestbedHarnessEnvironment } from '@angular/cdk/testing/testbed';
 import { provideHttpClient, withInterceptors } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
 import { inputBinding, signal } from '@angular/core';
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
+import { MatSelectHarness } from '@angular/material/select/testing';
 import { By } from '@angular/platform-browser';
 import { provideRouter, Router } from '@angular/router';
 import { type RackPreview } from '#shared/contract/bench';
@@ -17,21 +20,29 @@ const SOUND: RackPreview = {
   fileName: 'rack.csv',
   rows: 5,
   columns: [
-    { header: 'unit', characteristicKey: null },
-    { header: 'no_load', characteristicKey: 'no_load' },
+    { header: 'unit', characteristicKey: null, samples: ['1'] },
+    { header: 'no_load', characteristicKey: 'no_load', samples: ['17.2'] },
   ],
   readings: 5,
   faults: [],
+  questions: [],
   nonconformingUnits: [{ unit: 2, failed: ['no_load'] }],
   groups: [{ class: 'major', found: 1, acceptance: 0, rejection: 1 }],
   verdict: 'rejected',
   reason: 'Rejected: 1 major nonconforming unit in 5, rejection number 1.',
 };
 
+/** What the server is asked about a file. */
+interface Asked {
+  rackId: number | null;
+  mapping: Record<string, string | null>;
+}
+
 describe('the rack file page', () => {
   let fixture: ComponentFixture<RackFilePage>;
   let http: HttpTestingController;
   let page: HTMLElement;
+  let loader: HarnessLoader;
 
   beforeEach(async () => {
     localStorage.clear();
@@ -47,8 +58,10 @@ describe('the rack file page', () => {
     http = TestBed.inject(HttpTestingController);
     fixture = TestBed.createComponent(RackFilePage, { bindings: [inputBinding('id', () => '12')] });
     page = fixture.nativeElement as HTMLElement;
+    loader = TestbedHarnessEnvironment.loader(fixture);
     TestBed.tick();
-    http.expectOne('/api/lots/12/bench').flush(benchReply());
+    const racks = [{ id: 3, name: 'North bay', mapping: { V1: 'no_load', Op: null } }];
+    http.expectOne('/api/lots/12/bench').flush(benchReply({ racks }));
     await fixture.whenStable();
   });
 
@@ -58,9 +71,22 @@ describe('the rack file page', () => {
     await fixture.whenStable();
   }
 
-  async function preview(reply: RackPreview): Promise<void> {
-    http.expectOne(PREVIEW).flush(reply);
+  /** Answers the open question; what the headings mean by themselves is then asked with. */
+  async function answer(reply: RackPreview): Promise<Asked> {
+    const request = http.expectOne(PREVIEW);
+    request.flush(reply);
     await fixture.whenStable();
+    return request.request.body as Asked;
+  }
+
+  async function preview(reply: RackPreview): Promise<Asked> {
+    await answer(reply);
+    return answer(reply);
+  }
+
+  async function choose(label: string, option: string): Promise<void> {
+    const select = await loader.getHarness(MatSelectHarness.with({ selector: `[aria-label="${label}"]` }));
+    await select.clickOptions({ text: option });
   }
 
   function button(word: string): HTMLButtonElement {
@@ -100,6 +126,54 @@ describe('the rack file page', () => {
     expect(cells).toEqual(['3', 'no_load', '“x1”: type a number.']);
     button('Import').click();
     http.expectNone('/api/lots/12/rack-file');
+  });
+
+  it('asks with what the headings say by themselves', async () => {
+    await pick();
+    expect((await answer(SOUND)).mapping).toEqual({});
+    expect((await answer(SOUND)).mapping).toEqual({ unit: 'unit', no_load: 'no_load' });
+    const heads = [...page.querySelectorAll('qr-rack-columns tbody th')].map((cell) => cell.textContent);
+    expect(heads).toEqual(['unit', 'no_load']);
+    expect(page.querySelector('qr-rack-columns')?.textContent).toContain('17.2');
+  });
+
+  it('says beside a column that it is not known, and takes what the person says of it', async () => {
+    const columns = [...SOUND.columns, { header: 'V9', characteristicKey: null, samples: ['12.1', '12.0'] }];
+    const faults = [{ line: 1, column: 'V9', message: 'The plan has no characteristic V9.' }];
+    await pick();
+    await preview({ ...SOUND, columns, faults });
+    expect(page.querySelector('qr-rack-columns')?.textContent).toContain('Say what this column holds, or skip it.');
+    await choose('What V9 holds', 'Loaded voltage V');
+    const { mapping } = await answer({ ...SOUND, columns });
+    expect(mapping).toEqual({ unit: 'unit', no_load: 'no_load', V9: 'loaded' });
+    await choose('What V9 holds', 'Nothing wanted: skip it');
+    expect((await answer({ ...SOUND, columns })).mapping).toMatchObject({ V9: null });
+    expect(button('Import').getAttribute('aria-disabled')).not.toBe('true');
+  });
+
+  it('takes what was remembered with the rack', async () => {
+    const columns = ['unit', 'V1', 'Op'].map((header) => ({ header, characteristicKey: null, samples: ['1'] }));
+    await pick();
+    await preview({ ...SOUND, columns });
+    const rack = await loader.getHarness(MatSelectHarness.with({ ancestor: 'qr-rack-choice' }));
+    await rack.clickOptions({ text: 'North bay' });
+    const asked = await answer({ ...SOUND, columns });
+    expect(asked).toMatchObject({ rackId: 3, mapping: { unit: 'unit', V1: 'no_load', Op: null } });
+    button('Import').click();
+    const sent = http.expectOne('/api/lots/12/rack-file').request.body as Asked;
+    expect(sent).toEqual(asked);
+  });
+
+  it('lists the readings that will wait for an answer', async () => {
+    await pick();
+    const sentence = 'Ten times more than this part can give.';
+    const questions = [{ unit: 2, characteristicKey: 'ripple', value: 18.4, sentence }];
+    await preview({ ...SOUND, questions });
+    const cells = [...page.querySelectorAll('qr-rack-questions tbody td')].map((cell) =>
+      cell.textContent?.replaceAll(/\s/g, ' '),
+    );
+    expect(cells).toEqual(['2', 'Ripple', '18.40 V p-p', sentence]);
+    expect(button('Import').getAttribute('aria-disabled')).not.toBe('true');
   });
 
   it('says in the server’s words why a file was refused', async () => {

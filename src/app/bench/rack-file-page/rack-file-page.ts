@@ -10,20 +10,24 @@ import {
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
-import { importRackFile, previewRackFile, type RackPreview, readBench } from '#shared/contract/bench';
+import { type Bench, importRackFile, previewRackFile, type RackPreview, readBench } from '#shared/contract/bench';
 import { ApiClient, endpointResource } from '../../data/api';
 import { RecordSave } from '../../data/record-save';
 import { BackLink } from '../../shell/back-link';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
 import { MessageNote } from '../../ui/states/message-note';
+import { columnMeanings, type Meaning } from './column-meaning';
 import { ExpectedColumns } from './expected-columns';
 import { FileDrop, type PickedFile } from './file-drop';
+import { RackChoice } from './rack-choice';
+import { RackColumns, type SaidOfColumn } from './rack-columns';
 import { RackFaults } from './rack-faults';
 import { RackInstruments } from './rack-instruments';
+import { RackQuestions } from './rack-questions';
 import { RackResult } from './rack-result';
 
-/** Brings the readings of an automated rack in from its CSV file: seen first, then all rows or none. */
+/** Brings the readings of an automated rack in from its CSV file: its columns named, then seen, then all rows or none. */
 @Component({
   selector: 'qr-rack-file-page',
   imports: [
@@ -34,8 +38,11 @@ import { RackResult } from './rack-result';
     MatButton,
     MessageNote,
     PageState,
+    RackChoice,
+    RackColumns,
     RackFaults,
     RackInstruments,
+    RackQuestions,
     RackResult,
     RouterLink,
   ],
@@ -53,11 +60,29 @@ export class RackFilePage {
   protected readonly file = signal<PickedFile | null>(null);
   /** Ids of the instruments the rack measured with. */
   protected readonly instruments = signal<readonly number[]>([]);
-  /** What the file would bring; another file or another instrument makes it void. */
+  /** The rack whose file it is; null for none of those set up. */
+  protected readonly rackId = signal<number | null>(null);
+  /** The columns of the file, once the server has seen it. */
+  protected readonly columns = linkedSignal<unknown, RackPreview['columns']>({
+    source: this.file,
+    computation: () => [],
+  });
+  /** What the person said of columns of this file. */
+  private readonly said = linkedSignal<unknown, ReadonlyMap<string, Meaning>>({
+    source: this.file,
+    computation: () => new Map(),
+  });
+  protected readonly meanings = computed(() => {
+    const headers = this.columns().map(({ header }) => header);
+    return columnMeanings(headers, this.said(), this.known());
+  });
+  /** What the file would bring; another file, rack or instrument, or another word on a column, makes it void. */
   protected readonly preview = linkedSignal<unknown, RackPreview | null>({
-    source: () => [this.file(), this.instruments()],
+    source: () => [this.file(), this.instruments(), this.rackId(), this.said()],
     computation: () => null,
   });
+  /** What the server was asked last; an answer to anything else comes too late. */
+  private asked: object | null = null;
   protected readonly reading = new RecordSave();
   protected readonly importing = new RecordSave();
   protected readonly sound = computed(() => this.preview()?.faults.length === 0);
@@ -72,11 +97,26 @@ export class RackFilePage {
     this.look();
   }
 
-  protected look(): void {
-    const [body, file, instruments] = [this.body(), this.file(), this.instruments()];
+  protected choose(rackId: number | null): void {
+    this.rackId.set(rackId);
+    this.look();
+  }
+
+  protected say({ header, meaning }: SaidOfColumn): void {
+    this.said.update((said) => new Map(said).set(header, meaning));
+    this.look();
+  }
+
+  /** Asks what the file would bring. Its columns become known by it: where they mean something, it is asked again. */
+  private look(): void {
+    const body = this.body();
+    this.asked = body;
     if (body === null) return;
     this.reading.run(this.api.call(previewRackFile, { params: { id: this.id() }, body }), (preview) => {
-      if (file === this.file() && instruments === this.instruments()) this.preview.set(preview);
+      if (this.asked !== body) return;
+      this.columns.set(preview.columns);
+      if (isDifferent(body.mapping, this.mapping())) this.look();
+      else this.preview.set(preview);
     });
   }
 
@@ -91,6 +131,24 @@ export class RackFilePage {
 
   private body() {
     const file = this.file();
-    return file && { fileName: file.name, text: file.text, instrumentIds: [...this.instruments()] };
+    if (file === null) return null;
+    const { name: fileName, text } = file;
+    const instrumentIds = [...this.instruments()];
+    return { fileName, text, instrumentIds, rackId: this.rackId(), mapping: this.mapping() };
   }
+
+  private mapping(): Record<string, Meaning> {
+    return Object.fromEntries(this.meanings());
+  }
+
+  private known(): Parameters<typeof columnMeanings>[2] {
+    const bench: Bench | undefined = this.bench.hasValue() ? this.bench.value() : undefined;
+    const rack = bench?.racks.find(({ id }) => id === this.rackId());
+    return { characteristics: bench?.characteristics ?? [], remembered: rack?.mapping ?? {} };
+  }
+}
+
+function isDifferent(sent: Record<string, Meaning>, now: Record<string, Meaning>): boolean {
+  const headers = Object.keys(now);
+  return headers.length !== Object.keys(sent).length || headers.some((header) => sent[header] !== now[header]);
 }

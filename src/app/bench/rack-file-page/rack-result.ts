@@ -9,7 +9,7 @@ const NAMED = 12;
 const WORDS = { continue: 'Continue', accepted: 'Accepted', rejected: 'Rejected' } as const;
 const LOOKS = { continue: 'open', accepted: 'ok', rejected: 'nok' } as const;
 
-/** What a rack file would bring: its readings, how its columns were understood, and the verdict they lead to. */
+/** What a rack file would bring: its readings, and the verdict they lead to. */
 @Component({
   selector: 'qr-rack-result',
   imports: [CountPipe, VerdictChip],
@@ -18,11 +18,6 @@ const LOOKS = { continue: 'open', accepted: 'ok', rejected: 'nok' } as const;
     :host {
       display: grid;
       gap: 12px;
-    }
-    .columns {
-      display: flex;
-      flex-wrap: wrap;
-      gap: 6px;
     }
     dd {
       overflow-wrap: anywhere;
@@ -41,12 +36,6 @@ export class RackResult {
 
   protected readonly look = computed(() => LOOKS[this.preview().verdict]);
   protected readonly word = computed(() => WORDS[this.preview().verdict]);
-  protected readonly columns = computed(() =>
-    this.preview().columns.map(({ header, characteristicKey }) => ({
-      header,
-      means: header === 'unit' ? 'unit number' : (this.names().get(characteristicKey ?? '') ?? 'not understood'),
-    })),
-  );
   protected readonly units = computed(() => {
     const { nonconformingUnits } = this.preview();
     const named = nonconformingUnits.slice(0, NAMED).map(({ unit, failed }) => {

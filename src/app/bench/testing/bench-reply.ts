@@ -3,6 +3,7 @@ import { type Characteristic } from '#shared/contract/plans';
 
 const COMMON = { condition: '', method: '', caution: '', ownLevel: null, ownAql: null } as const;
 const LIMITS = { unit: 'V', decimals: 2, target: null, lowerLimit: null, upperLimit: null } as const;
+const MEASURED = { ...LIMITS, alternatePeaks: 'worst' } as const;
 
 /** The plan of the bench specs: a marking judged by eye, two voltages, the regulation computed from them, a ripple. */
 export const CHARACTERISTICS: Characteristic[] = [
@@ -22,7 +23,8 @@ export const CHARACTERISTICS: Characteristic[] = [
     name: 'No-load voltage',
     class: 'major',
     ...COMMON,
-    ...LIMITS,
+    ...MEASURED,
+    measurand: 'no-load-voltage',
     upperLimit: 18.2,
     entryMode: 'direct',
     instrumentKind: 'multimeter',
@@ -33,7 +35,8 @@ export const CHARACTERISTICS: Characteristic[] = [
     name: 'Loaded voltage',
     class: 'major',
     ...COMMON,
-    ...LIMITS,
+    ...MEASURED,
+    measurand: 'loaded-voltage',
     caution: 'Mains inside. Keep the cover on.',
     lowerLimit: 11.4,
     entryMode: 'direct',
@@ -49,7 +52,7 @@ export const CHARACTERISTICS: Characteristic[] = [
     unit: '%',
     decimals: 1,
     upperLimit: 0.5,
-    formula: { key: 'load-regulation', inputs: { no_load: 'no_load', loaded: 'loaded' } },
+    formula: { key: 'load-regulation', inputs: { no_load: 'no_load', loaded: 'loaded' }, constants: {} },
   },
   {
     kind: 'measured',
@@ -57,7 +60,8 @@ export const CHARACTERISTICS: Characteristic[] = [
     name: 'Ripple',
     class: 'major',
     ...COMMON,
-    ...LIMITS,
+    ...MEASURED,
+    measurand: 'ripple',
     unit: 'V p-p',
     upperLimit: 2.4,
     entryMode: 'scope',
@@ -74,6 +78,9 @@ const GROUP = {
   severity: 'normal',
 } as const;
 
+/** An instrument at a site that asks for no daily check. */
+const UNCHECKED = { dailyReference: null, dailyCheck: 'not-asked', openReview: null } as const;
+
 /** A reading as the server has it. */
 export function readingOf(unit: number, characteristicKey: string, worth: number | boolean): Reading {
   return {
@@ -84,11 +91,16 @@ export function readingOf(unit: number, characteristicKey: string, worth: number
     pass: typeof worth === 'boolean' ? worth : null,
     entry: null,
     instrumentId: null,
+    rangeId: null,
+    expandedUncertainty: null,
+    waveformId: null,
+    question: null,
     note: '',
     repeat: null,
     attempt: 1,
     withdrawn: false,
     takenBy: 'I. Sandvær',
+    rack: null,
     takenAt: '2026-03-12T14:20:00.000Z',
     receivedAt: '2026-03-12T14:20:00.000Z',
   };
@@ -149,7 +161,7 @@ export function benchReply(given: Partial<Bench> = {}): Bench {
       ],
     },
     characteristics: CHARACTERISTICS,
-    units: [1, 2, 3, 4, 5].map((unit) => ({ unit, position: unit * 7, carton: 1, setAside: null })),
+    units: [1, 2, 3, 4, 5].map((unit) => ({ unit, position: unit * 7, carton: 1, setAside: null, ruling: null })),
     readings: [],
     instruments: [
       {
@@ -162,6 +174,8 @@ export function benchReply(given: Partial<Bench> = {}): Bench {
         calibrationDue: '2026-09-30',
         status: 'in-service',
         version: 1,
+        ranges: [],
+        ...UNCHECKED,
         usable: true,
         daysLeft: 200,
       },
@@ -175,10 +189,19 @@ export function benchReply(given: Partial<Bench> = {}): Bench {
         calibrationDue: '2026-02-21',
         status: 'in-service',
         version: 1,
+        ranges: [],
+        ...UNCHECKED,
         usable: false,
         daysLeft: -19,
       },
     ],
+    decisionRule: 'simple',
+    coverageFactor: 2,
+    warmUpMinutes: null,
+    expected: null,
+    conditions: null,
+    racks: [],
+    cursor: '2026-03-12T14:20:00.000Z',
     ...given,
   };
 }
