@@ -1,6 +1,7 @@
 import { Injectable, signal, type WritableSignal } from '@angular/core';
 import { INSTRUMENT_KINDS, type InstrumentKind } from '#shared/contract/instruments';
 import { WALK_ORDERS, type WalkOrder } from '#shared/bench/grid-walk';
+import { DECIMAL_COMMA } from '../ui/values/decimal-comma';
 
 const KEY = 'quietrail.bench';
 
@@ -8,6 +9,7 @@ interface Remembered {
   order: WalkOrder;
   letters: boolean;
   instruments: Partial<Record<InstrumentKind, number>>;
+  ranges: Record<string, number>;
   /** Settings of the scope reader that stay from reading to reading. */
   scope: Record<string, string>;
 }
@@ -23,9 +25,11 @@ export class BenchSettings {
   readonly letters = signal(this.stored.letters);
   /** The instrument last used of each kind, by id. */
   readonly instruments = signal(this.stored.instruments);
+  /** The range named last of each instrument and way of reading; none where the smallest that holds the value is taken. */
+  readonly ranges = signal(this.stored.ranges);
   readonly scope = signal(this.stored.scope);
   /** Whether people here write a decimal comma. */
-  readonly decimalComma = new Intl.NumberFormat(navigator.language).format(0.5).includes(',');
+  readonly decimalComma = DECIMAL_COMMA;
 
   /** Changes a setting and remembers it. */
   change<T>(setting: WritableSignal<T>, value: T): void {
@@ -34,6 +38,7 @@ export class BenchSettings {
       order: this.order(),
       letters: this.letters(),
       instruments: this.instruments(),
+      ranges: this.ranges(),
       scope: this.scope(),
     };
     try {
@@ -51,7 +56,8 @@ function readStored(): Remembered {
     order,
     letters: stored['letters'] !== false,
     instruments: instrumentsOf(stored),
-    scope: textsOf(stored['scope']),
+    ranges: entriesOf(stored['ranges'], (value) => typeof value === 'number'),
+    scope: entriesOf(stored['scope'], (value) => typeof value === 'string'),
   };
 }
 
@@ -61,11 +67,9 @@ function instrumentsOf(stored: Record<string, unknown>): Remembered['instruments
   return Object.fromEntries(known) as Remembered['instruments'];
 }
 
-function textsOf(value: unknown): Record<string, string> {
-  const texts = Object.entries(recordOf(value)).filter(
-    (entry): entry is [string, string] => typeof entry[1] === 'string',
-  );
-  return Object.fromEntries(texts);
+function entriesOf<T>(value: unknown, fits: (value: unknown) => value is T): Record<string, T> {
+  const entries = Object.entries(recordOf(value)).filter((entry): entry is [string, T] => fits(entry[1]));
+  return Object.fromEntries(entries);
 }
 
 function parsed(): Record<string, unknown> {

@@ -39,7 +39,7 @@ let groups = 0;
       display: inline-flex;
       align-items: center;
       min-height: calc(var(--qr-control) - 6px);
-      padding: 0 12px;
+      padding: 0 var(--qr-segment-padding, 12px);
       font: 500 13px/18px var(--qr-sans);
       color: var(--qr-ink-2);
       white-space: nowrap;

@@ -25,7 +25,7 @@ describe('the list of the bench', () => {
         provideHttpClient(withInterceptors([problemInterceptor])),
         provideHttpClientTesting(),
         provideRouter([]),
-        { provide: Session, useValue: { me, holds } },
+        { provide: Session, useValue: { me, holds, mayCall: ({ who }: { who: Role[] }) => holds(...who) } },
       ],
     });
     http = TestBed.inject(HttpTestingController);

@@ -19,9 +19,11 @@ import { may } from '../../session/may';
 import { narrowerThan } from '../../shell/screen-width';
 import { ReadOnlyNote } from '../../ui/states/read-only-note';
 import { BenchHand } from '../bench-hand';
+import { BenchActs } from '../sheet/bench-acts';
 import { BenchCursor } from '../sheet/bench-cursor';
 import { BenchSheet } from '../sheet/bench-sheet';
 import { InstrumentChoice } from '../sheet/instrument-choice';
+import { PlausibilityCheck } from '../sheet/plausibility-check';
 import { ReadingDraft } from '../sheet/reading-draft';
 import { ReadingQueue } from '../waiting/reading-queue';
 import { BenchHead } from './bench-head';
@@ -37,6 +39,7 @@ import { ReadingPanel } from './reading-panel/reading-panel';
 import { RefusedActs } from './refused-acts';
 import { RunningVerdict } from './running-verdict';
 import { SampleOverview } from './sample-overview';
+import { WarmUp } from './warm-up';
 
 const AT_BENCH: readonly LotStatus[] = STATIONS.bench;
 
@@ -58,13 +61,16 @@ const AT_BENCH: readonly LotStatus[] = STATIONS.bench;
   ],
   providers: [
     BenchSheet,
+    BenchActs,
     BenchCursor,
-    ReadingDraft,
     InstrumentChoice,
+    ReadingDraft,
+    PlausibilityCheck,
     BenchHand,
     BenchQuestions,
     DeskCommands,
     LotSubmission,
+    WarmUp,
   ],
   templateUrl: './bench-desk.html',
   styleUrl: './bench-desk.scss',
@@ -75,6 +81,7 @@ export class BenchDesk {
   private readonly queue = inject(ReadingQueue);
   private readonly draft = inject(ReadingDraft);
   private readonly cursor = inject(BenchCursor);
+  private readonly acts = inject(BenchActs);
   protected readonly sheet = inject(BenchSheet);
   protected readonly hand = inject(BenchHand);
   protected readonly commands = inject(DeskCommands);
@@ -103,7 +110,7 @@ export class BenchDesk {
 
   constructor() {
     effect(() => {
-      this.sheet.open(this.bench());
+      this.acts.open(this.bench());
       untracked(() => this.cursor.start());
     });
     // Typing goes to the grid at once, unless the person is already somewhere else on the page.
@@ -115,12 +122,16 @@ export class BenchDesk {
     effect(() => {
       this.hand.mayMeasure.set(this.mayKeep() && AT_BENCH.includes(this.bench().lot.status));
     });
-    this.sheet.stale.pipe(takeUntilDestroyed()).subscribe(() => this.stale.emit());
+    this.acts.stale.pipe(takeUntilDestroyed()).subscribe(() => this.stale.emit());
     this.commands.toGrid.pipe(takeUntilDestroyed()).subscribe(() => this.grid()?.focusCell());
     this.commands.toPanel.pipe(takeUntilDestroyed()).subscribe((text) => {
       // The next character may come before the next frame, as from a scanner: the panel must show this cell's field now.
       this.application.tick();
       this.panel()?.focusFirst(text);
+    });
+    this.commands.toQuestion.pipe(takeUntilDestroyed()).subscribe(() => {
+      this.application.tick();
+      this.panel()?.focusQuestion();
     });
   }
 

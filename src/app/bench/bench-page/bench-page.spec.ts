@@ -183,6 +183,7 @@ describe('the bench page', () => {
     expect(kept()[0]?.entry).toEqual({
       kind: 'scope',
       scope: { form: 'whole', divisions: 3.7, voltsPerDivision: 0.5, probeFactor: 1, coupling: 'ac' },
+      typed: { divisions: '3.7', voltsPerDivision: '0.5', probeFactor: '1' },
     });
     expect(panel()).toContain('Unit 2, ripple');
     const next = [...page.querySelectorAll<HTMLInputElement>('qr-scope-reader input[type=text]')];

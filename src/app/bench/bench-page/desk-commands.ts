@@ -4,10 +4,14 @@ import { Subject } from 'rxjs';
 import { type BenchCommand } from '#shared/bench/bench-key';
 import { type WalkOrder } from '#shared/bench/grid-walk';
 import { BenchHand } from '../bench-hand';
+import { BenchActs } from '../sheet/bench-acts';
 import { BenchCursor } from '../sheet/bench-cursor';
+import { type BenchReading } from '../sheet/bench-reading';
+import { PlausibilityCheck } from '../sheet/plausibility-check';
 import { ReadingDraft } from '../sheet/reading-draft';
 import { readingWords } from '../sheet/reading-words';
 import { countingAt } from '../sheet/unit-record';
+import { type Confirmation } from '../waiting/bench-act';
 import { BenchQuestions } from './dialogs/bench-questions';
 
 /** What the keys and buttons of the bench do, whichever of them asks. */
@@ -16,6 +20,8 @@ export class DeskCommands {
   private readonly hand = inject(BenchHand);
   private readonly draft = inject(ReadingDraft);
   private readonly cursor = inject(BenchCursor);
+  private readonly acts = inject(BenchActs);
+  private readonly check = inject(PlausibilityCheck);
   private readonly questions = inject(BenchQuestions);
   private readonly snackBar = inject(MatSnackBar);
 
@@ -23,6 +29,10 @@ export class DeskCommands {
   readonly toGrid = new Subject<void>();
   /** The focus belongs into the panel's first field, which starts with the text given. */
   readonly toPanel = new Subject<string | undefined>();
+  /** The focus belongs on the question about what is typed. */
+  readonly toQuestion = new Subject<void>();
+  /** How to go on once the question is answered. */
+  private order: WalkOrder | undefined;
 
   /** Does what a key in the grid asks for. */
   obey(command: BenchCommand): void {
@@ -39,6 +49,55 @@ export class DeskCommands {
     if (result === 'held' && this.draft.armed()) this.toPanel.next(undefined);
     if (result === 'needs-repeat') this.askRepeat(() => this.keep(order));
     if (result === 'needs-reason') this.hand.hold('Say what is wrong: press the number of the reason.');
+    if (result === 'needs-answer') {
+      this.order = order;
+      this.toQuestion.next();
+    }
+  }
+
+  /** Keeps a reading that is far from what the part can give, for a reason. */
+  confirm(answer: Confirmation): void {
+    this.check.confirmation.set(answer);
+    this.keep(this.order);
+  }
+
+  /** Goes back from the question to the fields. */
+  typeAgain(): void {
+    this.check.asking.set(false);
+    this.toPanel.next(undefined);
+  }
+
+  /** Confirms a reading of a rack that waits for an answer, and goes on. */
+  answer(readingId: string, answer: Confirmation): void {
+    this.acts.answer(this.cursor.at().unit, readingId, answer);
+    this.toGrid.next();
+  }
+
+  /** Takes the offered correction, else opens what stands here to be changed. */
+  edit(): void {
+    if (this.check.applyCure()) return this.toPanel.next(undefined);
+    const entry = this.hand.isRepeat() && this.draft.repeat() === null ? this.standingReading()?.entry : null;
+    if (!entry || this.draft.started()) return this.toPanel.next(undefined);
+    this.askRepeat(() => {
+      this.draft.resume(entry);
+      this.toPanel.next(undefined);
+    });
+  }
+
+  /** Takes up a reading that the server refused because somebody else was first, as a repeat. */
+  repeatRefused({ id, entry }: BenchReading): void {
+    this.askRepeat(() => {
+      this.acts.discardRefused(this.cursor.at().unit, id);
+      if (entry !== null) this.draft.resume(entry);
+      this.toPanel.next(undefined);
+    });
+  }
+
+  /** Takes up a reading that the server questioned, to be corrected. */
+  correctRefused({ id, entry, value }: BenchReading): void {
+    this.acts.discardRefused(this.cursor.at().unit, id);
+    if (entry !== null && value !== null) this.check.resume({ entry, value });
+    this.toPanel.next(undefined);
   }
 
   /** Goes to the next characteristic; what is typed is kept first. */
@@ -114,7 +173,7 @@ export class DeskCommands {
       case 'fail':
         return this.judge(command.does === 'pass');
       case 'edit':
-        return this.toPanel.next(undefined);
+        return this.edit();
       case 'note':
         return this.note();
       case 'repeat':
@@ -148,9 +207,12 @@ export class DeskCommands {
 
   /** What stands in the cell now, in words. */
   private standing(): string {
-    const { characteristic } = this.cursor.stop();
-    const reading = countingAt(this.cursor.record(), characteristic.key);
-    return reading === undefined ? '' : readingWords(reading, characteristic);
+    const reading = this.standingReading();
+    return reading === undefined ? '' : readingWords(reading, this.cursor.stop().characteristic);
+  }
+
+  private standingReading(): BenchReading | undefined {
+    return countingAt(this.cursor.record(), this.cursor.at().key);
   }
 
   private withdraw(): void {

@@ -1,3 +1,4 @@
+import { type ExpectedBands } from '#shared/contract/parts';
 import { type Characteristic } from '#shared/contract/plans';
 import { formatLimits } from '#shared/quantities/format-quantity';
 import { type CharacteristicVerdict, type UnitVerdict } from '#shared/verdict/sample-verdict';
@@ -5,7 +6,14 @@ import { readingDigits, readingText } from '../../ui/values/reading-text';
 import { lookOf, LOOK_WORDS, type VerdictLook } from '../../ui/verdict-look';
 import { type BenchColumn, type BenchStop } from './bench-column';
 import { type BenchReading } from './bench-reading';
-import { countingAt, readingsAt, refusedAt, type UnitRecord } from './unit-record';
+import { plausibilityOf } from './reading-plausibility';
+import { countingAt, isOpenQuestion, readingsAt, refusedAt, type UnitRecord } from './unit-record';
+
+/** What of a reading asks for attention beside its verdict: it waits for an answer, or lies outside the expected band. */
+export interface CellMark {
+  readonly kind: 'question' | 'outside';
+  readonly words: string;
+}
 
 /** What one cell of the grid shows. */
 export interface BenchCell {
@@ -14,6 +22,9 @@ export interface BenchCell {
   readonly text: string;
   readonly value: number | null;
   readonly look: VerdictLook;
+  /** U where the decision rule asks for it, in SI base units; else 0. */
+  readonly uncertainty: number;
+  readonly mark: CellMark | null;
   /** Whether the plan asks nothing here, as the unit is beyond the characteristic's sample. */
   readonly unasked: boolean;
   /** How often the reading was taken; 1 is not shown. */
@@ -27,44 +38,59 @@ export interface BenchCell {
   readonly label: string;
 }
 
-/** The cell of a column for one unit; `typedKey` is the characteristic whose shown value is not kept yet. */
-export function benchCell(
-  column: BenchColumn,
-  record: UnitRecord,
-  verdict: UnitVerdict,
-  typedKey: string | null,
-): BenchCell {
-  const cells = column.stops.map((stop) => stopCell(column, stop, record, verdict, typedKey));
+/** One unit as its cells need it. */
+export interface CellSource {
+  readonly record: UnitRecord;
+  readonly verdict: UnitVerdict;
+  /** The characteristic whose shown value is not kept yet. */
+  readonly typedKey: string | null;
+  readonly expected: ExpectedBands | null;
+}
+
+const NOT_JUDGED: CharacteristicVerdict = { value: null, verdict: 'not judged', side: null, expandedUncertainty: null };
+
+/** The cell of a column for one unit. */
+export function benchCell(column: BenchColumn, source: CellSource): BenchCell {
+  const cells = column.stops.map((stop) => stopCell(column, stop, source));
   const [first] = cells;
   if (first === undefined) throw new RangeError(`column ${column.key} has no characteristic.`);
   return column.shape === 'attributes' ? mergedCell(column, cells) : first;
 }
 
-function stopCell(
-  { shape }: BenchColumn,
-  { characteristic, requiredTo }: BenchStop,
-  record: UnitRecord,
-  verdict: UnitVerdict,
-  typedKey: string | null,
-): BenchCell {
+function stopCell({ shape }: BenchColumn, { characteristic, requiredTo }: BenchStop, source: CellSource): BenchCell {
+  const { record, verdict, typedKey } = source;
   const { key } = characteristic;
-  const judged = verdict.characteristics.get(key) ?? { value: null, verdict: 'not judged' };
+  const judged = verdict.characteristics.get(key) ?? NOT_JUDGED;
   const counting = countingAt(record, key);
-  const refusal = refusedAt(record, key)?.refusal ?? null;
-  const text = valueText(characteristic, judged);
+  const refusal = refusedAt(record, key)?.refusal?.message ?? null;
+  const typed = key === typedKey;
+  const mark = markOf(characteristic, judged, typed ? undefined : counting, source.expected);
   return {
     key,
     shape,
-    text,
+    text: valueText(characteristic, judged),
     value: typeof judged.value === 'number' ? judged.value : null,
     look: lookOf(judged.verdict),
+    uncertainty: judged.expandedUncertainty ?? 0,
+    mark,
     unasked: record.unit > requiredTo,
     attempts: readingsAt(record, key).length,
-    typed: key === typedKey,
+    typed,
     waiting: counting?.state === 'waiting',
     refusal,
-    label: cellLabel(characteristic, judged, counting, refusal),
+    label: cellLabel(characteristic, judged, { waiting: counting?.state === 'waiting', refusal, mark }),
   };
+}
+
+function markOf(
+  characteristic: Characteristic,
+  { value }: CharacteristicVerdict,
+  counting: BenchReading | undefined,
+  expected: ExpectedBands | null,
+): CellMark | null {
+  if (counting !== undefined && isOpenQuestion(counting)) return { kind: 'question', words: 'waits for an answer' };
+  const found = plausibilityOf(characteristic, expected, { value, entry: null });
+  return found === null || found.state === 'inside' ? null : { kind: 'outside', words: 'outside the expected band' };
 }
 
 function valueText(characteristic: Characteristic, { value, verdict }: CharacteristicVerdict): string {
@@ -77,17 +103,21 @@ function valueText(characteristic: Characteristic, { value, verdict }: Character
 function cellLabel(
   characteristic: Characteristic,
   { value, verdict }: CharacteristicVerdict,
-  counting: BenchReading | undefined,
-  refusal: string | null,
+  { waiting, refusal, mark }: Pick<BenchCell, 'waiting' | 'refusal' | 'mark'>,
 ): string {
   if (refusal !== null) return `${characteristic.name}: refused. ${refusal}`;
   if (typeof value === 'boolean') return `${characteristic.name}: ${value ? 'pass' : 'fail'}`;
-  if (characteristic.kind === 'attribute' || verdict === 'not judged') return `${characteristic.name}: no reading`;
+  const unread = verdict === 'not judged' && value === null;
+  if (characteristic.kind === 'attribute' || unread) return `${characteristic.name}: no reading`;
   const { unit, decimals, lowerLimit, upperLimit } = characteristic;
-  const shown = value === null ? 'no value' : readingText(value, unit, decimals);
-  const limits = formatLimits(lowerLimit, upperLimit, unit, decimals);
-  const waiting = counting?.state === 'waiting' ? ', not sent yet' : '';
-  return `${characteristic.name}: ${shown}, ${limits}, ${LOOK_WORDS[lookOf(verdict)].toLowerCase()}${waiting}`;
+  const parts = [
+    value === null ? 'no value' : readingText(value, unit, decimals),
+    formatLimits(lowerLimit, upperLimit, unit, decimals),
+    verdict === 'conditional' ? 'conditional' : LOOK_WORDS[lookOf(verdict)].toLowerCase(),
+    mark?.words ?? '',
+    waiting ? 'not sent yet' : '',
+  ];
+  return `${characteristic.name}: ${parts.filter((part) => part !== '').join(', ')}`;
 }
 
 function mergedCell(column: BenchColumn, cells: readonly BenchCell[]): BenchCell {
@@ -101,6 +131,8 @@ function mergedCell(column: BenchColumn, cells: readonly BenchCell[]): BenchCell
     text,
     value: null,
     look: failing ? 'nok' : judged.length === asked.length && asked.length > 0 ? 'ok' : 'open',
+    uncertainty: 0,
+    mark: null,
     unasked: asked.length === 0,
     attempts: Math.max(...cells.map(({ attempts }) => attempts)),
     typed: cells.some(({ typed }) => typed),

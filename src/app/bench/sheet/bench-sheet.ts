@@ -1,8 +1,8 @@
 import { computed, inject, Injectable, linkedSignal, signal, untracked } from '@angular/core';
-import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
-import { Subject } from 'rxjs';
-import { type Bench, type ReadingBody } from '#shared/contract/bench';
+import { type Bench } from '#shared/contract/bench';
+import { type Instrument } from '#shared/contract/instruments';
 import { judgedCharacteristic } from '#shared/plan/judged-characteristic';
+import { type Component } from '#shared/uncertainty/component';
 import { judgeGroups } from '#shared/verdict/judge-groups';
 import { judgeLot } from '#shared/verdict/judge-lot';
 import { judgeUnit } from '#shared/verdict/judge-unit';
@@ -10,39 +10,48 @@ import { judgingRules } from '#shared/verdict/judging-rules';
 import { type LotVerdict, type UnitVerdict } from '#shared/verdict/sample-verdict';
 import { Session } from '../../session/session';
 import { type UnitState } from '../../ui/tally/tally-shapes';
-import { type BenchAct } from '../waiting/bench-act';
-import { ReadingQueue, type Settled } from '../waiting/reading-queue';
-import { keptReading, type ReadingValue } from './bench-reading';
-import { openRecords, withAct } from './open-records';
-import { judgedReadings, type UnitRecord, withoutReading, withReading } from './unit-record';
+import { ReadingQueue } from '../waiting/reading-queue';
+import { type ReadingValue } from './bench-reading';
+import { type Arrival, type BenchChanges, mergedRecords } from './merged-records';
+import { openRecords } from './open-records';
+import { ReadingBudgets } from './reading-budgets';
+import { judgedReadings, openQuestions, type UnitRecord, withTyped } from './unit-record';
+
+/** What of a lot changes while it is open, beside its records. */
+type LotState = Pick<Bench, 'lot' | 'version' | 'conditions' | 'instruments'>;
+
+/** What is typed, as far as a verdict needs it: the value, and its uncertainty budget where one is known. */
+export interface TypedWorth {
+  readonly value: ReadingValue;
+  readonly budget: readonly Component[] | undefined;
+}
 
 /** The sample of one lot as it is being measured: its units, their readings and the verdicts of both. */
 @Injectable()
 export class BenchSheet {
   private readonly queue = inject(ReadingQueue);
   private readonly session = inject(Session);
-  private readonly source = signal<Bench | null>(null);
-  private readonly staleness = new Subject<void>();
-  /** What was settled while a newer state of the lot is on its way, as that state may be from before; null at other times. */
-  private meanwhile: Settled[] | null = [];
-  /** Readings kept here, the last one at the end. */
-  private readonly trail = signal<readonly { unit: number; id: string }[]>([]);
+  /** The lot as it was read; what is judged by it stands until it is read again. */
+  private readonly read = signal<Bench | null>(null);
+  private readonly now = linkedSignal(() => this.read());
 
-  readonly bench = computed(() => {
-    const bench = this.source();
-    if (bench === null) throw new Error('No lot is open at the bench.');
-    return bench;
+  /** The lot as it is now. */
+  readonly bench = computed(() => opened(this.now()));
+  readonly opened = computed(() => this.read() !== null);
+  readonly rules = computed(() => {
+    const { characteristics, sampling, decisionRule: rule, coverageFactor } = opened(this.read());
+    return judgingRules(characteristics.map(judgedCharacteristic), sampling.groups, { rule, coverageFactor });
   });
-  readonly opened = computed(() => this.source() !== null);
-  readonly rules = computed(() =>
-    judgingRules(this.bench().characteristics.map(judgedCharacteristic), this.bench().sampling.groups),
-  );
+  readonly budgets = computed(() => new ReadingBudgets(opened(this.read())));
   private readonly known = computed(() => ({ rules: this.rules(), verdicts: new WeakMap<UnitRecord, UnitVerdict>() }));
 
   readonly records = linkedSignal<readonly UnitRecord[]>(() => {
-    const bench = this.bench();
-    const waiting = untracked(() => this.queue.entries()).filter(({ act }) => act.lotId === bench.lot.id);
-    return openRecords(bench, waiting, this.takenBy());
+    const bench = opened(this.read());
+    return openRecords(
+      bench,
+      untracked(() => this.waiting(bench)),
+      this.takenBy(),
+    );
   });
   readonly verdicts = computed(() => this.records().map((record) => this.verdictOf(record)));
   readonly groups = computed(() => judgeGroups(this.rules(), this.verdicts()));
@@ -58,19 +67,14 @@ export class BenchSheet {
     return typed.reduce((sum, count) => sum + count, 0);
   });
   readonly undecided = computed(() => this.verdicts().filter(({ verdict }) => verdict === 'undecided').length);
-  /** Emits when somebody else's work shows through, so that the lot should be read again. */
-  readonly stale = this.staleness.asObservable();
-
-  constructor() {
-    this.queue.settled.pipe(takeUntilDestroyed()).subscribe((settled) => this.settle(settled));
-  }
+  /** Readings of racks far from what the part can give, which nobody has confirmed or repeated yet. */
+  readonly openQuestions = computed(() =>
+    this.records().flatMap((record) => openQuestions(record).map((reading) => ({ unit: record.unit, reading }))),
+  );
 
   /** Opens a lot, or the same lot in a newer state. */
   open(bench: Bench): void {
-    this.source.set(bench);
-    const meanwhile = this.meanwhile ?? [];
-    this.meanwhile = null;
-    for (const settled of meanwhile) if (settled.act.lotId === bench.lot.id) this.apply(settled);
+    this.read.set(bench);
   }
 
   recordOf(unit: number): UnitRecord {
@@ -84,15 +88,15 @@ export class BenchSheet {
     const { rules, verdicts } = this.known();
     const known = verdicts.get(record);
     if (known !== undefined) return known;
-    const verdict = judgeUnit(rules, judgedReadings(record));
+    const verdict = judgeUnit(rules, judgedReadings(record, this.budgets()));
     verdicts.set(record, verdict);
     return verdict;
   }
 
   /** A unit's verdict as if one more reading were kept on it. */
-  verdictWith(record: UnitRecord, key: string, value: ReadingValue): UnitVerdict {
-    const readings = judgedReadings(record);
-    return judgeUnit(this.rules(), { ...readings, values: new Map(readings.values).set(key, value) });
+  verdictWith(record: UnitRecord, key: string, { value, budget }: TypedWorth): UnitVerdict {
+    const readings = judgedReadings(record, this.budgets());
+    return judgeUnit(this.rules(), withTyped(readings, key, value, budget));
   }
 
   /** The lot's verdict as if one unit's were another. */
@@ -101,71 +105,44 @@ export class BenchSheet {
     return judgeLot(this.rules(), verdicts, judgeGroups(this.rules(), verdicts));
   }
 
-  keep(body: ReadingBody): void {
-    const id = crypto.randomUUID();
-    this.trail.update((trail) => [...trail, { unit: body.unit, id }]);
-    this.act({ kind: 'reading', id, lotId: this.bench().lot.id, unit: body.unit, body });
+  /** Takes over what changed of the lot itself. */
+  take(changed: Partial<LotState>): void {
+    this.now.update((bench) => bench && { ...bench, ...changed });
   }
 
-  setAside(unit: number, reason: string | null): void {
-    this.act({ kind: 'set-aside', id: crypto.randomUUID(), lotId: this.bench().lot.id, unit, reason });
+  /** Takes over an instrument as it is after its check. */
+  takeInstrument(id: number, change: Partial<Instrument>): void {
+    const instruments = this.bench().instruments.map((each) => (each.id === id ? { ...each, ...change } : each));
+    this.take({ instruments });
   }
 
-  /** Takes the last reading kept here back; says which, or null where there is none. */
-  withdrawLast(): { unit: number; key: string } | null {
-    const last = this.trail().at(-1);
-    const reading = last && this.recordOf(last.unit).readings.find(({ id }) => id === last.id);
-    this.trail.update((trail) => trail.slice(0, -1));
-    if (last === undefined) return null;
-    if (reading === undefined || reading.withdrawn || reading.state === 'refused') return this.withdrawLast();
-    const lotId = this.bench().lot.id;
-    this.act({ kind: 'withdrawal', id: crypto.randomUUID(), lotId, unit: last.unit, readingId: last.id });
-    return { unit: last.unit, key: reading.characteristicKey };
+  /** Lays in what others did; what of it is new to this bench is returned. */
+  merge(changes: BenchChanges): Arrival[] {
+    const bench = this.bench();
+    const waiting = { acts: this.waiting(bench), bench, takenBy: this.takenBy() };
+    const { records, arrivals } = mergedRecords(this.records(), changes, waiting);
+    if (records.some((record, index) => record !== this.records()[index])) this.records.set(records);
+    return arrivals;
   }
 
-  /** Gives up a reading that the server refused. */
-  discardRefused(unit: number, readingId: string): void {
-    this.queue.discard(readingId);
-    this.replace(unit, (record) => withoutReading(record, readingId));
+  /** Replaces the records of some units. */
+  replace(units: ReadonlySet<number>, change: (record: UnitRecord) => UnitRecord): void {
+    this.records.update((records) => records.map((record) => (units.has(record.unit) ? change(record) : record)));
   }
 
-  private act(act: BenchAct): void {
-    this.queue.add(act);
-    this.replace(act.unit, (record) => withAct(record, act, this.bench(), { takenBy: this.takenBy(), refusal: null }));
-  }
-
-  private settle(settled: Settled): void {
-    this.meanwhile?.push(settled);
-    if (!this.opened() || settled.act.lotId !== this.bench().lot.id) return;
-    this.apply(settled);
-    const stopsElsewhere = settled.outcome === 'acknowledged' && settled.kept?.stop === true && !this.lot().stop;
-    if (settled.outcome === 'refused' || stopsElsewhere) this.readAgain();
-  }
-
-  private readAgain(): void {
-    this.meanwhile = [];
-    this.staleness.next();
-  }
-
-  private apply(settled: Settled): void {
-    const takenBy = this.takenBy();
-    const refusal = settled.outcome === 'refused' ? settled.refusal : null;
-    this.replace(settled.act.unit, (record) => {
-      if (settled.outcome === 'refused' || settled.kept === null)
-        return withAct(record, settled.act, this.bench(), { takenBy, refusal });
-      const kept = keptReading(settled.kept.reading);
-      const withdrawn = record.readings.some(({ id, withdrawn: taken }) => id === kept.id && taken);
-      return withReading(record, { ...kept, withdrawn: kept.withdrawn || withdrawn });
-    });
-  }
-
-  private takenBy(): string {
+  /** Who measures here, by name. */
+  takenBy(): string {
     return untracked(() => this.session.me()?.name ?? '');
   }
 
-  private replace(unit: number, change: (record: UnitRecord) => UnitRecord): void {
-    this.records.update((records) => records.map((record) => (record.unit === unit ? change(record) : record)));
+  private waiting({ lot }: Bench) {
+    return this.queue.entries().filter(({ act }) => act.lotId === lot.id);
   }
+}
+
+function opened(bench: Bench | null): Bench {
+  if (bench === null) throw new Error('No lot is open at the bench.');
+  return bench;
 }
 
 function isJudged(verdict: UnitVerdict): boolean {

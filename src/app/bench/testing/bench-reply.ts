@@ -1,4 +1,5 @@
 import { type Bench, type Reading } from '#shared/contract/bench';
+import { type InstrumentRange } from '#shared/contract/instruments';
 import { type Characteristic } from '#shared/contract/plans';
 
 const COMMON = { condition: '', method: '', caution: '', ownLevel: null, ownAql: null } as const;
@@ -106,6 +107,12 @@ export function readingOf(unit: number, characteristicKey: string, worth: number
   };
 }
 
+/** A multimeter's two ranges of direct voltage. */
+const RANGES: InstrumentRange[] = [
+  { id: 51, name: '20 V', fullScale: 20, resolution: 0.001 },
+  { id: 52, name: '200 V', fullScale: 200, resolution: 0.01 },
+].map((range) => ({ ...range, form: 'digital', unit: 'V', current: 'dc', ofReading: 0.0005, ofRange: 0, counts: 2 }));
+
 /** A lot of 40 on the bench, five units drawn, major Ac 0 Re 1, minor Ac 1 Re 2. */
 export function benchReply(given: Partial<Bench> = {}): Bench {
   return {
@@ -174,7 +181,7 @@ export function benchReply(given: Partial<Bench> = {}): Bench {
         calibrationDue: '2026-09-30',
         status: 'in-service',
         version: 1,
-        ranges: [],
+        ranges: RANGES,
         ...UNCHECKED,
         usable: true,
         daysLeft: 200,
@@ -189,7 +196,7 @@ export function benchReply(given: Partial<Bench> = {}): Bench {
         calibrationDue: '2026-02-21',
         status: 'in-service',
         version: 1,
-        ranges: [],
+        ranges: RANGES,
         ...UNCHECKED,
         usable: false,
         daysLeft: -19,

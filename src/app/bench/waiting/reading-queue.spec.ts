@@ -17,6 +17,8 @@ function act(unit: number): BenchAct & { kind: 'reading' } {
     characteristicKey: 'no_load',
     entry: { kind: 'direct', text: '17.2', decimalComma: false },
     instrumentId: 5,
+    rangeId: null,
+    question: null,
     note: '',
     repeat: null,
     takenAt: '2026-03-12T14:20:00.000Z',

@@ -1,10 +1,11 @@
 import { computed, effect, inject, Injectable, signal, untracked } from '@angular/core';
 import { firstValueFrom, type Observable, Subject, timeout } from 'rxjs';
-import { keepReading, type Kept, setUnitAside, withdrawReading } from '#shared/contract/bench';
+import { answerQuestion, keepReading, type Kept, setUnitAside, withdrawReading } from '#shared/contract/bench';
 import { ApiClient } from '../../data/api';
-import { problemOf } from '../../data/api-problem';
+import { type ApiProblem, problemOf } from '../../data/api-problem';
 import { Connection } from '../../data/connection';
 import { Session } from '../../session/session';
+import { type Refusal } from '../sheet/bench-reading';
 import { type BenchAct, type WaitingAct } from './bench-act';
 import { failureKind, retryPause } from './retry-pause';
 import { WaitingShelf } from './waiting-shelf';
@@ -12,7 +13,7 @@ import { WaitingShelf } from './waiting-shelf';
 /** What became of an act: acknowledged, with the server's verdict where it was a reading, or refused with its sentence. */
 export type Settled =
   | { readonly act: BenchAct; readonly outcome: 'acknowledged'; readonly kept: Kept | null }
-  | { readonly act: BenchAct; readonly outcome: 'refused'; readonly refusal: string };
+  | { readonly act: BenchAct; readonly outcome: 'refused'; readonly refusal: Refusal };
 
 /**
  * Readings on their way to the server. Each stays on this device until it is acknowledged; they are sent one after the other,
@@ -55,10 +56,15 @@ export class ReadingQueue {
 
   /** Takes an act over; from now on it is not lost. */
   add(act: BenchAct): void {
+    this.addAll([act]);
+  }
+
+  /** Takes acts over in their order. */
+  addAll(acts: readonly BenchAct[]): void {
     const personId = this.session.me()?.id;
     if (personId === undefined) throw new Error('Only a person who is signed in measures.');
-    const order = Math.max(0, ...this.all().map((each) => each.order)) + 1;
-    this.put({ act, personId, order, refusal: null });
+    const first = (this.all().at(-1)?.order ?? 0) + 1;
+    this.put(...acts.map((act, index) => ({ act, personId, order: first + index, refusal: null })));
     void this.send();
   }
 
@@ -114,7 +120,7 @@ export class ReadingQueue {
       const problem = problemOf(thrown);
       const kind = failureKind(problem);
       if (kind === 'refused') {
-        this.refuse(waiting, problem.message);
+        this.refuse(waiting, problem);
         return true;
       }
       this.failures += 1;
@@ -125,17 +131,19 @@ export class ReadingQueue {
   }
 
   private async call(act: BenchAct): Promise<Kept | null> {
-    if (act.kind === 'reading') {
-      const params = { id: act.lotId, reading: act.id };
-      return answered(this.api.call(keepReading, { params, body: act.body }));
-    }
     const params = { id: act.lotId };
-    const done =
-      act.kind === 'withdrawal'
-        ? this.api.call(withdrawReading, { params: { ...params, reading: act.readingId } })
-        : this.api.call(setUnitAside, { params: { ...params, unit: act.unit }, body: { reason: act.reason } });
-    await answered(done);
-    return null;
+    switch (act.kind) {
+      case 'reading':
+        return answered(this.api.call(keepReading, { params: { ...params, reading: act.id }, body: act.body }));
+      case 'withdrawal':
+        return done(this.api.call(withdrawReading, { params: { ...params, reading: act.readingId } }));
+      case 'answer':
+        return done(this.api.call(answerQuestion, { params: { ...params, reading: act.readingId }, body: act.answer }));
+      case 'set-aside':
+        return done(
+          this.api.call(setUnitAside, { params: { ...params, unit: act.unit }, body: { reason: act.reason } }),
+        );
+    }
   }
 
   private acknowledge(act: BenchAct, kept: Kept | null): void {
@@ -146,19 +154,19 @@ export class ReadingQueue {
     this.settling.next({ act, outcome: 'acknowledged', kept });
   }
 
-  private refuse(waiting: WaitingAct, refusal: string): void {
+  private refuse(waiting: WaitingAct, { code, message }: ApiProblem): void {
     this.failing.set(false);
-    this.put({ ...waiting, refusal });
-    this.settling.next({ act: waiting.act, outcome: 'refused', refusal });
+    this.put({ ...waiting, refusal: message, code });
+    this.settling.next({ act: waiting.act, outcome: 'refused', refusal: { code, message } });
   }
 
-  private put(waiting: WaitingAct): void {
-    const { id } = waiting.act;
-    const stored = this.shelf.write(waiting);
-    this.unstored.update((ids) => new Set([...ids].filter((each) => each !== id).concat(stored ? [] : [id])));
+  private put(...waiting: readonly WaitingAct[]): void {
+    const ids = new Set(waiting.map(({ act }) => act.id));
+    const lost = waiting.filter((each) => !this.shelf.write(each)).map(({ act }) => act.id);
+    this.unstored.update((known) => new Set([...known].filter((each) => !ids.has(each)).concat(lost)));
     this.all.update((all) => {
-      const others = all.filter((each) => each.act.id !== id);
-      return [...others, waiting].sort((one, other) => one.order - other.order);
+      const others = all.filter(({ act }) => !ids.has(act.id));
+      return [...others, ...waiting].sort((one, other) => one.order - other.order);
     });
   }
 }
@@ -168,6 +176,11 @@ const PATIENCE = 20_000;
 
 function answered<T>(call: Observable<T>): Promise<T> {
   return firstValueFrom(call.pipe(timeout(PATIENCE)));
+}
+
+async function done(call: Observable<unknown>): Promise<null> {
+  await answered(call);
+  return null;
 }
 
 function unitOf(act: BenchAct): string {

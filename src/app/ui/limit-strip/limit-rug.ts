@@ -67,6 +67,7 @@ export class LimitRug {
       scale: this.scale(),
       value: null,
       uncertainty: 0,
+      guard: 0,
       width: WIDTH,
       margin: 0,
       leastGuard: 0,

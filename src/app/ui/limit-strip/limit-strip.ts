@@ -28,8 +28,10 @@ export class LimitStrip {
   readonly verdict = input<VerdictLook>('open');
   readonly unit = input('');
   readonly decimals = input(2);
-  /** Expanded uncertainty: the guard band's width and the whisker's half-length. */
+  /** Expanded uncertainty: the whisker's half-length. */
   readonly uncertainty = input(0);
+  /** Width of the guard bands; the uncertainty unless given, none under simple acceptance. */
+  readonly guard = input<number>();
   readonly scaleMin = input<number>();
   readonly scaleMax = input<number>();
   /** Lowest and highest value the part's rectifier can give; shown in a panel. */
@@ -42,6 +44,7 @@ export class LimitStrip {
   protected readonly hatch = `qr-hatch-${++strips}`;
   protected readonly full = computed(() => (this.size() === 'cell' ? this.width() : Math.max(this.measured(), 200)));
   private readonly limits = computed(() => ({ lower: this.lower(), upper: this.upper() }));
+  private readonly guardWidth = computed(() => this.guard() ?? this.uncertainty());
   private readonly scale = computed(() => stripScale(this.limits(), { min: this.scaleMin(), max: this.scaleMax() }));
 
   protected readonly drawn = computed(() =>
@@ -50,9 +53,10 @@ export class LimitStrip {
       scale: this.scale(),
       value: this.value(),
       uncertainty: this.uncertainty(),
+      guard: this.guardWidth(),
       width: this.full(),
       margin: this.size() === 'cell' ? 3 : 9,
-      leastGuard: this.size() === 'cell' && this.uncertainty() > 0 ? 1.6 : 0,
+      leastGuard: this.size() === 'cell' && this.guardWidth() > 0 ? 1.6 : 0,
     }),
   );
 

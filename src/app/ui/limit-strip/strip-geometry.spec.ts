@@ -7,6 +7,7 @@ function strip(limits: { lower: number | null; upper: number | null }, value: nu
     scale: stripScale(limits),
     value,
     uncertainty,
+    guard: uncertainty,
     width: 120,
     margin: 3,
     leastGuard: 0,

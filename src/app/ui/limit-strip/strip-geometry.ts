@@ -25,7 +25,10 @@ export function stripGeometry(strip: {
   limits: Limits;
   scale: Scale;
   value: number | null;
+  /** Half-length of the whisker. */
   uncertainty: number;
+  /** Width of the guard bands. */
+  guard: number;
   width: number;
   margin: number;
   leastGuard: number;
@@ -35,7 +38,7 @@ export function stripGeometry(strip: {
   const at = (quantity: number) => (quantity - scale.min) * pxPerUnit;
   const start = limits.lower === null ? 0 : clamp(at(limits.lower), 0, width);
   const end = limits.upper === null ? width : clamp(at(limits.upper), 0, width);
-  const guard = Math.min(Math.max(uncertainty * pxPerUnit, strip.leastGuard), (end - start) / 2);
+  const guard = Math.min(Math.max(strip.guard * pxPerUnit, strip.leastGuard), (end - start) / 2);
   const acceptStart = start + (limits.lower === null ? 0 : guard);
   const acceptEnd = end - (limits.upper === null ? 0 : guard);
   const reading = value === null ? null : at(value);

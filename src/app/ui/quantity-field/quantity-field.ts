@@ -24,6 +24,7 @@ import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { inDisplayUnit } from '#shared/quantities/display-unit';
 import { parseReading } from '#shared/quantities/parse-reading';
+import { DECIMAL_COMMA } from '../values/decimal-comma';
 import { FieldErrorPipe } from '../values/field-error-pipe';
 
 /**
@@ -54,7 +55,8 @@ export class QuantityField implements ControlValueAccessor, Validator {
   readonly unit = input.required<string>();
   readonly hint = input('');
   readonly placeholder = input('');
-  readonly decimalComma = input(false);
+  /** Whether the comma is the decimal sign; as people write at this browser unless given. */
+  readonly decimalComma = input(DECIMAL_COMMA);
 
   protected readonly errors = signal<ValidationErrors | null>(null);
   protected readonly text = new FormControl('', { nonNullable: true, validators: () => this.errors() });

@@ -1,50 +1,66 @@
+import { type ExpectedBand, plausibility, type Slip, slipAdvice } from '#shared/measurement/plausibility';
 import { formatQuantity } from '#shared/quantities/format-quantity';
 import { type VerdictLook } from '../verdict-look';
-import { type ScopeText } from './scope-text';
+import { type ScopeCure, scopeCure } from './scope-cure';
+import { type ScopeOutcome, type ScopeText } from './scope-text';
 
 /** What the part's rectifier says about a reading. It never changes a verdict. */
 export interface ScopeAdvice {
   readonly look: VerdictLook;
   readonly title: string;
   readonly text: string;
-  /** The entry with the likeliest slip mended, and what mends it. */
-  readonly cure?: { readonly entry: ScopeText; readonly words: string };
+  /** The likeliest slip mended; null where nothing in the settings would mend it. */
+  readonly cure: ScopeCure | null;
+  /** Whether the reading is to be corrected or confirmed before it is kept. */
+  readonly questioned: boolean;
 }
 
-type Band = readonly [number, number];
+type Read = Extract<ScopeOutcome, { kind: 'read' }>;
 
-/** Compares a reading with the expected band, in volts; a slip by ten is named with its cure. */
-export function scopeAdvice(volts: number, entry: ScopeText, expected: Band, model: string): ScopeAdvice {
-  if (within(volts, expected)) return { look: 'ok', title: 'Agrees with the rectifier model.', text: model };
-  if (within(volts / 10, expected)) return slip(entry, 0.1, 'Ten times the expected ripple.');
-  if (within(volts * 10, expected)) return slip(entry, 10, 'A tenth of the expected ripple.');
-  const [low, high] = expected;
-  const factor = volts < low ? low / volts : volts / high;
-  const times = Number.isFinite(factor) ? `${factor.toPrecision(2)} times ` : '';
-  return {
-    look: 'hold',
-    title: `${times}${volts < low ? 'less' : 'more'} than the model.`,
-    text: `Not a factor of ten. Expected ${bandWords(expected)}. Check the load.`,
-  };
+const MORE = new Map([
+  [10, 'Ten times'],
+  [100, 'A hundred times'],
+  [1000, 'A thousand times'],
+]);
+const LESS = new Map([
+  [10, 'A tenth of'],
+  [100, 'A hundredth of'],
+  [1000, 'A thousandth of'],
+]);
+
+/** Compares a reading with the expected band, in volts, and names the likeliest slip with its cure. */
+export function scopeAdvice(read: Read, text: ScopeText, band: ExpectedBand): ScopeAdvice {
+  const found = plausibility(read.volts, band, { scope: read.entry });
+  if (found.state === 'inside') {
+    const agrees = { title: 'Agrees with the rectifier model.', text: `Expected ${bandWords(band)}.` };
+    return { look: 'ok', ...agrees, cure: null, questioned: false };
+  }
+  const cure = scopeCure(read, text, band, found.slip);
+  const questioned = found.state === 'question';
+  const advice = adviceWords(band, found.slip, cure);
+  return { look: questioned ? 'hold' : 'open', title: titleOf(found), text: advice, cure, questioned };
 }
 
-function slip(entry: ScopeText, change: number, title: string): ScopeAdvice {
-  const mended = Number((Number(entry.probeFactor) * change).toPrecision(6));
-  const text = 'Look at the switch on the probe.';
-  if (!(mended >= 1)) return { look: 'hold', title, text };
-  return {
-    look: 'hold',
-    title,
-    text,
-    cure: { entry: { ...entry, probeFactor: String(mended) }, words: `Use × ${mended}` },
-  };
+function titleOf({ slip, ratio }: { slip: Slip | null; ratio: number }): string {
+  const size = (factor: number) => (factor > 1 ? factor : 1 / factor);
+  if (slip?.kind === 'factor') {
+    const words = (slip.factor > 1 ? MORE : LESS).get(Math.round(size(slip.factor))) ?? '';
+    return `${words} what the model gives.`;
+  }
+  if (!(ratio > 0)) return 'Not what the model gives.';
+  const times = size(ratio) < 1.05 ? 'A little' : `${formatQuantity(size(ratio), '', { significant: 2 })} times`;
+  return `${times} ${ratio > 1 ? 'more' : 'less'} than the model.`;
 }
 
-function within(volts: number, [low, high]: Band): boolean {
-  return volts >= low && volts <= high;
+function adviceWords(band: ExpectedBand, slip: Slip | null, cure: ScopeCure | null): string {
+  const expected = bandWords(band);
+  if (slip === null) return `Expected ${expected}. Look at the load, the connection and the scale.`;
+  if (cure === null) return `Expected ${expected}. ${slipAdvice(slip)}`;
+  const mended = formatQuantity(cure.volts, 'V', { significant: 3 });
+  return `With ${cure.setting} it reads ${mended}, inside ${expected}. ${slipAdvice(slip)}`;
 }
 
-function bandWords([low, high]: Band): string {
+function bandWords({ low, high }: ExpectedBand): string {
   const digits = { significant: 2 };
   return `${formatQuantity(low, 'V', digits)} to ${formatQuantity(high, 'V', digits)}`;
 }

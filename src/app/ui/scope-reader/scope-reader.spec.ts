@@ -1,9 +1,17 @@
 import { inputBinding, outputBinding, signal, twoWayBinding } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
+import { type ExpectedBand } from '#shared/measurement/plausibility';
+import { type AlternatePeaks } from '#shared/measurement/scope-reading';
 import { ScopeReader } from './scope-reader';
 import { EMPTY_SCOPE, type ScopeOutcome, type ScopeText } from './scope-text';
 
-function setUp(entry: Partial<ScopeText> = {}, expected: readonly [number, number] | null = null) {
+const BAND: ExpectedBand = { low: 1.5, high: 2.3 };
+
+function setUp(
+  entry: Partial<ScopeText> = {},
+  given: { expected?: ExpectedBand; alternatePeaks?: AlternatePeaks } = {},
+) {
+  const { expected = null, alternatePeaks = 'worst' } = given;
   const text = signal<ScopeText>({ ...EMPTY_SCOPE, ...entry });
   const outcomes: ScopeOutcome[] = [];
   let kept = 0;
@@ -11,7 +19,8 @@ function setUp(entry: Partial<ScopeText> = {}, expected: readonly [number, numbe
     bindings: [
       twoWayBinding('entry', text),
       inputBinding('expected', () => expected),
-      inputBinding('model', () => (expected === null ? 'No rectifier model for this part.' : 'Expected 1.5 to 2.3 V.')),
+      inputBinding('alternatePeaks', () => alternatePeaks),
+      inputBinding('model', () => 'No rectifier model for this part.'),
       outputBinding<ScopeOutcome>('read', (outcome) => outcomes.push(outcome)),
       outputBinding('kept', () => (kept += 1)),
     ],
@@ -25,8 +34,12 @@ function setUp(entry: Partial<ScopeText> = {}, expected: readonly [number, numbe
     box.dispatchEvent(new Event('input'));
     await fixture.whenStable();
   };
+  const press = async (key: string) => {
+    boxes()[0]?.dispatchEvent(new KeyboardEvent('keydown', { key, bubbles: true }));
+    await fixture.whenStable();
+  };
   const result = () => element.querySelector('.result b')?.textContent;
-  return { fixture, element, text, outcomes, boxes, type, result, kept: () => kept };
+  return { fixture, element, text, outcomes, boxes, type, press, result, kept: () => kept };
 }
 
 describe('ScopeReader', () => {
@@ -75,21 +88,48 @@ describe('ScopeReader', () => {
   });
 
   it('names a slip by ten and mends it with F2', async () => {
-    const reader = setUp({ divisions: '9.5', voltsPerDivision: '0.2', probeFactor: '10' }, [1.5, 2.3]);
+    const reader = setUp({ divisions: '9.5', voltsPerDivision: '0.2', probeFactor: '10' }, { expected: BAND });
     await reader.fixture.whenStable();
-    expect(reader.element.textContent).toContain('Ten times the expected ripple.');
-    reader.boxes()[0]?.dispatchEvent(new KeyboardEvent('keydown', { key: 'F2', bubbles: true }));
-    await reader.fixture.whenStable();
+    expect(reader.element.textContent).toContain('Ten times what the model gives.');
+    expect(reader.element.textContent).toContain('Look at the switch on the probe.');
+    await reader.press('F2');
     expect(reader.text().probeFactor).toBe('1');
     expect(reader.result()).toBe('1.90');
     expect(reader.element.textContent).toContain('Agrees with the rectifier model.');
   });
 
-  it('offers no cure where the factor is not ten', async () => {
-    const reader = setUp({ divisions: '2.1', voltsPerDivision: '0.2' }, [1.5, 2.3]);
+  it('mends a slip by a thousand at the prefix of the scale', async () => {
+    const reader = setUp({ divisions: '9.5', voltsPerDivision: '200' }, { expected: BAND });
     await reader.fixture.whenStable();
-    expect(reader.element.textContent).toContain('3.6 times less than the model.');
+    await reader.press('F2');
+    expect(reader.text().voltsPerDivision).toBe('0.2');
+  });
+
+  it('mends a neighbouring step of the scale, and only to a step that scales have', async () => {
+    const reader = setUp({ divisions: '9.5', voltsPerDivision: '0.5' }, { expected: BAND });
+    await reader.fixture.whenStable();
+    await reader.press('F2');
+    expect(reader.text().voltsPerDivision).toBe('0.2');
+    expect(reader.result()).toBe('1.90');
+  });
+
+  it('offers no cure where no slip would explain the value', async () => {
+    const reader = setUp({ divisions: '1.4', voltsPerDivision: '0.05' }, { expected: { low: 1.9, high: 2.1 } });
+    await reader.fixture.whenStable();
+    expect(reader.element.textContent).toContain('27 times less than the model.');
     expect(reader.element.querySelector('button.link')).toBeNull();
+  });
+
+  it('lets the higher of two alternate peaks count, or their mean, as the plan says', async () => {
+    const peaks = { form: 'alternate', higherDivisions: '4', lowerDivisions: '3', voltsPerDivision: '0.5' } as const;
+    const worst = setUp(peaks);
+    await worst.fixture.whenStable();
+    expect(worst.result()).toBe('2.00');
+    expect(worst.element.textContent).toContain('The higher peak counts.');
+    const mean = setUp(peaks, { alternatePeaks: 'mean' });
+    await mean.fixture.whenStable();
+    expect(mean.result()).toBe('1.75');
+    expect(mean.element.textContent).toContain('The mean of both peaks counts.');
   });
 
   it('keeps with Enter from any field', async () => {

@@ -1,34 +1,15 @@
 import { ChangeDetectionStrategy, Component, computed, ElementRef, inject, input, model, output } from '@angular/core';
 import { displayUnit } from '#shared/quantities/display-unit';
-import { type Coupling, type ScopeQuantity } from '#shared/measurement/scope-reading';
+import { type ExpectedBand } from '#shared/measurement/plausibility';
+import { type AlternatePeaks, type Coupling, type ScopeQuantity } from '#shared/measurement/scope-reading';
 import { Segmented } from '../segmented';
 import { MessageNote } from '../states/message-note';
-import { readingDigits, readingText } from '../values/reading-text';
+import { DECIMAL_COMMA } from '../values/decimal-comma';
+import { readingDigits } from '../values/reading-text';
 import { scopeAdvice } from './scope-advice';
+import { countsWords, scopeFields } from './scope-fields';
 import { ScopeRuler } from './scope-ruler';
 import { type ScopeOutcome, readScopeText, type ScopeText, type ScopeTextField } from './scope-text';
-
-interface ScopeFieldShown {
-  readonly field: ScopeTextField;
-  readonly label: string;
-  readonly before: '' | '+' | '×';
-  readonly prefix: string;
-  readonly suffix: string;
-}
-
-const SETTINGS: readonly ScopeFieldShown[] = [
-  { field: 'voltsPerDivision', label: 'Scale', before: '×', prefix: '', suffix: 'V/div' },
-  { field: 'probeFactor', label: 'Probe', before: '×', prefix: '×', suffix: '' },
-];
-const WHOLE: readonly ScopeFieldShown[] = [
-  { field: 'divisions', label: 'Wave height', before: '', prefix: '', suffix: 'div' },
-  ...SETTINGS,
-];
-const HALVES: readonly ScopeFieldShown[] = [
-  { field: 'upperDivisions', label: 'Upper, div', before: '', prefix: '', suffix: '' },
-  { field: 'lowerDivisions', label: 'Lower, div', before: '+', prefix: '', suffix: '' },
-  ...SETTINGS,
-];
 
 /**
  * Reads a wave off an oscilloscope: height in divisions, times the scale, times the probe, in the order of the formula.
@@ -50,29 +31,45 @@ export class ScopeReader {
   readonly unit = input('V p-p');
   readonly decimals = input(2);
   readonly quantity = input<ScopeQuantity>('ripple');
-  readonly expected = input<readonly [number, number] | null>(null);
-  /** What the expected band rests on, or why there is none: "No rectifier model for this part." */
+  /** Which of two alternate peaks counts. */
+  readonly alternatePeaks = input<AlternatePeaks>('worst');
+  readonly decimalComma = input(DECIMAL_COMMA);
+  readonly expected = input<ExpectedBand | null>(null);
+  /** Why there is no expected band: "No rectifier model for this part." */
   readonly model = input('');
-  /** Expanded uncertainty of the reading in volts, and what it consists of. */
-  readonly uncertainty = input<{ readonly halfWidth: number; readonly reason: string } | null>(null);
+  /** The step to which the graticule is read, in divisions; null where the range is not known. */
+  readonly step = input<number | null>(null);
+  /** U of the reading as it is written, and what it consists of. */
+  readonly uncertainty = input<{ readonly text: string; readonly reason: string } | null>(null);
+  /** Whether the advice stands elsewhere, as a question to be answered. */
+  readonly asked = input(false);
 
   /** What the fields amount to, after every change. */
   readonly read = output<ScopeOutcome>();
+  /** The offered correction is taken; comes before the fields change. */
+  readonly cured = output();
   /** Enter and Escape in a field. */
   readonly kept = output();
   readonly left = output();
 
   protected readonly forms = [
-    { value: 'whole', label: 'One whole wave' },
+    { value: 'whole', label: 'One wave' },
     { value: 'halves', label: 'Two halves' },
+    { value: 'alternate', label: 'Alternate peaks' },
   ] as const;
   protected readonly couplings: readonly { value: Coupling; label: string }[] = [
     { value: 'ac', label: 'AC' },
     { value: 'dc', label: 'DC' },
   ];
 
-  protected readonly fields = computed(() => (this.entry().form === 'whole' ? WHOLE : HALVES));
-  private readonly outcome = computed(() => readScopeText(this.entry(), this.quantity()));
+  protected readonly fields = computed(() => scopeFields(this.entry().form, this.alternatePeaks()));
+  private readonly outcome = computed(() =>
+    readScopeText(this.entry(), {
+      quantity: this.quantity(),
+      alternatePeaks: this.alternatePeaks(),
+      decimalComma: this.decimalComma(),
+    }),
+  );
   protected readonly volts = computed(() => {
     const outcome = this.outcome();
     return outcome.kind === 'read' ? outcome.volts : null;
@@ -84,16 +81,16 @@ export class ScopeReader {
   protected readonly digits = computed(() => readingDigits(this.volts() ?? 0, this.unit(), this.decimals()));
   protected readonly unitLabel = computed(() => displayUnit(this.unit()).label);
   protected readonly advice = computed(() => {
-    const [volts, expected] = [this.volts(), this.expected()];
-    return volts === null || expected === null ? null : scopeAdvice(volts, this.entry(), expected, this.model());
+    const [outcome, expected] = [this.outcome(), this.expected()];
+    return outcome.kind !== 'read' || expected === null ? null : scopeAdvice(outcome, this.entry(), expected);
   });
-  protected readonly spread = computed(() => {
-    const uncertainty = this.uncertainty();
-    if (uncertainty === null || this.volts() === null) return null;
-    return {
-      text: `± ${readingText(uncertainty.halfWidth, this.unit(), this.decimals())}`,
-      reason: uncertainty.reason,
-    };
+  protected readonly shown = computed(() => (this.asked() ? null : this.advice()));
+  /** How the heights are read: which peak counts, and to what step. */
+  protected readonly how = computed(() => {
+    const step = this.step();
+    const parts = [countsWords(this.entry().form, this.alternatePeaks())];
+    if (step !== null) parts.push(`Read to ${step} of a division.`);
+    return parts.filter((part) => part !== '').join(' ');
   });
 
   /** Puts the cursor into the first field; text replaces what stands there, as when a digit was typed in the grid. */
@@ -128,10 +125,11 @@ export class ScopeReader {
   }
 
   protected applyCure(event?: Event): void {
-    const cure = this.advice()?.cure;
-    if (cure === undefined) return;
+    const cure = this.advice()?.cure ?? null;
+    if (cure === null) return;
     event?.preventDefault();
     event?.stopPropagation();
+    this.cured.emit();
     this.change(cure.entry);
   }
 }

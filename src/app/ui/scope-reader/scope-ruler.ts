@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { type ExpectedBand } from '#shared/measurement/plausibility';
 import { elementWidth } from '../element-width';
 
 /** The ruler runs from 10 mV to 100 V. */
@@ -28,7 +29,7 @@ const GHOSTS = [
 })
 export class ScopeRuler {
   readonly volts = input.required<number | null>();
-  readonly expected = input<readonly [number, number] | null>(null);
+  readonly expected = input<ExpectedBand | null>(null);
 
   protected readonly width = elementWidth(352);
 
@@ -50,8 +51,9 @@ export class ScopeRuler {
   protected readonly box = computed(() => {
     const expected = this.expected();
     if (expected === null) return null;
-    const [x, end] = expected.map((volts) => this.at(volts));
-    return x === undefined || end === undefined ? null : { x, width: end - x };
+    const x = this.at(expected.low);
+    // A band narrower than a pixel or two is still a place on the ruler.
+    return { x, width: Math.max(this.at(expected.high) - x, 2) };
   });
 
   protected readonly tick = computed(() => {
@@ -73,7 +75,7 @@ export class ScopeRuler {
 
   private inBand(volts: number): boolean {
     const expected = this.expected();
-    return expected === null || (volts >= expected[0] && volts <= expected[1]);
+    return expected === null || (volts >= expected.low && volts <= expected.high);
   }
 
   private at(volts: number): number {

@@ -5,6 +5,7 @@ import { type ReadingBody } from '#shared/contract/bench';
 import { AskReason } from '../../../shell/reason-dialog/ask-reason';
 import { KeysDialog } from '../../../shell/keys-dialog/keys-dialog';
 import { Confirm } from '../../../ui/confirm/confirm';
+import { BenchActs } from '../../sheet/bench-acts';
 import { BenchCursor } from '../../sheet/bench-cursor';
 import { BenchSheet } from '../../sheet/bench-sheet';
 import { NoteDialog, type NoteQuestion } from './note-dialog';
@@ -20,6 +21,7 @@ export class BenchQuestions {
   private readonly confirm = inject(Confirm);
   private readonly askReason = inject(AskReason);
   private readonly sheet = inject(BenchSheet);
+  private readonly acts = inject(BenchActs);
   private readonly cursor = inject(BenchCursor);
 
   /** Whether a question waits for its answer; the keys are not the grid's then. */
@@ -47,13 +49,13 @@ export class BenchQuestions {
         text: [`It was set aside: ${setAside}.`, 'It is judged by its readings again.'],
         confirm: 'Take back',
       };
-      return this.confirm.ask(question).pipe(map((yes) => yes && this.sheet.setAside(unit, null)));
+      return this.confirm.ask(question).pipe(map((yes) => yes && this.acts.setAside(unit, null)));
     }
     return this.askReason.ask({
       title: `Set unit ${unit} aside?`,
       text: ['It is undecided until quality rules on it; unresolved it counts as nonconforming.'],
       confirm: 'Set aside',
-      take: (reason) => of(this.sheet.setAside(unit, reason)),
+      take: (reason) => of(this.acts.setAside(unit, reason)),
     });
   }
 

@@ -5,15 +5,13 @@ import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { formFieldDefaults } from '../../../ui/material-defaults';
 import { type ReadingBody, REPEAT_REASON_TITLES, REPEAT_REASONS } from '#shared/contract/bench';
+import { StillTyping } from './still-typing';
 
 /** What is repeated: "Unit 48, ripple at 500 mA", and what stands there now. */
 export interface RepeatQuestion {
   readonly what: string;
   readonly standing: string;
 }
-
-/** No key for so long, in ms, ends what was being typed when the dialog opened. */
-const PAUSE = 400;
 
 type Repeat = NonNullable<ReadingBody['repeat']>;
 
@@ -29,9 +27,7 @@ type Repeat = NonNullable<ReadingBody['repeat']>;
 })
 export class RepeatDialog {
   private readonly dialog = inject<MatDialogRef<RepeatDialog, Repeat>>(MatDialogRef);
-
-  private lastKey = performance.now();
-  private seen = false;
+  private readonly typing = new StillTyping();
 
   protected readonly question = inject<RepeatQuestion>(MAT_DIALOG_DATA);
   protected readonly reasons = REPEAT_REASONS.map((value) => ({ value, title: REPEAT_REASON_TITLES[value] }));
@@ -52,7 +48,7 @@ export class RepeatDialog {
   }
 
   protected press(event: KeyboardEvent): void {
-    if (this.isStillTyping(event)) {
+    if (this.typing.isMeant(event)) {
       event.preventDefault();
       return;
     }
@@ -61,17 +57,5 @@ export class RepeatDialog {
     if (inNote || chosen === undefined) return;
     event.preventDefault();
     this.reason.set(chosen.value);
-  }
-
-  /**
-   * Somebody who types over a kept reading without looking goes on typing after the first digit; those keys are meant for
-   * the reading and choose nothing here. Only a pause shows that the dialog was seen.
-   */
-  private isStillTyping({ key }: KeyboardEvent): boolean {
-    const now = performance.now();
-    const paused = now - this.lastKey >= PAUSE;
-    this.lastKey = now;
-    this.seen ||= paused || key === 'Escape' || key === 'Tab';
-    return !this.seen;
   }
 }

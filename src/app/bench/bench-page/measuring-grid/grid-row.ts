@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { type ExpectedBands } from '#shared/contract/parts';
 import { type UnitVerdict } from '#shared/verdict/sample-verdict';
 import { LimitStrip } from '../../../ui/limit-strip/limit-strip';
 import { VerdictMark } from '../../../ui/marks/verdict-mark';
@@ -28,26 +29,43 @@ export class GridRow {
   readonly typedKey = input<string | null>(null);
   /** Whether the next Enter keeps a nonconforming reading. */
   readonly armed = input(false);
+  /** What the part can give, for the marks of what lies outside of it. */
+  readonly expected = input<ExpectedBands | null>(null);
+  /** Who has just filled a cell of this unit, by characteristic: initials. */
+  readonly fresh = input<ReadonlyMap<string, string> | null>(null);
   readonly chosen = output<string>();
 
+  private readonly source = computed(() => ({
+    record: this.record(),
+    verdict: this.verdict(),
+    typedKey: this.typedKey(),
+    expected: this.expected(),
+  }));
   protected readonly cells = computed(() =>
     this.columns().map((column) => {
-      const cell = benchCell(column, this.record(), this.verdict(), this.typedKey());
+      const cell = benchCell(column, this.source());
       const stop = column.stops.find(({ characteristic }) => characteristic.key === this.focusKey());
       return {
         ...cell,
         column,
         focused: stop !== undefined,
         computed: column.stops.every(({ typed }) => !typed),
+        fresh: this.freshOf(column),
         ...limitsOf(column),
       };
     }),
   );
   protected readonly look = computed(() => lookOf(this.verdict().verdict));
   protected readonly word = computed(() => {
-    const { setAside } = this.record();
+    const { setAside, ruling } = this.record();
+    if (ruling !== null) return `Ruled ${ruling.ruling} by ${ruling.by}: ${ruling.reason}`;
     return setAside === null ? LOOK_WORDS[this.look()] : `Set aside: ${setAside}`;
   });
+
+  private freshOf({ stops }: BenchColumn): string {
+    const fresh = this.fresh();
+    return stops.map(({ characteristic }) => fresh?.get(characteristic.key) ?? '').find((by) => by !== '') ?? '';
+  }
 
   /** A click lands on the characteristic in focus, or on the first of a shared column. */
   protected choose(column: BenchColumn): void {

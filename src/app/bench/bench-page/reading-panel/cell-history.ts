@@ -2,11 +2,16 @@ import { ChangeDetectionStrategy, Component, computed, inject, input } from '@an
 import { REPEAT_REASON_TITLES } from '#shared/contract/bench';
 import { type Characteristic } from '#shared/contract/plans';
 import { MomentPipe } from '../../../ui/values/moment-pipe';
+import { uncertaintyText } from '../../../ui/values/uncertainty-text';
 import { type BenchReading } from '../../sheet/bench-reading';
 import { BenchSheet } from '../../sheet/bench-sheet';
+import { rangeById } from '../../sheet/reading-range';
 import { readingWords } from '../../sheet/reading-words';
+import { WarmUp } from '../warm-up';
+import { answerWords } from './answer-words';
+import { entryWords } from './entry-words';
 
-/** The readings of one cell, each with who took it, when and with what; repeats with their reason. */
+/** The readings of one cell, each as it was typed, with who took it, when and with what; repeats with their reason. */
 @Component({
   selector: 'qr-cell-history',
   imports: [MomentPipe],
@@ -16,8 +21,8 @@ import { readingWords } from '../../sheet/reading-words';
         <span class="num">{{ line.value }}</span>
         <span>
           {{ line.takenAt | moment }}{{ line.by }}
-          @if (line.why) {
-            <span class="why">{{ line.why }}</span>
+          @for (why of line.why; track $index) {
+            <span class="why">{{ why }}</span>
           }
         </span>
       </li>
@@ -37,6 +42,7 @@ import { readingWords } from '../../sheet/reading-words';
       list-style: none;
     }
     .num {
+      flex: none;
       color: var(--qr-ink);
     }
     .gone .num {
@@ -53,6 +59,7 @@ import { readingWords } from '../../sheet/reading-words';
 })
 export class CellHistory {
   private readonly sheet = inject(BenchSheet);
+  private readonly warmUp = inject(WarmUp);
 
   readonly readings = input.required<readonly BenchReading[]>();
   readonly characteristic = input.required<Characteristic>();
@@ -68,16 +75,37 @@ export class CellHistory {
     })),
   );
 
-  private byWhom({ takenBy, instrumentId, state, withdrawn }: BenchReading): string {
-    const instrument = this.sheet.bench().instruments.find(({ id }) => id === instrumentId);
-    const parts = [takenBy ?? 'rack', instrument?.assetNumber, state === 'waiting' ? 'not sent yet' : undefined];
-    const taken = withdrawn ? ['taken back'] : [];
-    return ['', ...parts.filter((part) => part !== undefined), ...taken].join(', ');
+  private byWhom(reading: BenchReading): string {
+    const { takenBy, rack, state, withdrawn } = reading;
+    const parts = [takenBy ?? rack ?? 'rack', this.withWhat(reading)];
+    if (state === 'waiting') parts.push('not sent yet');
+    if (withdrawn) parts.push('taken back');
+    return ['', ...parts.filter((part) => part !== '')].join(', ');
   }
 
-  private whyOf({ repeat, note, entry }: BenchReading): string {
+  private withWhat({ instrumentId, rangeId }: BenchReading): string {
+    const { instruments } = this.sheet.bench();
+    const instrument = instruments.find(({ id }) => id === instrumentId)?.assetNumber ?? '';
+    return `${instrument} ${rangeById(instruments, rangeId)?.name ?? ''}`.trim();
+  }
+
+  private whyOf(reading: BenchReading): string[] {
+    const { repeat, note, entry, question, takenAt, withdrawn } = reading;
     const repeated = repeat === null ? '' : `Repeat: ${REPEAT_REASON_TITLES[repeat.reason].toLowerCase()}`;
-    const failed = entry?.kind === 'attribute' ? entry.reason : '';
-    return [repeated, repeat?.note ?? '', failed, note].filter((part) => part !== '').join('. ');
+    const reasons = [
+      [entryWords(entry), this.uncertainty(reading)],
+      [repeated, repeat?.note ?? ''],
+      [entry?.kind === 'attribute' ? entry.reason : ''],
+      [answerWords(question, this.characteristic())],
+      [withdrawn ? '' : this.warmUp.wordsAt(takenAt)],
+      [note],
+    ];
+    return reasons.map((parts) => parts.filter((part) => part !== '').join(', ')).filter((line) => line !== '');
+  }
+
+  private uncertainty({ expandedUncertainty }: BenchReading): string {
+    const characteristic = this.characteristic();
+    if (expandedUncertainty === null || characteristic.kind === 'attribute') return '';
+    return uncertaintyText(expandedUncertainty, characteristic.unit);
   }
 }

@@ -34,10 +34,21 @@ import { readingDigits } from '../../../ui/values/reading-text';
     <output class="result" aria-live="off">
       <b [class.empty]="value() === null">{{ digits() }}</b>
       <span class="unit">{{ unitLabel() }}</span>
+      @if (uncertainty(); as u) {
+        <span class="spread">
+          {{ u.text }}
+          <small>{{ u.reason }}</small>
+        </span>
+      }
     </output>
   `,
   styleUrl: './direct-entry.scss',
-  host: { '(keydown.enter)': 'keep($event)', '(keydown.escape)': 'leave($event)', '(keydown.tab)': 'step($event)' },
+  host: {
+    '(keydown.enter)': 'keep($event)',
+    '(keydown.escape)': 'leave($event)',
+    '(keydown.tab)': 'step($event)',
+    '(keydown.f2)': 'cured.emit()',
+  },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class DirectEntry {
@@ -46,8 +57,12 @@ export class DirectEntry {
   readonly decimals = input.required<number>();
   /** What is typed, or what stands in the cell, in SI base units. */
   readonly value = input.required<number | null>();
+  /** U as it is written, and what it consists of. */
+  readonly uncertainty = input<{ readonly text: string; readonly reason: string } | null>(null);
   readonly refused = input(false);
   readonly kept = output();
+  /** F2: the offered correction is taken. */
+  readonly cured = output();
   readonly left = output();
   /** Tab: on to the next characteristic. */
   readonly stepped = output();

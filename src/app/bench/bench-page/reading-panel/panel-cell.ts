@@ -5,9 +5,10 @@ import { MOST_REPEATS } from '#shared/verdict/counting-reading';
 import { LOOK_WORDS, lookOf } from '../../../ui/verdict-look';
 import { BenchCursor } from '../../sheet/bench-cursor';
 import { BenchSheet } from '../../sheet/bench-sheet';
+import { PlausibilityCheck } from '../../sheet/plausibility-check';
 import { ReadingDraft } from '../../sheet/reading-draft';
-import { readingWords } from '../../sheet/reading-words';
-import { readingsAt, refusedAt } from '../../sheet/unit-record';
+import { plausibilityOf } from '../../sheet/reading-plausibility';
+import { countingAt, isOpenQuestion, readingsAt, refusedAt } from '../../sheet/unit-record';
 
 /** What the panel says about the cell in focus: the value typed or kept, its verdict, its earlier readings. */
 @Injectable()
@@ -15,11 +16,13 @@ export class PanelCell {
   private readonly sheet = inject(BenchSheet);
   private readonly cursor = inject(BenchCursor);
   private readonly draft = inject(ReadingDraft);
+  private readonly check = inject(PlausibilityCheck);
 
   readonly characteristic = computed(() => this.cursor.stop().characteristic);
   readonly judged = computed(() => {
     const verdict = this.draft.preview() ?? this.sheet.verdictOf(this.cursor.record());
-    return verdict.characteristics.get(this.cursor.at().key) ?? { value: null, verdict: 'not judged' as const };
+    const none = { value: null, verdict: 'not judged', side: null, expandedUncertainty: null } as const;
+    return verdict.characteristics.get(this.cursor.at().key) ?? none;
   });
   readonly number = computed(() => {
     const { value } = this.judged();
@@ -30,12 +33,23 @@ export class PanelCell {
     return this.draft.pass() ?? (typeof value === 'boolean' ? value : null);
   });
   readonly look = computed(() => lookOf(this.judged().verdict));
-  readonly word = computed(() => LOOK_WORDS[this.look()]);
+  readonly word = computed(() => {
+    const { verdict, side } = this.judged();
+    return verdict === 'conditional' ? `Conditional, ${side} the limit` : LOOK_WORDS[this.look()];
+  });
   readonly readings = computed(() => readingsAt(this.cursor.record(), this.cursor.at().key));
-  readonly refused = computed(() => {
-    const reading = refusedAt(this.cursor.record(), this.cursor.at().key);
-    if (reading === undefined) return null;
-    return { id: reading.id, what: readingWords(reading, this.characteristic()), why: reading.refusal };
+  readonly standing = computed(() => countingAt(this.cursor.record(), this.cursor.at().key));
+  readonly refused = computed(() => refusedAt(this.cursor.record(), this.cursor.at().key));
+  /** The reading that waits for an answer; none while another one is being typed over it. */
+  readonly openQuestion = computed(() => {
+    const standing = this.standing();
+    return standing !== undefined && isOpenQuestion(standing) && this.draft.repeat() === null ? standing : undefined;
+  });
+  /** What the part's model says of the value typed or kept; null where there is no model. */
+  readonly plausibility = computed(() => {
+    if (this.draft.started()) return this.check.found();
+    const entry = this.standing()?.entry ?? null;
+    return plausibilityOf(this.characteristic(), this.sheet.bench().expected, { value: this.number(), entry });
   });
   readonly title = computed(() => {
     const { name, condition } = this.characteristic();
@@ -45,6 +59,11 @@ export class PanelCell {
     const { position, carton, setAside } = this.cursor.record();
     const aside = setAside === null ? '' : `, set aside: ${setAside}`;
     return `Position ${formatNumber(position, 0)}, carton ${formatNumber(carton, 0)}${aside}`;
+  });
+  /** Quality's ruling on the unit, in words. */
+  readonly ruling = computed(() => {
+    const { ruling } = this.cursor.record();
+    return ruling === null ? '' : `Ruled ${ruling.ruling} by ${ruling.by}: ${ruling.reason}`;
   });
   /** "Repeat 1 of 2: poor contact" while a reading is being repeated. */
   readonly repeating = computed(() => {

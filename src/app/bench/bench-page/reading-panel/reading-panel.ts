@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, inject, viewChild } from '@angular/core';
+import { expectedBand } from '#shared/plan/expected-band';
 import { narrowerThan } from '../../../shell/screen-width';
 import { ScopeReader } from '../../../ui/scope-reader/scope-reader';
 import { type ScopeText } from '../../../ui/scope-reader/scope-text';
@@ -11,19 +12,24 @@ import { BenchSettings } from '../../bench-settings';
 import { scopeQuantity } from '../../sheet/bench-reading';
 import { BenchCursor } from '../../sheet/bench-cursor';
 import { BenchSheet } from '../../sheet/bench-sheet';
+import { failureWords } from '../../sheet/failure-words';
 import { InstrumentChoice } from '../../sheet/instrument-choice';
+import { PlausibilityCheck } from '../../sheet/plausibility-check';
 import { ReadingDraft } from '../../sheet/reading-draft';
-import { ReadingQueue } from '../../waiting/reading-queue';
 import { DeskCommands } from '../desk-commands';
 import { lowerThan } from '../screen-height';
+import { WarmUp } from '../warm-up';
 import { AttributeEntry } from './attribute-entry';
 import { CellActions } from './cell-actions';
 import { CellHistory } from './cell-history';
+import { CellUncertainty } from './cell-uncertainty';
 import { ComputedEntry } from './computed-entry';
 import { DirectEntry } from './direct-entry';
 import { InstrumentField } from './instrument-field';
 import { PanelCaution } from './panel-caution';
 import { PanelCell } from './panel-cell';
+import { PlausibilityQuestion } from './plausibility-question';
+import { RefusedReading } from './refused-reading';
 
 /** The panel of the cell in focus: where its reading is typed, seen against its limits, and kept. */
 @Component({
@@ -39,10 +45,12 @@ import { PanelCell } from './panel-cell';
     LimitStrip,
     MessageNote,
     PanelCaution,
+    PlausibilityQuestion,
+    RefusedReading,
     ScopeReader,
     VerdictChip,
   ],
-  providers: [PanelCell],
+  providers: [PanelCell, CellUncertainty],
   templateUrl: './reading-panel.html',
   styleUrl: './reading-panel.scss',
   host: { 'aria-label': 'Reading', role: 'region' },
@@ -50,23 +58,37 @@ import { PanelCell } from './panel-cell';
 })
 export class ReadingPanel {
   private readonly sheet = inject(BenchSheet);
-  private readonly queue = inject(ReadingQueue);
   private readonly settings = inject(BenchSettings);
   protected readonly commands = inject(DeskCommands);
   protected readonly cursor = inject(BenchCursor);
   protected readonly draft = inject(ReadingDraft);
+  protected readonly check = inject(PlausibilityCheck);
   protected readonly choice = inject(InstrumentChoice);
+  protected readonly warmUp = inject(WarmUp);
   protected readonly cell = inject(PanelCell);
+  protected readonly uncertainty = inject(CellUncertainty);
   protected readonly mayMeasure = inject(BenchHand).mayMeasure;
 
   private readonly direct = viewChild(DirectEntry);
   private readonly scope = viewChild(ScopeReader);
   private readonly attribute = viewChild(AttributeEntry);
+  private readonly question = viewChild(PlausibilityQuestion);
 
   protected readonly low = lowerThan(860);
   protected readonly narrow = narrowerThan(1000);
   protected readonly quantity = computed(() => scopeQuantity(this.cell.characteristic()));
   protected readonly outside = computed(() => this.cursor.at().unit > this.cursor.stop().requiredTo);
+  protected readonly band = computed(() => expectedBand(this.cell.characteristic(), this.sheet.bench().expected));
+  protected readonly model = computed(() => (this.band() === null ? 'No rectifier model for this part.' : ''));
+  protected readonly bracket = computed(() => {
+    const band = this.band();
+    return band && ([band.low, band.high] as const);
+  });
+  /** Whether a question about the value stands in the panel, so that advice beside the fields would say it twice. */
+  protected readonly asked = computed(() => this.check.asking() || this.cell.openQuestion() !== undefined);
+  /** What is odd about the value, in words. */
+  protected readonly odd = computed(() => this.cell.plausibility()?.sentence ?? '');
+  protected readonly consequence = computed(() => failureWords(this.sheet, this.draft));
 
   /** Puts the cursor into the first field; text replaces what stands there. */
   focusFirst(text?: string): void {
@@ -75,18 +97,15 @@ export class ReadingPanel {
     else this.attribute()?.focusFirst();
   }
 
+  /** Puts the cursor to the question that stands in the panel. */
+  focusQuestion(): void {
+    this.question()?.focus();
+  }
+
   /** The scope's settings stay from reading to reading, the wave's height does not. */
   protected typeScope(entry: ScopeText): void {
     this.draft.scope.set(entry);
     const { form, coupling, voltsPerDivision, probeFactor } = entry;
     this.settings.change(this.settings.scope, { form, coupling, voltsPerDivision, probeFactor });
-  }
-
-  protected resend(id: string): void {
-    this.queue.resend(id);
-  }
-
-  protected discard(id: string): void {
-    this.sheet.discardRefused(this.cursor.at().unit, id);
   }
 }

@@ -1,0 +1,22 @@
+import { inDisplayUnit } from '#shared/quantities/display-unit';
+import { formatNumber } from '#shared/quantities/format-number';
+import { withUnit } from '#shared/quantities/unit-label';
+
+/**
+ * An expanded uncertainty as it stands beside its value, ± 0.08 V: rounded to one significant digit, two where the first is 1.
+ * Common practice; JCGM 100:2008, 7.2.6 asks for two at most.
+ *
+ * @param halfWidth in SI base units
+ * @param unit display unit of the value; whether the value is peak to peak is said there and not again
+ */
+export function uncertaintyText(halfWidth: number, unit: string): string {
+  return `±\u00a0${withUnit(uncertaintyDigits(halfWidth, unit), unit.replace(/ (p-p|rms)$/, ''))}`;
+}
+
+function uncertaintyDigits(halfWidth: number, unit: string): string {
+  const shown = inDisplayUnit(halfWidth, unit);
+  if (shown === 0) return '0';
+  const digits = shown.toExponential().startsWith('1') ? 2 : 1;
+  const rounded = Number(shown.toPrecision(digits));
+  return formatNumber(rounded, Math.max(0, digits - 1 - Math.floor(Math.log10(rounded))));
+}
