@@ -9,6 +9,7 @@ import { LotPlay } from './lot-play';
 import { addPlanSteps } from './plan-steps';
 import { rememberedPasswords } from './remembered-passwords';
 import { setStage } from './stage';
+import { addStudySteps } from './study-steps';
 
 const WEEKS = 13;
 
@@ -26,6 +27,7 @@ async function playQuarter(
   const cast = await addCast(context);
   const stage = setStage(context, clock, cast, until);
   addPlanSteps(context, clock, agenda, { cast, stage, quarter });
+  addStudySteps(context, clock, agenda, { cast, stage, quarter, seed });
   const verdicts = new RunningVerdicts();
   const noticesSent = async () => {
     clock.advance(MAIL_SECONDS);

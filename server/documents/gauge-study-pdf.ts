@@ -7,8 +7,9 @@ import {
   VERDICT_SOURCE,
 } from '#shared/papers/gauge-study-words';
 import { formatLimits } from '#shared/quantities/format-quantity';
+import { groupsByPart, groupsByPerson } from '#shared/statistics/gauge-study/study-groups';
 import { leadingTable } from '#shared/statistics/gauge-study/study-results';
-import { CHART_HEIGHT, groupsChart, groupsOf } from './gauge-study-chart';
+import { CHART_HEIGHT, groupsChart } from './gauge-study-chart';
 import { type GaugeStudyPaper } from './gauge-study-paper';
 import { readingsTable, sharesTable, varianceLines } from './gauge-study-tables';
 import { LEFT, Paper, WIDTH } from './paper';
@@ -86,13 +87,19 @@ function methods(paper: Paper, parent: Element, { study, results }: GaugeStudyPa
 }
 
 function charts(paper: Paper, parent: Element, data: GaugeStudyPaper): void {
-  for (const [by, title] of [
-    ['part', 'Readings and their mean, by part'],
-    ['person', 'Readings and their mean, by person'],
-  ] as const) {
+  const { parts, persons, values, unit } = data.study;
+  const readings = values.map((rows) => rows.map((cell) => cell.map((value) => value ?? 0)));
+  for (const { title, ...chart } of [
+    { title: `Readings and their mean in ${unit}, by part`, names: parts, groups: groupsByPart(readings) },
+    {
+      title: `Readings less the mean of their part in ${unit}, by person`,
+      names: persons,
+      groups: groupsByPerson(readings),
+    },
+  ]) {
     paper.keepTogether(HEADING_HEIGHT + CHART_HEIGHT);
     heading(paper, parent, title, LEFT);
-    groupsChart(paper, parent, groupsOf(data, by), `${title}; the readings stand in the table of readings.`);
+    groupsChart(paper, parent, { ...chart, alt: `${title}; the readings stand in the table of readings.` }, data);
   }
 }
 

@@ -78,26 +78,34 @@ export function varianceLines({ lines }: VarianceTable, unit: string): Table {
 
 /** Part and person take this much of the width, the trials the rest. */
 const NAMES_WIDTH = 250;
+/** Readings on one line at most; a study of more trials has a second line. */
+const ON_A_LINE = 5;
 
-/** All readings, a line for each part and person. */
+function readingColumns(trials: number): Column[] {
+  const onALine = Math.min(trials, ON_A_LINE);
+  const width = (WIDTH - NAMES_WIDTH) / onALine;
+  return Array.from({ length: onALine }, (_, nth): Column => {
+    const heads = [nth + 1, nth + 1 + ON_A_LINE].filter((trial) => trial <= trials);
+    return { head: heads.join(', '), x: NAMES_WIDTH + nth * width + 4, width: width - 4, align: 'right' };
+  });
+}
+
+/** All readings: a line for each part and person, or two. */
 export function readingsTable({ study }: GaugeStudyPaper): Table {
   const { parts, persons, trials, values, unit, decimals } = study;
-  const width = (WIDTH - NAMES_WIDTH) / trials;
   const columns: Column[] = [
     { head: 'Part', x: 0, width: 116, align: 'left' },
     { head: 'Person', x: 122, width: NAMES_WIDTH - 122, align: 'left' },
-    ...Array.from({ length: trials }, (_, nth): Column => {
-      return { head: String(nth + 1), x: NAMES_WIDTH + nth * width + 4, width: width - 4, align: 'right' };
-    }),
+    ...readingColumns(trials),
   ];
+  const reading = (value: number | null) =>
+    figures(value === null ? '–' : formatNumber(inDisplayUnit(value, unit), decimals));
   const rows = parts.flatMap((part, ofPart) =>
-    persons.map((person, ofPerson) => [
-      words(ofPerson === 0 ? part : ''),
-      words(person),
-      ...(values[ofPart]?.[ofPerson] ?? []).map((value) =>
-        figures(value === null ? '–' : formatNumber(inDisplayUnit(value, unit), decimals)),
-      ),
-    ]),
+    persons.flatMap((person, ofPerson) => {
+      const cells = (values[ofPart]?.[ofPerson] ?? []).map(reading);
+      const lines = [cells.slice(0, ON_A_LINE), cells.slice(ON_A_LINE)].filter((line) => line.length > 0);
+      return lines.map((line) => [words(part), words(person), ...line]);
+    }),
   );
   return { x: LEFT, width: WIDTH, columns, rows, rowHeight: 20 };
 }
