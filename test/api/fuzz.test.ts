@@ -1,3 +1,4 @@
+import { demoGaugeStudy } from '#db/demo/gauge-study';
 import { lots } from '#db/schema/lots';
 import { people, personRoles } from '#db/schema/people';
 import { rackParts, racks } from '#db/schema/racks';
@@ -172,7 +173,10 @@ function send(site: TestSite, { endpoint, who, path, query, body, version: named
 }
 
 /** Where the table has another name than the path. */
-const TABLES: Readonly<Record<string, string>> = { reviews: 'instrument_reviews' };
+const TABLES: Readonly<Record<string, string>> = {
+  reviews: 'instrument_reviews',
+  'gauge-studies': 'gauge_studies',
+};
 
 /** The version of what a path names; 1 where there is no such thing. */
 function currentVersion({ db }: TestSite, path: string): string {
@@ -205,6 +209,8 @@ async function lotsAlongTheLine(site: TestSite): Promise<void> {
     .send(booking(references, 1, { cartons: 1 }))
     .expect(201);
   addTestRack(site, { partIds: [references.partId] });
+  const study = demoGaugeStudy('meter', { instrumentId: 1, persons: ['A', 'B'], seed: 1 });
+  await site.as('quality').post('/api/gauge-studies').send(study).expect(201);
   for (let lot = 0; lot < 7; lot += 1) await drawnLot(site, references, 3);
   await site
     .as('inspector')
