@@ -126,7 +126,7 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     place: 'Cage',
     dailyReference: null,
     ranges: [
-      digital({ name: '2 GΩ at 500 V', unit: 'Ω', fullScale: 2e9, resolution: 1e6, ofReading: 0.05, counts: 5 }),
+      digital({ name: '20 GΩ at 500 V', unit: 'Ω', fullScale: 2e10, resolution: 1e6, ofReading: 0.05, counts: 5 }),
     ],
     dueInDays: 96,
   },

@@ -10,7 +10,8 @@ const STYLE = `
   :root { color-scheme: light dark }
   body { font: 16px/1.5 Roboto, system-ui, sans-serif; max-width: 60rem; margin: 2rem auto; padding: 0 1rem }
   code, h3 { font-family: 'Roboto Mono', ui-monospace, monospace }
-  h2 { margin-top: 3rem; text-transform: capitalize }
+  h2 { margin-top: 3rem }
+  h2::first-letter { text-transform: capitalize }
   h3 { font-size: 1rem; margin: 2rem 0 0; overflow-wrap: anywhere }
   p { margin: .25rem 0 }
   .frame { overflow-x: auto }

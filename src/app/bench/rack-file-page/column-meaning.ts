@@ -13,6 +13,13 @@ export function typedOf(characteristics: readonly Characteristic[]): TypedCharac
   return characteristics.filter((each): each is TypedCharacteristic => each.kind !== 'computed');
 }
 
+/** What a column of a characteristic holds, in words. */
+export function holdsWords(characteristic: TypedCharacteristic): string {
+  const { name, condition } = characteristic;
+  const what = condition === '' ? name : `${name} ${condition}`;
+  return characteristic.kind === 'attribute' ? `${what}: pass or fail` : `${what}, in ${characteristic.unit}`;
+}
+
 /** Letters and digits alone, without a unit in brackets: "V loaded [V]" and "v_loaded" are one. */
 function plain(text: string): string {
   return text

@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { type Characteristic } from '#shared/contract/plans';
+import { holdsWords, typedOf } from './column-meaning';
 
 /** Which columns the file has to have: the unit, and the keys of the plan's characteristics. */
 @Component({
@@ -53,14 +54,6 @@ export class ExpectedColumns {
 
   protected readonly columns = computed(() => [
     { key: 'unit', holds: `Number of the unit in draw order, 1 to ${this.units()}` },
-    ...this.characteristics().flatMap((each) =>
-      each.kind === 'computed' ? [] : [{ key: each.key, holds: holds(each) }],
-    ),
+    ...typedOf(this.characteristics()).map((each) => ({ key: each.key, holds: holdsWords(each) })),
   ]);
-}
-
-function holds(characteristic: Exclude<Characteristic, { kind: 'computed' }>): string {
-  const { name, condition } = characteristic;
-  const what = condition === '' ? name : `${name} ${condition}`;
-  return characteristic.kind === 'attribute' ? `${what}: pass or fail` : `${what}, in ${characteristic.unit}`;
 }

@@ -11,7 +11,7 @@ import { type Bench } from '#shared/contract/bench';
     @if (racks().length > 0) {
       <mat-form-field>
         <mat-label>Rack</mat-label>
-        <mat-select [value]="rackId()" (valueChange)="chosen.emit($event)">
+        <mat-select placeholder="None of these" [value]="rackId()" (valueChange)="chosen.emit($event)">
           <mat-option [value]="null">None of these</mat-option>
           @for (rack of racks(); track rack.id) {
             <mat-option [value]="rack.id">{{ rack.name }}</mat-option>

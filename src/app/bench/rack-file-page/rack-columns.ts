@@ -4,7 +4,7 @@ import { MatSelectModule } from '@angular/material/select';
 import { type RackPreview } from '#shared/contract/bench';
 import { type Characteristic } from '#shared/contract/plans';
 import { ScrollRegion } from '../../ui/scroll-region';
-import { type Meaning, typedOf, UNIT } from './column-meaning';
+import { holdsWords, type Meaning, typedOf, UNIT } from './column-meaning';
 
 /** What a person says of a column. */
 export interface SaidOfColumn {
@@ -33,11 +33,7 @@ export class RackColumns {
   protected readonly skip = SKIP;
   protected readonly unit = UNIT;
   protected readonly offered = computed(() =>
-    typedOf(this.characteristics()).map((each) => ({
-      key: each.key,
-      name: each.condition === '' ? each.name : `${each.name} ${each.condition}`,
-      unit: each.kind === 'attribute' ? 'pass or fail' : each.unit,
-    })),
+    typedOf(this.characteristics()).map((each) => ({ key: each.key, holds: holdsWords(each) })),
   );
   protected readonly lines = computed(() => {
     const [meanings, faults] = [this.meanings(), this.faults()];

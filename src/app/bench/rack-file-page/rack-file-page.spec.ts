@@ -132,7 +132,7 @@ describe('the rack file page', () => {
     await pick();
     expect((await answer(SOUND)).mapping).toEqual({});
     expect((await answer(SOUND)).mapping).toEqual({ unit: 'unit', no_load: 'no_load' });
-    const heads = [...page.querySelectorAll('qr-rack-columns tbody th')].map((cell) => cell.textContent);
+    const heads = [...page.querySelectorAll('qr-rack-columns td.heading')].map((cell) => cell.textContent);
     expect(heads).toEqual(['unit', 'no_load']);
     expect(page.querySelector('qr-rack-columns')?.textContent).toContain('17.2');
   });
@@ -143,7 +143,9 @@ describe('the rack file page', () => {
     await pick();
     await preview({ ...SOUND, columns, faults });
     expect(page.querySelector('qr-rack-columns')?.textContent).toContain('Say what this column holds, or skip it.');
-    await choose('What V9 holds', 'Loaded voltage V');
+    expect(page.querySelector('qr-rack-faults')).toBeNull();
+    expect(button('Import').getAttribute('aria-disabled')).toBe('true');
+    await choose('What V9 holds', 'Loaded voltage, in V');
     const { mapping } = await answer({ ...SOUND, columns });
     expect(mapping).toEqual({ unit: 'unit', no_load: 'no_load', V9: 'loaded' });
     await choose('What V9 holds', 'Nothing wanted: skip it');

@@ -83,6 +83,12 @@ export class RackFilePage {
   });
   /** What the server was asked last; an answer to anything else comes too late. */
   private asked: object | null = null;
+  /** What is wrong beside columns that are not known yet; those say so themselves. */
+  protected readonly faults = computed(() => {
+    const headers = new Set(this.columns().map(({ header }) => header));
+    const unknown = (column: string | null) => column !== null && headers.has(column) && !this.meanings().has(column);
+    return (this.preview()?.faults ?? []).filter(({ column }) => !unknown(column));
+  });
   protected readonly reading = new RecordSave();
   protected readonly importing = new RecordSave();
   protected readonly sound = computed(() => this.preview()?.faults.length === 0);

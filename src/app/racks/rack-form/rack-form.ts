@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, effect, inject, input, output } from '@angular/core';
+import { toSignal } from '@angular/core/rxjs-interop';
 import { ReactiveFormsModule } from '@angular/forms';
 import { MatCheckbox } from '@angular/material/checkbox';
 import { MatFormFieldModule } from '@angular/material/form-field';
@@ -48,6 +49,13 @@ export class RackForm {
     if (!this.parts.hasValue()) return bound;
     const taken = new Set(bound.map(({ id }) => id));
     return this.parts.value().items.filter(({ id, active }) => active || taken.has(id));
+  });
+  private readonly chosen = toSignal(this.controls.partIds.valueChanges, { initialValue: [] });
+  /** The chosen parts by their numbers. */
+  protected readonly bound = computed(() => {
+    const chosen = new Set(this.chosen());
+    const numbers = this.offered().flatMap(({ id, number }) => (chosen.has(id) ? [number] : []));
+    return numbers.join(', ');
   });
   private shown: number | undefined;
 
