@@ -24,6 +24,7 @@ export type BenchCommand =
         | 'note'
         | 'repeat'
         | 'set-aside'
+        | 'conditions'
         | 'withdraw'
         | 'all-keys';
     };
@@ -57,6 +58,7 @@ const LETTERS: ReadonlyMap<string, BenchCommand> = new Map([
   ['n', { does: 'note' }],
   ['r', { does: 'repeat' }],
   ['h', { does: 'set-aside' }],
+  ['c', { does: 'conditions' }],
   ['?', { does: 'all-keys' }],
 ]);
 

@@ -126,14 +126,15 @@ export class BenchHand {
 
   private put({ entry, value }: ReadDraft): void {
     const { unit, key } = this.cursor.at();
-    const { name } = this.cursor.stop().characteristic;
+    const { characteristic } = this.cursor.stop();
+    const { name } = characteristic;
     const failed = this.draft.newlyFailed().length > 0;
     const body = {
       unit,
       characteristicKey: key,
       entry,
       instrumentId: this.instruments.chosen()?.id ?? null,
-      rangeId: typeof value === 'number' ? this.instruments.namedFor(entry.kind) : null,
+      rangeId: this.instruments.namedFor(characteristic, entry.kind),
       note: this.draft.note(),
       question: this.check.answer(),
       repeat: this.draft.repeat(),

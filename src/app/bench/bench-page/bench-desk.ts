@@ -22,6 +22,7 @@ import { BenchHand } from '../bench-hand';
 import { BenchActs } from '../sheet/bench-acts';
 import { BenchCursor } from '../sheet/bench-cursor';
 import { BenchSheet } from '../sheet/bench-sheet';
+import { PasteDesk } from '../paste/paste-desk';
 import { InstrumentChoice } from '../sheet/instrument-choice';
 import { PlausibilityCheck } from '../sheet/plausibility-check';
 import { ReadingDraft } from '../sheet/reading-draft';
@@ -32,6 +33,9 @@ import { DeskCommands } from './desk-commands';
 import { BenchQuestions } from './dialogs/bench-questions';
 import { KeyHints } from './key-hints';
 import { LotSubmission } from './lot-submission';
+import { ConditionNotes } from './condition-notes';
+import { OthersAtWork } from './others-at-work';
+import { UnitRulings } from './unit-rulings';
 import { MeasuringGrid } from './measuring-grid/measuring-grid';
 import { NumberPad } from './number-pad';
 import { PanelCaution } from './reading-panel/panel-caution';
@@ -71,6 +75,10 @@ const AT_BENCH: readonly LotStatus[] = STATIONS.bench;
     DeskCommands,
     LotSubmission,
     WarmUp,
+    ConditionNotes,
+    UnitRulings,
+    PasteDesk,
+    OthersAtWork,
   ],
   templateUrl: './bench-desk.html',
   styleUrl: './bench-desk.scss',
@@ -86,6 +94,7 @@ export class BenchDesk {
   protected readonly hand = inject(BenchHand);
   protected readonly commands = inject(DeskCommands);
   protected readonly submission = inject(LotSubmission);
+  protected readonly others = inject(OthersAtWork);
 
   readonly bench = input.required<Bench>();
   /** The lot should be read again: somebody else's work shows through. */
@@ -102,7 +111,7 @@ export class BenchDesk {
 
   /** Why nothing can be typed, where nothing can. */
   protected readonly readOnly = computed(() => {
-    const { status } = this.bench().lot;
+    const { status } = this.sheet.bench().lot;
     if (AT_BENCH.includes(status)) return 'Inspectors and quality measure. You see what they have measured so far.';
     const reopened = status === 'submitted' ? ' Quality can open it again.' : '';
     return `This lot has left the bench: ${LOT_STATUS_TITLES[status].toLowerCase()}.${reopened}`;
@@ -110,8 +119,12 @@ export class BenchDesk {
 
   constructor() {
     effect(() => {
-      this.acts.open(this.bench());
-      untracked(() => this.cursor.start());
+      const bench = this.bench();
+      untracked(() => {
+        this.acts.open(bench);
+        this.others.begin(bench.cursor);
+        this.cursor.start();
+      });
     });
     // Typing goes to the grid at once, unless the person is already somewhere else on the page.
     afterNextRender(() => {
@@ -120,7 +133,8 @@ export class BenchDesk {
     });
     effect(() => this.cursor.merged.set(this.merged()));
     effect(() => {
-      this.hand.mayMeasure.set(this.mayKeep() && AT_BENCH.includes(this.bench().lot.status));
+      const atBench = this.sheet.opened() && AT_BENCH.includes(this.sheet.bench().lot.status);
+      this.hand.mayMeasure.set(this.mayKeep() && atBench);
     });
     this.acts.stale.pipe(takeUntilDestroyed()).subscribe(() => this.stale.emit());
     this.commands.toGrid.pipe(takeUntilDestroyed()).subscribe(() => this.grid()?.focusCell());
@@ -142,6 +156,14 @@ export class BenchDesk {
 
   protected panelHost(): HTMLElement | undefined {
     return this.panelElement()?.nativeElement;
+  }
+
+  /** Goes to the first reading that waits for an answer. */
+  protected showQuestion(): void {
+    const [first] = this.sheet.openQuestions();
+    if (first === undefined || !this.draft.mayLeave()) return;
+    this.cursor.choose(first.unit, first.reading.characteristicKey);
+    this.grid()?.focusCell();
   }
 
   protected showRefused(): void {

@@ -9,6 +9,7 @@ import { BenchHand } from '../bench-hand';
 import { BenchSettings } from '../bench-settings';
 import { BenchSheet } from '../sheet/bench-sheet';
 import { InstrumentChoice } from '../sheet/instrument-choice';
+import { ConditionsFact } from './conditions-fact';
 import { SavedState } from './saved-state';
 
 /** Days before the due date from which a calibration is pointed out (common practice, no source). */
@@ -17,7 +18,7 @@ const WARNED_BEFORE = 30;
 /** What is on the bench: lot, part, delivery, plan and instruments, and whether everything is saved. */
 @Component({
   selector: 'qr-bench-head',
-  imports: [CountPipe, Icon, MatButtonModule, MatMenuModule, RouterLink, SavedState, VerdictMark],
+  imports: [ConditionsFact, CountPipe, Icon, MatButtonModule, MatMenuModule, RouterLink, SavedState, VerdictMark],
   templateUrl: './bench-head.html',
   styleUrl: './bench-head.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -31,6 +32,7 @@ export class BenchHead {
   readonly submitting = input(false);
   readonly submits = output();
   readonly showsRefused = output();
+  readonly opensConditions = output();
 
   protected readonly lot = computed(() => this.sheet.bench().lot);
   protected readonly sampling = computed(() => this.sheet.bench().sampling);

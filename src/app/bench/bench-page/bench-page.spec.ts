@@ -3,8 +3,10 @@ import { HttpTestingController, provideHttpClientTesting } from '@angular/common
 import { inputBinding, signal } from '@angular/core';
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
+import { Subject } from 'rxjs';
 import { type Bench, type ReadingBody } from '#shared/contract/bench';
 import { type Role } from '#shared/contract/roles';
+import { LiveCounts } from '../../data/live-counts';
 import { problemInterceptor } from '../../data/problem-interceptor';
 import { Session } from '../../session/session';
 import { materialDefaults } from '../../ui/material-defaults';
@@ -17,6 +19,7 @@ describe('the bench page', () => {
   let fixture: ComponentFixture<BenchPage>;
   let http: HttpTestingController;
   let page: HTMLElement;
+  const lotChanges = new Subject<number | null>();
 
   function open(role: Role = 'inspector'): void {
     const me = signal({ id: 7, name: 'I. Sandvær', roles: [role] });
@@ -29,6 +32,7 @@ describe('the bench page', () => {
         provideRouter([]),
         materialDefaults,
         { provide: Session, useValue: { me, holds, mayCall } },
+        { provide: LiveCounts, useValue: { lotChanges } },
       ],
     });
     http = TestBed.inject(HttpTestingController);

@@ -140,6 +140,22 @@ export class DeskCommands {
     if (this.draft.mayLeave()) this.questions.setAside().subscribe(() => this.toGrid.next());
   }
 
+  /** Notes what the lot is measured under. */
+  conditions(): void {
+    if (this.draft.mayLeave()) this.questions.conditions().subscribe(() => this.toGrid.next());
+  }
+
+  /** Readings out of a spreadsheet are seen before they are kept. */
+  paste(text: string): void {
+    if (!this.hand.mayMeasure() || this.questions.open() || !this.draft.mayLeave()) return;
+    this.questions.paste(text).subscribe(() => this.toGrid.next());
+  }
+
+  /** Quality rules on the unit in focus. */
+  rule(): void {
+    if (this.draft.mayLeave()) this.questions.ruling().subscribe(() => this.toGrid.next());
+  }
+
   /** Drops what is typed; with nothing typed the focus leaves the grid. */
   escape(): void {
     const typed = this.draft.started() || this.draft.repeat() !== null;
@@ -180,6 +196,8 @@ export class DeskCommands {
         return this.repeat();
       case 'set-aside':
         return this.setAside();
+      case 'conditions':
+        return this.conditions();
       case 'withdraw':
         this.withdraw();
     }

@@ -1,4 +1,5 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
+import { VerdictMark } from '../../ui/marks/verdict-mark';
 import { VerdictPlate } from '../../ui/verdict-plate/verdict-plate';
 import { BenchSheet } from '../sheet/bench-sheet';
 import { lowerThan } from './screen-height';
@@ -6,7 +7,7 @@ import { lowerThan } from './screen-height';
 /** Whether measuring goes on: CONTINUE, or STOP from the moment a rejection number is reached. */
 @Component({
   selector: 'qr-running-verdict',
-  imports: [VerdictPlate],
+  imports: [VerdictMark, VerdictPlate],
   template: `
     @if (plain()) {
       <span class="label">{{ stop() ? short() : 'Running verdict' }}</span>
@@ -18,6 +19,14 @@ import { lowerThan } from './screen-height';
         [topRight]="short()"
         [trace]="!low()"
       />
+    }
+    @if (waiting(); as count) {
+      <p class="waiting">
+        <qr-verdict-mark look="hold" />
+        <button type="button" class="link" (click)="shown.emit()">
+          {{ count === 1 ? '1 reading waits' : count + ' readings wait' }} for an answer
+        </button>
+      </p>
     }
     @if (stop() && !plain()) {
       <p>{{ sheet.lot().reason }} Quarantine the lot.</p>
@@ -46,6 +55,21 @@ import { lowerThan } from './screen-height';
         color: inherit;
       }
     }
+    .waiting {
+      display: flex;
+      gap: 6px;
+      align-items: center;
+      color: var(--qr-ink);
+    }
+    button {
+      min-height: 24px;
+      padding: 0;
+      border: 0;
+      background: none;
+      font: inherit;
+      font-weight: 500;
+      cursor: pointer;
+    }
     p {
       margin-top: 8px;
       color: var(--qr-nok-text);
@@ -60,7 +84,10 @@ export class RunningVerdict {
 
   /** Whether only the word stands, in the head of a tablet. */
   readonly plain = input(false);
+  /** The person wants to see the first reading that waits for an answer. */
+  readonly shown = output();
 
+  protected readonly waiting = computed(() => this.sheet.openQuestions().length);
   protected readonly low = lowerThan(860);
   protected readonly stop = computed(() => this.sheet.lot().stop);
   protected readonly short = computed(() => {

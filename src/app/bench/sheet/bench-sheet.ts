@@ -93,15 +93,17 @@ export class BenchSheet {
     return verdict;
   }
 
-  /** A unit's verdict as if one more reading were kept on it. */
-  verdictWith(record: UnitRecord, key: string, { value, budget }: TypedWorth): UnitVerdict {
-    const readings = judgedReadings(record, this.budgets());
-    return judgeUnit(this.rules(), withTyped(readings, key, value, budget));
+  /** A unit's verdict as if more readings were kept on it. */
+  verdictWith(record: UnitRecord, typed: ReadonlyMap<string, TypedWorth>): UnitVerdict {
+    let readings = judgedReadings(record, this.budgets());
+    for (const [key, { value, budget }] of typed) readings = withTyped(readings, key, value, budget);
+    return judgeUnit(this.rules(), readings);
   }
 
-  /** The lot's verdict as if one unit's were another. */
-  lotWith(verdict: UnitVerdict): LotVerdict {
-    const verdicts = this.verdicts().map((each) => (each.unit === verdict.unit ? verdict : each));
+  /** The lot's verdict as if some units' were others. */
+  lotWith(others: readonly UnitVerdict[]): LotVerdict {
+    const byUnit = new Map(others.map((each) => [each.unit, each]));
+    const verdicts = this.verdicts().map((each) => byUnit.get(each.unit) ?? each);
     return judgeLot(this.rules(), verdicts, judgeGroups(this.rules(), verdicts));
   }
 

@@ -13,7 +13,7 @@ export function failureWords(sheet: BenchSheet, draft: ReadingDraft): string {
     const characteristic = sheet.bench().characteristics.find((each) => each.key === key);
     return nonconformingWords(characteristic, preview.characteristics.get(key)?.value);
   });
-  const stops = !sheet.lot().stop && sheet.lotWith(preview).stop;
+  const stops = !sheet.lot().stop && sheet.lotWith([preview]).stop;
   return `${what.join('. ')}.${stops ? ' It reaches the rejection number.' : ''}`;
 }
 

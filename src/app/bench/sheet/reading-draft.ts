@@ -67,7 +67,7 @@ export class ReadingDraft {
     if (outcome.state !== 'read') return null;
     const { value, entry } = outcome;
     const worth = { value, budget: this.budgetOf(value, entry) };
-    return this.sheet.verdictWith(this.cursor.record(), this.cursor.at().key, worth);
+    return this.sheet.verdictWith(this.cursor.record(), new Map([[this.cursor.at().key, worth]]));
   });
   /** Characteristics that would fail by keeping what is typed, computed ones too. */
   readonly newlyFailed = computed(() => {

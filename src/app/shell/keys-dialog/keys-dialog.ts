@@ -18,11 +18,14 @@ const BENCH = [
   { keys: ['Tab'], does: 'Next characteristic; with Shift the one before' },
   { keys: ['Arrows', 'Home', 'End', 'PgUp', 'PgDn'], does: 'Move in the grid' },
   { keys: ['P', 'F'], does: 'Pass or fail an attribute' },
-  { keys: ['F2'], does: 'Edit the reading' },
+  { keys: ['F2'], does: 'Take the offered correction, else edit the reading' },
+  { keys: ['1 to 5'], does: 'At a question: why the reading is kept all the same; Enter keeps it' },
   { keys: ['Esc'], does: 'Undo the edit; again leaves the grid' },
   { keys: ['R'], does: 'Repeat a reading, with a reason' },
   { keys: ['H'], does: 'Set the unit aside, with a reason' },
   { keys: ['N'], does: 'Note on the reading' },
+  { keys: ['C'], does: 'Conditions the lot is measured under' },
+  { keys: ['Ctrl', 'V'], does: 'Paste readings from a spreadsheet, from the cell in focus on' },
   { keys: ['Ctrl', 'Z'], does: 'Take the last kept reading back; it stays on record' },
 ];
 

@@ -8,6 +8,7 @@ import {
   ElementRef,
   inject,
   Injector,
+  input,
   output,
   signal,
   untracked,
@@ -41,8 +42,12 @@ export class MeasuringGrid {
   protected readonly sheet = inject(BenchSheet);
   protected readonly cursor = inject(BenchCursor);
 
+  /** Who has just filled which cells: initials by characteristic, by unit. */
+  readonly fresh = input<ReadonlyMap<number, ReadonlyMap<string, string>>>(new Map());
   /** What a key asks for beyond moving about. */
   readonly asked = output<BenchCommand>();
+  /** Text put in from the clipboard. */
+  readonly pasted = output<string>();
 
   private readonly scroller = viewChild.required<ElementRef<HTMLElement>>('scroller');
   private readonly head = viewChild.required<GridHead, ElementRef<HTMLElement>>(GridHead, { read: ElementRef });
@@ -72,7 +77,8 @@ export class MeasuringGrid {
       .map((record) => {
         const current = record.unit === unit;
         const verdict = (current && typed) || this.sheet.verdictOf(record);
-        return { record, verdict, focusKey: current ? key : null, typedKey: current && typed ? key : null };
+        const fresh = this.fresh().get(record.unit) ?? null;
+        return { record, verdict, fresh, focusKey: current ? key : null, typedKey: current && typed ? key : null };
       });
   });
   protected readonly armed = this.draft.armed;
@@ -126,6 +132,13 @@ export class MeasuringGrid {
     else if (!this.cursor.step(command.does)) return false;
     this.focusCell();
     return true;
+  }
+
+  protected paste(event: ClipboardEvent): void {
+    const text = event.clipboardData?.getData('text/plain') ?? '';
+    if (text === '') return;
+    event.preventDefault();
+    this.pasted.emit(text);
   }
 
   protected choose(unit: number, key: string): void {

@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input } from '@an
 import { MatButton } from '@angular/material/button';
 import { BenchCursor } from '../../sheet/bench-cursor';
 import { DeskCommands } from '../desk-commands';
+import { UnitRulings } from '../unit-rulings';
 
 /** The steps a cell offers, for those who do not use the keys. */
 @Component({
@@ -18,6 +19,9 @@ import { DeskCommands } from '../desk-commands';
     <button type="button" [matButton]="look()" (click)="commands.setAside()">
       {{ cursor.record().setAside === null ? 'Set aside' : 'Take back' }}
     </button>
+    @if (rulings.offered()) {
+      <button type="button" [matButton]="look()" (click)="commands.rule()">Rule on unit</button>
+    }
   `,
   styles: `
     :host {
@@ -35,6 +39,7 @@ import { DeskCommands } from '../desk-commands';
 export class CellActions {
   protected readonly cursor = inject(BenchCursor);
   protected readonly commands = inject(DeskCommands);
+  protected readonly rulings = inject(UnitRulings);
 
   /** Whether the button that keeps the reading is among them; beside the number pad it is not. */
   readonly keeps = input(true);
