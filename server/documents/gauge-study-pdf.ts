@@ -7,8 +7,8 @@ import {
   VERDICT_SOURCE,
 } from '#shared/papers/gauge-study-words';
 import { formatLimits } from '#shared/quantities/format-quantity';
+import { leadingTable } from '#shared/statistics/gauge-study/leading-table';
 import { groupsByPart, groupsByPerson } from '#shared/statistics/gauge-study/study-groups';
-import { leadingTable } from '#shared/statistics/gauge-study/study-results';
 import { CHART_HEIGHT, groupsChart } from './gauge-study-chart';
 import { type GaugeStudyPaper } from './gauge-study-paper';
 import { readingsTable, sharesTable, varianceLines } from './gauge-study-tables';

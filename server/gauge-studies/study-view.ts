@@ -1,6 +1,7 @@
 import { type StudyResults } from '#shared/contract/gauge-studies';
 import { type StudyReadings } from '#shared/statistics/gauge-study/gauge-study';
-import { gaugeStudyResults, leadingTable } from '#shared/statistics/gauge-study/study-results';
+import { leadingTable } from '#shared/statistics/gauge-study/leading-table';
+import { gaugeStudyResults } from '#shared/statistics/gauge-study/study-results';
 import { gaugeShare } from '#shared/statistics/gauge-study/study-verdict';
 import { type StudyRow } from './gauge-study-queries';
 

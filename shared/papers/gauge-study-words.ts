@@ -1,5 +1,5 @@
 import { type SpreadAnalysis, type Spread, type VarianceSource } from '../statistics/gauge-study/gauge-study';
-import { leadingTable, POOLING_CHANCE, type GaugeStudyResults } from '../statistics/gauge-study/study-results';
+import { leadingTable, POOLING_CHANCE, type GaugeStudyResults } from '../statistics/gauge-study/leading-table';
 import { FEW_CELLS, smallnessOf, USUAL_STUDY, type Smallness } from '../statistics/gauge-study/study-smallness';
 import { gaugeShare, LEAST_CATEGORIES, studyVerdict, type GaugeFitness } from '../statistics/gauge-study/study-verdict';
 import { chanceText, percentText } from './gauge-study-figures';

@@ -1,6 +1,7 @@
 import { averageAndRange } from '#shared/statistics/gauge-study/average-and-range';
 import { SPREADS, type SpreadAnalysis, type StudyReadings } from '#shared/statistics/gauge-study/gauge-study';
-import { gaugeStudyResults, leadingTable } from '#shared/statistics/gauge-study/study-results';
+import { leadingTable } from '#shared/statistics/gauge-study/leading-table';
+import { gaugeStudyResults } from '#shared/statistics/gauge-study/study-results';
 import { StudyUneven } from '#shared/statistics/gauge-study/study-shape';
 import { manyRangesFactor, oneRangeFactor, RangeFactorNotKnown } from '#shared/statistics/gauge-study/range-factors';
 import { smallnessOf } from '#shared/statistics/gauge-study/study-smallness';

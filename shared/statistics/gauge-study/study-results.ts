@@ -1,18 +1,7 @@
-import { averageAndRange, type AverageAndRange } from './average-and-range';
-import { type StudyReadings, type VarianceTable } from './gauge-study';
+import { averageAndRange } from './average-and-range';
+import { type StudyReadings } from './gauge-study';
+import { POOLING_CHANCE, type GaugeStudyResults } from './leading-table';
 import { variancePooled, varianceWithInteraction } from './variance-table';
-
-/** Above this chance of the interaction's F the interaction is pooled. Common practice; AIAG MSA, 4th edition. */
-export const POOLING_CHANCE = 0.25;
-
-/** What a whole study says, by both methods. */
-export interface GaugeStudyResults {
-  varianceWithInteraction: VarianceTable;
-  variancePooled: VarianceTable;
-  /** Whether the pooled table is the one to go by. */
-  pooled: boolean;
-  averageRange: AverageAndRange;
-}
 
 /**
  * Both methods on one study; standard deviations in the readings' unit. The interaction is kept unless its F is one that
@@ -33,9 +22,4 @@ export function gaugeStudyResults(readings: StudyReadings, tolerance: number | n
     pooled: p > POOLING_CHANCE,
     averageRange: averageAndRange(readings, tolerance),
   };
-}
-
-/** The analysis of variance to go by. */
-export function leadingTable(results: GaugeStudyResults): VarianceTable {
-  return results.pooled ? results.variancePooled : results.varianceWithInteraction;
 }
