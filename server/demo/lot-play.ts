@@ -3,7 +3,7 @@ import { benchWork, type TypedReading } from '#db/demo/bench-work';
 import { type Chance, chanceOf } from '#db/demo/chance';
 import { demoPart } from '#db/demo/demo-parts';
 import { productionOf } from '#db/demo/production';
-import { isReadByRack, rackFile } from '#db/demo/rack-file';
+import { isReadByRack, RACK_MAPPING, rackFile } from '#db/demo/rack-file';
 import { type UnitTruth, unitTruth } from '#db/demo/unit-readings';
 import { later } from '#db/demo/work-days';
 import { setUnitAside, submitLot } from '#server/bench/change-bench';
@@ -107,8 +107,8 @@ export class LotPlay {
       fileName: `rack2-${number}.csv`,
       text,
       instrumentIds,
-      rackId: null,
-      mapping: {},
+      rackId: this.on.stage.rackId,
+      mapping: { ...RACK_MAPPING },
     });
     this.measure(truths, later(at, 3));
   }

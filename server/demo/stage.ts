@@ -1,12 +1,14 @@
 import { DEMO_SITE, DEMO_SUPPLIERS } from '#db/demo/companies';
 import { DEMO_INSTRUMENTS } from '#db/demo/demo-instruments';
 import { DEMO_PARTS } from '#db/demo/demo-parts';
+import { DEMO_RACK } from '#db/demo/rack-file';
 import { firstRevision } from '#db/demo/demo-plans';
 import { type Context } from '#server/context';
 import { dayOf } from '#server/instruments/instrument-queries';
 import { addInstrument } from '#server/instruments/keep-instrument';
 import { addPart } from '#server/parts/keep-part';
 import { addPlan } from '#server/plans/add-plan';
+import { addRack } from '#server/racks/keep-rack';
 import { changeSite } from '#server/site/change-site';
 import { findSite } from '#server/site/site-queries';
 import { addSupplier } from '#server/suppliers/keep-supplier';
@@ -30,12 +32,19 @@ export interface Stage {
   planIds: ReadonlyMap<string, number>;
   supplierIds: ReadonlyMap<string, number>;
   instruments: readonly StagedInstrument[];
+  /** The rack that reads whole samples; what its columns hold is said at the first import. */
+  rackId: number;
 }
 
 function addInstruments(context: Context, cast: Cast, until: Date): StagedInstrument[] {
   return DEMO_INSTRUMENTS.map(({ dueInDays, ranges, ...instrument }) => {
     const calibrationDue = dayOf(new Date(until.getTime() + dueInDays * DAY));
-    return addInstrument(context, cast.quality[0], { ...instrument, ranges: [...ranges], calibrationDue, status: 'in-service' });
+    return addInstrument(context, cast.quality[0], {
+      ...instrument,
+      ranges: [...ranges],
+      calibrationDue,
+      status: 'in-service',
+    });
   });
 }
 
@@ -71,5 +80,7 @@ export function setStage(context: Context, clock: DemoClock, cast: Cast, until: 
     planIds: addPlans(context, clock, cast, partIds),
     supplierIds: new Map(suppliers.map(({ id, code }) => [code, id])),
     instruments,
+    rackId: addRack(context, cast.admin, { ...DEMO_RACK, active: true, partIds: [...partIds.values()], mapping: {} })
+      .id,
   };
 }

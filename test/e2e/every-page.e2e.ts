@@ -37,7 +37,7 @@ const PEOPLE: Record<string, { sees: readonly string[]; closed: readonly string[
       '/trends',
       '/plans/1',
     ],
-    closed: ['/people', '/arrivals/new', '/site', '/suppliers/new'],
+    closed: ['/people', '/arrivals/new', '/site', '/suppliers/new', '/racks'],
   },
   quality: {
     sees: [
@@ -51,11 +51,23 @@ const PEOPLE: Record<string, { sees: readonly string[]; closed: readonly string[
     closed: ['/people', '/bench/59/rack-file', '/plans/new', '/mail'],
   },
   auditor: {
-    sees: ['/audit', '/people', '/people/1', '/mail', '/mail/1', '/mail/received/1', '/decision', '/site'],
-    closed: ['/people/new', '/instruments/new'],
+    sees: ['/audit', '/people', '/people/1', '/mail', '/mail/1', '/mail/received/1', '/decision', '/site', '/racks/1'],
+    closed: ['/people/new', '/instruments/new', '/racks/new'],
   },
   admin: {
-    sees: ['/people', '/people/2', '/people/new', '/mail', '/mail/2', '/site', '/account', '/parts'],
+    sees: [
+      '/people',
+      '/people/2',
+      '/people/new',
+      '/mail',
+      '/mail/2',
+      '/site',
+      '/account',
+      '/parts',
+      '/racks',
+      '/racks/1',
+      '/racks/new',
+    ],
     closed: ['/arrivals', '/bench', '/lots/51', '/decision', '/trends', '/plans'],
   },
 };

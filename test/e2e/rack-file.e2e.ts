@@ -18,7 +18,7 @@ for (const name of ['lot-good', 'lot-low-capacitance', 'lot-bad-tap'] as const) 
     const file = { name: `${name}.csv`, mimeType: 'text/csv', buffer: Buffer.from(reference.csv) };
     await page.getByLabel('Rack file').setInputFiles(file);
 
-    const preview = page.getByRole('region', { name: '3 What it brings' });
+    const preview = page.getByRole('region', { name: '4 What it brings' });
     await expect(preview).toContainText(`${reference.sampleSize} rows`);
     const failing = Object.entries(reference.unitsFailing).map(
       ([unit, keys]) => `${unit} (${keys.join(', ').replaceAll('_', ' ')})`,
