@@ -1,3 +1,4 @@
+import { formatBand } from '../quantities/format-band';
 import { formatQuantity } from '../quantities/format-quantity';
 
 /** What a part ought to give, in the unit of the reading. */
@@ -84,8 +85,7 @@ export function correctedBy({ factor }: Slip, value: number): number {
 }
 
 function bandWords({ low, high }: ExpectedBand, unit: string): string {
-  const digits = { significant: 3 };
-  return `${formatQuantity(low, unit, digits)} to ${formatQuantity(high, unit, digits)}`;
+  return formatBand(low, high, unit, { significant: 3 });
 }
 
 const TIMES = new Map([

@@ -53,7 +53,7 @@ describe('a reading beside what its part can give', () => {
     const found = plausibility(4, band);
     if (found.state === 'inside') throw new Error('4 V is inside.');
     expect(plausibilitySentence(4, band, found, 'V p-p').replaceAll(/\s/g, ' ')).toBe(
-      '4.00 V p-p is more than what this part can give (300 mV p-p to 900 mV p-p); ten times less would fit. Look at the switch on the probe.',
+      '4.00 V p-p is more than what this part can give (300 to 900 mV p-p); ten times less would fit. Look at the switch on the probe.',
     );
   });
 

@@ -3,7 +3,7 @@ import { type Characteristic } from '#shared/contract/plans';
 import { scopeEdges } from '#shared/measurement/scope-reading';
 import { type DigitalRange, type GraticuleRange, type InstrumentRange } from '#shared/uncertainty/instrument-range';
 
-/** What the uncertainty of a reading consists of, in a few words: "k = 2, Channel 1 3 %, 2 × 0.1 div". */
+/** What the uncertainty of a reading consists of, in a few words: "k = 2, scope 3 %, 2 × 0.1 div". */
 export function uncertaintyReason(
   range: InstrumentRange,
   entry: ReadingEntry | null,
@@ -15,17 +15,17 @@ export function uncertaintyReason(
 }
 
 function screenParts(range: GraticuleRange, entry: ReadingEntry | null, characteristic: Characteristic): string[] {
-  const { name, ofReading, ofFullScale, readingStep } = range;
-  const accuracy = [percent(ofReading), share(ofFullScale, 'of the screen')];
-  if (entry?.kind !== 'scope') return [`${name} ${sum(accuracy)}`];
+  const { ofReading, ofFullScale, readingStep } = range;
+  const accuracy = `scope ${sum([percent(ofReading), share(ofFullScale, 'of screen')])}`;
+  if (entry?.kind !== 'scope') return [accuracy];
   const alternatePeaks = characteristic.kind === 'measured' ? characteristic.alternatePeaks : undefined;
   const edges = scopeEdges(entry.scope, alternatePeaks).length;
-  return [`${name} ${sum(accuracy)}`, `${edges} × ${readingStep} div`];
+  return [accuracy, `${edges} × ${readingStep} div`];
 }
 
-function displayParts({ name, ofReading, ofRange, counts }: DigitalRange): string[] {
+function displayParts({ ofReading, ofRange, counts }: DigitalRange): string[] {
   const digits = counts === 0 ? '' : `${counts} ${counts === 1 ? 'count' : 'counts'}`;
-  return [`${name} ${sum([share(ofReading, ''), share(ofRange, 'of range'), digits])}`];
+  return [sum([share(ofReading, ''), share(ofRange, 'of range'), digits])];
 }
 
 function sum(parts: readonly string[]): string {

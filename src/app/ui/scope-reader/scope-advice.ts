@@ -1,4 +1,5 @@
 import { type ExpectedBand, plausibility, type Slip, slipAdvice } from '#shared/measurement/plausibility';
+import { formatBand } from '#shared/quantities/format-band';
 import { formatQuantity } from '#shared/quantities/format-quantity';
 import { type VerdictLook } from '../verdict-look';
 import { type ScopeCure, scopeCure } from './scope-cure';
@@ -61,6 +62,5 @@ function adviceWords(band: ExpectedBand, slip: Slip | null, cure: ScopeCure | nu
 }
 
 function bandWords({ low, high }: ExpectedBand): string {
-  const digits = { significant: 2 };
-  return `${formatQuantity(low, 'V', digits)} to ${formatQuantity(high, 'V', digits)}`;
+  return formatBand(low, high, 'V', { significant: 2 });
 }

@@ -85,13 +85,8 @@ export class ScopeReader {
     return outcome.kind !== 'read' || expected === null ? null : scopeAdvice(outcome, this.entry(), expected);
   });
   protected readonly shown = computed(() => (this.asked() ? null : this.advice()));
-  /** How the heights are read: which peak counts, and to what step. */
-  protected readonly how = computed(() => {
-    const step = this.step();
-    const parts = [countsWords(this.entry().form, this.alternatePeaks())];
-    if (step !== null) parts.push(`Read to ${step} of a division.`);
-    return parts.filter((part) => part !== '').join(' ');
-  });
+  protected readonly counts = computed(() => countsWords(this.entry().form, this.alternatePeaks()));
+  protected readonly stepWords = computed(() => (this.step() === null ? '' : `read to ${this.step()} div`));
 
   /** Puts the cursor into the first field; text replaces what stands there, as when a digit was typed in the grid. */
   focusFirst(text?: string): void {

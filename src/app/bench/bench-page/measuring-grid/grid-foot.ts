@@ -23,7 +23,7 @@ import { BenchSheet } from '../../sheet/bench-sheet';
         }
       </span>
     }
-    <span role="gridcell" [attr.aria-colindex]="columns().length + 2"></span>
+    <span role="gridcell" class="end" [attr.aria-colindex]="columns().length + 2"></span>
   `,
   styleUrl: './grid-foot.scss',
   host: { role: 'row', '[attr.aria-rowindex]': 'sheet.records().length + 2' },

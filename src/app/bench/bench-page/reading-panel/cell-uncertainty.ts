@@ -4,6 +4,7 @@ import { type InstrumentRange } from '#shared/contract/instruments';
 import { expandedUncertainty } from '#shared/uncertainty/expanded-uncertainty';
 import { uncertaintyText } from '../../../ui/values/uncertainty-text';
 import { BenchSheet } from '../../sheet/bench-sheet';
+import { InstrumentChoice } from '../../sheet/instrument-choice';
 import { ReadingDraft } from '../../sheet/reading-draft';
 import { rangeById } from '../../sheet/reading-range';
 import { uncertaintyReason } from '../../sheet/uncertainty-words';
@@ -16,6 +17,7 @@ export class CellUncertainty {
   private readonly sheet = inject(BenchSheet);
   private readonly draft = inject(ReadingDraft);
   private readonly cell = inject(PanelCell);
+  private readonly choice = inject(InstrumentChoice);
 
   /** U in SI base units; null where it is not known. */
   readonly halfWidth = computed(() => {
@@ -37,7 +39,8 @@ export class CellUncertainty {
   );
   /** The step to which the screen in use is read, in divisions; null where it is not known. */
   readonly step = computed(() => {
-    const range = this.range();
+    const [ahead] = this.choice.ranges();
+    const range = this.range() ?? this.choice.named() ?? ahead;
     return range?.form === 'graticule' ? range.readingStep : null;
   });
 

@@ -1,4 +1,12 @@
-import { ChangeDetectionStrategy, Component, computed, inject, viewChild } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  type ElementRef,
+  inject,
+  viewChild,
+} from '@angular/core';
 import { expectedBand } from '#shared/plan/expected-band';
 import { narrowerThan } from '../../../shell/screen-width';
 import { ScopeReader } from '../../../ui/scope-reader/scope-reader';
@@ -73,6 +81,7 @@ export class ReadingPanel {
   private readonly scope = viewChild(ScopeReader);
   private readonly attribute = viewChild(AttributeEntry);
   private readonly question = viewChild(PlausibilityQuestion);
+  private readonly body = viewChild<ElementRef<HTMLElement>>('body');
 
   protected readonly low = lowerThan(860);
   protected readonly narrow = narrowerThan(1000);
@@ -89,6 +98,14 @@ export class ReadingPanel {
   /** What is odd about the value, in words. */
   protected readonly odd = computed(() => this.cell.plausibility()?.sentence ?? '');
   protected readonly consequence = computed(() => failureWords(this.sheet, this.draft));
+
+  constructor() {
+    effect(() => {
+      this.cursor.at();
+      const body = this.body()?.nativeElement;
+      if (body) body.scrollTop = 0;
+    });
+  }
 
   /** Puts the cursor into the first field; text replaces what stands there. */
   focusFirst(text?: string): void {
