@@ -1,3 +1,4 @@
+import { pastedRows } from '../bench/pasted-cells';
 import { cellAt, cellName, columnOf, type PlacedText, type StudyCell, type StudyPlan } from './study-cell';
 
 /** A block of a spreadsheet set into a study, or the sentence that says why it was not. */
@@ -12,12 +13,9 @@ function plural(count: number, one: string): string {
  * reaches beyond the table is not placed at all, so that no reading slips into another's place; its empty cells change nothing.
  */
 export function studyBlock(text: string, from: StudyCell, plan: StudyPlan): StudyBlock {
-  const rows = text
-    .replace(/(\r\n|\r|\n)$/, '')
-    .split(/\r\n|\r|\n/)
-    .map((row) => row.split('\t').map((cell) => cell.trim()));
+  const rows = pastedRows(text);
   const column = columnOf(plan, from);
-  const wide = Math.max(...rows.map(({ length }) => length));
+  const wide = Math.max(0, ...rows.map(({ length }) => length));
   const left = { rows: plan.parts.length - from.part, columns: plan.persons.length * plan.trials - column };
   if (rows.length > left.rows || wide > left.columns)
     return {

@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, signal } f
 import { MatButton } from '@angular/material/button';
 import { type Certificate, openCertificate, readCertificate } from '#shared/contract/certificates';
 import { ApiClient, hrefOf } from '../data/api';
-import { problemOf } from '../data/api-problem';
+import { openInTab } from '../data/file-tab';
 import { Icon } from '../ui/marks/icon';
 import { MessageNote } from '../ui/states/message-note';
 
@@ -40,22 +40,8 @@ export class OpenPdf {
   protected readonly address = computed(() => hrefOf(openCertificate, { params: { id: this.certificate().id } }));
   protected readonly refused = signal('');
 
-  /**
-   * A link alone cannot renew a session that has run out meanwhile; a call does. The tab is opened at once, because
-   * browsers refuse one that comes later than the click.
-   */
   protected open(event: MouseEvent): void {
-    if (event.ctrlKey || event.metaKey || event.shiftKey) return;
-    const tab = window.open('', '_blank');
-    if (tab === null) return;
-    event.preventDefault();
-    this.refused.set('');
-    this.api.call(readCertificate, { params: { id: this.certificate().id } }).subscribe({
-      next: () => tab.location.replace(this.address()),
-      error: (thrown: unknown) => {
-        tab.close();
-        this.refused.set(problemOf(thrown).message);
-      },
-    });
+    const first = this.api.call(readCertificate, { params: { id: this.certificate().id } });
+    openInTab(event, this.address(), first, (sentence) => this.refused.set(sentence));
   }
 }

@@ -2,6 +2,7 @@ import { listAudit } from '#shared/contract/audit';
 import { listCertificates } from '#shared/contract/certificates';
 import { type readRecordCounts } from '#shared/contract/counts';
 import { type Who } from '#shared/contract/endpoint';
+import { listGaugeStudies } from '#shared/contract/gauge-studies';
 import { listInstruments } from '#shared/contract/instruments';
 import { listMessages } from '#shared/contract/mail';
 import { listNonconformances } from '#shared/contract/nonconformances';
@@ -30,6 +31,7 @@ export const RECORDS: readonly (readonly RecordArea[])[] = [
     { path: 'parts', title: 'Parts', who: listParts.who, count: 'parts' },
     { path: 'suppliers', title: 'Suppliers', who: listSuppliers.who, count: 'suppliers' },
     { path: 'instruments', title: 'Instruments', who: listInstruments.who, count: 'instruments' },
+    { path: 'gauge-studies', title: 'Gauge studies', who: listGaugeStudies.who },
     { path: 'racks', title: 'Racks', who: listRacks.who, count: 'racks' },
   ],
   [

@@ -4,6 +4,7 @@ import { listAudit } from '#shared/contract/audit';
 import { readBench } from '#shared/contract/bench';
 import { listCertificates } from '#shared/contract/certificates';
 import { readAssessment } from '#shared/contract/decision';
+import { listGaugeStudies } from '#shared/contract/gauge-studies';
 import { listInstruments } from '#shared/contract/instruments';
 import { listLots } from '#shared/contract/lots';
 import { listMessages } from '#shared/contract/mail';
@@ -55,6 +56,11 @@ export default [
         path: 'instruments',
         title: 'Instruments',
         loadChildren: () => import('../instruments/instruments.routes'),
+      }),
+      ...areaFor(listGaugeStudies.who, {
+        path: 'gauge-studies',
+        title: 'Gauge studies',
+        loadChildren: () => import('../gauge-studies/gauge-studies.routes'),
       }),
       ...areaFor(listRacks.who, { path: 'racks', title: 'Racks', loadChildren: () => import('../racks/racks.routes') }),
       ...areaFor(listCertificates.who, {
