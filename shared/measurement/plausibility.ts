@@ -94,8 +94,13 @@ const TIMES = new Map([
   [1000, 'a thousand times'],
 ]);
 
-/** What to look at, for the likeliest slip. */
-export function slipAdvice(slip: Slip): string {
+/**
+ * What to look at, for the likeliest slip.
+ *
+ * @param readOff the screen of a scope, whose probe may be switched wrongly, or a display
+ */
+export function slipAdvice(slip: Slip, readOff: 'screen' | 'display' = 'screen'): string {
+  if (readOff === 'display') return 'Look at the decimal point and at the prefix of the unit.';
   const size = slip.factor > 1 ? slip.factor : 1 / slip.factor;
   if (slip.kind === 'scale-step') return 'Look at the volts per division: a neighbouring step would fit.';
   return Math.round(size) === 10
@@ -120,17 +125,19 @@ function farWords(ratio: number): string {
  * The question in words: the value, how far it is from what the part can give, the expected band, and the likeliest slip.
  *
  * @param unit display unit of the value, whose SI base unit value and band are in
+ * @param readOff the screen of a scope, or a display
  */
 export function plausibilitySentence(
   value: number,
   band: ExpectedBand,
   found: Exclude<Plausibility, { state: 'inside' }>,
   unit: string,
+  readOff: 'screen' | 'display' = 'screen',
 ): string {
   const shown = formatQuantity(value, unit, { significant: 3 });
   const can = `what this part can give (${bandWords(band, unit)})`;
   if (found.slip === null)
-    return `${shown} is ${farWords(found.ratio)} ${can}. Look at the load, the connection and the scale.`;
+    return `${shown} is ${farWords(found.ratio)} ${can}. Look at the load, the connection and the ${readOff === 'screen' ? 'scale' : 'range'}.`;
   const side = found.ratio > 1 ? 'more' : 'less';
-  return `${shown} is ${side} than ${can}; ${slipWords(found.slip)}. ${slipAdvice(found.slip)}`;
+  return `${shown} is ${side} than ${can}; ${slipWords(found.slip)}. ${slipAdvice(found.slip, readOff)}`;
 }

@@ -24,6 +24,7 @@ import { WarmUp } from './warm-up';
       display: flex;
       flex-direction: column;
       min-width: 0;
+      max-width: 190px;
       color: var(--qr-ink-2);
       font: var(--qr-t-small);
     }

@@ -24,7 +24,8 @@ export function plausibilityOf(
   if (band === null || characteristic.kind !== 'measured' || typeof value !== 'number') return null;
   const found = plausibility(value, band, { scope: entry?.kind === 'scope' ? entry.scope : null });
   if (found.state === 'inside') return { state: 'inside', band, slip: null, sentence: '' };
-  const sentence = plausibilitySentence(value, band, found, characteristic.unit);
+  const readOff = entry?.kind === 'direct' || characteristic.entryMode === 'direct' ? 'display' : 'screen';
+  const sentence = plausibilitySentence(value, band, found, characteristic.unit, readOff);
   return { state: found.state, band, slip: found.slip, sentence };
 }
 

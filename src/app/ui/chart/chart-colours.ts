@@ -21,6 +21,8 @@ export type ChartColours = Readonly<Record<keyof typeof TOKENS, string>>;
 /** Reads the colours where a chart stands. A token names two colours; only a computed style says which of them holds. */
 export function chartColours(place: HTMLElement): ChartColours {
   const probe = place.ownerDocument.createElement('span');
+  // Where motion is reduced every change of colour is a very short transition, and would be read at its beginning.
+  probe.style.setProperty('transition', 'none', 'important');
   place.append(probe);
   const style = getComputedStyle(probe);
   const colours = Object.entries(TOKENS).map(([name, token]) => {

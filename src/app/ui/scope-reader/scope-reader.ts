@@ -120,7 +120,7 @@ export class ScopeReader {
   }
 
   protected applyCure(event?: Event): void {
-    const cure = this.advice()?.cure ?? null;
+    const cure = this.shown()?.cure ?? null;
     if (cure === null) return;
     event?.preventDefault();
     event?.stopPropagation();

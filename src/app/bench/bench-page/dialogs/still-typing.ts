@@ -1,5 +1,7 @@
 /** No key for so long, in ms, ends what was being typed when a question came up. */
 const PAUSE = 400;
+/** Keys that nobody types a reading with. */
+const DELIBERATE = /^(Escape|Tab|F\d+|Arrow\w+)$/;
 
 /**
  * Tells keys meant for the reading from keys meant for a question that came up meanwhile. Somebody who types without looking
@@ -14,7 +16,7 @@ export class StillTyping {
     const now = performance.now();
     const paused = now - this.lastKey >= PAUSE;
     this.lastKey = now;
-    this.seen ||= paused || key === 'Escape' || key === 'Tab';
+    this.seen ||= paused || DELIBERATE.test(key);
     return !this.seen;
   }
 }

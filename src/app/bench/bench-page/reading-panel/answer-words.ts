@@ -1,5 +1,6 @@
 import { CONFIRM_REASON_TITLES, type PlausibilityQuestion } from '#shared/contract/bench';
 import { type Characteristic } from '#shared/contract/plans';
+import { formatBand } from '#shared/quantities/format-band';
 import { readingText } from '../../../ui/values/reading-text';
 import { entryWords } from './entry-words';
 
@@ -9,7 +10,7 @@ export function answerWords(question: PlausibilityQuestion | null, characteristi
   const { given, answeredBy } = question;
   const { unit, decimals } = characteristic;
   const text = (value: number) => readingText(value, unit, decimals);
-  const band = `expected ${text(question.band.low)} to ${text(question.band.high)}`;
+  const band = `expected ${formatBand(question.band.low, question.band.high, unit, { significant: 3 })}`;
   if (given.answer === 'open') return `Waits for an answer, ${band}`;
   const by = answeredBy === null ? '' : ` by ${answeredBy}`;
   if (given.answer === 'corrected') {

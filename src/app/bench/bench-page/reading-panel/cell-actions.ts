@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { BenchCursor } from '../../sheet/bench-cursor';
+import { PlausibilityCheck } from '../../sheet/plausibility-check';
 import { DeskCommands } from '../desk-commands';
 import { UnitRulings } from '../unit-rulings';
 
@@ -9,7 +10,7 @@ import { UnitRulings } from '../unit-rulings';
   selector: 'qr-cell-actions',
   imports: [MatButton],
   template: `
-    @if (keeps() && measured()) {
+    @if (keeps() && measured() && !check.asking()) {
       <button type="button" matButton="filled" (click)="commands.keep()">
         Keep reading <kbd aria-hidden="true">Enter</kbd>
       </button>
@@ -40,6 +41,7 @@ export class CellActions {
   protected readonly cursor = inject(BenchCursor);
   protected readonly commands = inject(DeskCommands);
   protected readonly rulings = inject(UnitRulings);
+  protected readonly check = inject(PlausibilityCheck);
 
   /** Whether the button that keeps the reading is among them; beside the number pad it is not. */
   readonly keeps = input(true);

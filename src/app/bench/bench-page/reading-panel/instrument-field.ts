@@ -9,6 +9,9 @@ import { ReadingDraft } from '../../sheet/reading-draft';
 import { waitsForCheck } from '../../sheet/why-unusable';
 import { DailyCheck } from './daily-check';
 
+/** Stands for no named range in the list, which takes no null for a choice. */
+const AUTOMATIC = 0;
+
 /**
  * Which instrument takes the readings, and on which range. One that may not be used is shown with the reason and cannot be
  * chosen; one that only waits for the check of the day is checked right here.
@@ -47,6 +50,12 @@ export class InstrumentField {
     const range = this.draft.range();
     return range.state === 'refused' ? range.message : '';
   });
+
+  protected readonly automaticId = AUTOMATIC;
+
+  protected chooseRange(id: number): void {
+    this.choice.chooseRange(id === AUTOMATIC ? null : id);
+  }
 
   protected choose(id: number): void {
     const found = this.choice.offered().find(({ instrument }) => instrument.id === id);

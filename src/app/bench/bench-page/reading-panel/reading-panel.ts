@@ -93,8 +93,11 @@ export class ReadingPanel {
     const band = this.band();
     return band && ([band.low, band.high] as const);
   });
-  /** Whether a question about the value stands in the panel, so that advice beside the fields would say it twice. */
-  protected readonly asked = computed(() => this.check.asking() || this.cell.openQuestion() !== undefined);
+  /** Whether a question about the value stands in the panel, or was answered: advice beside the fields would say it twice. */
+  protected readonly asked = computed(() => {
+    const answered = !this.draft.started() && (this.cell.standing()?.question ?? null) !== null;
+    return answered || this.check.asking() || this.cell.openQuestion() !== undefined;
+  });
   /** What is odd about the value, in words. */
   protected readonly odd = computed(() => this.cell.plausibility()?.sentence ?? '');
   protected readonly consequence = computed(() => failureWords(this.sheet, this.draft));
