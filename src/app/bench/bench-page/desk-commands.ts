@@ -12,6 +12,8 @@ import { ReadingDraft } from '../sheet/reading-draft';
 import { readingWords } from '../sheet/reading-words';
 import { countingAt } from '../sheet/unit-record';
 import { type Confirmation } from '../waiting/bench-act';
+import { problemOf } from '../../data/api-problem';
+import { ConditionNotes } from './condition-notes';
 import { BenchQuestions } from './dialogs/bench-questions';
 
 /** What the keys and buttons of the bench do, whichever of them asks. */
@@ -23,6 +25,7 @@ export class DeskCommands {
   private readonly acts = inject(BenchActs);
   private readonly check = inject(PlausibilityCheck);
   private readonly questions = inject(BenchQuestions);
+  private readonly notes = inject(ConditionNotes);
   private readonly snackBar = inject(MatSnackBar);
 
   /** The focus belongs on the cell again. */
@@ -143,6 +146,12 @@ export class DeskCommands {
   /** Notes what the lot is measured under. */
   conditions(): void {
     if (this.draft.mayLeave()) this.questions.conditions().subscribe(() => this.toGrid.next());
+  }
+
+  /** The warm-up that the plan asks for begins now. */
+  startWarmUp(): void {
+    this.notes.startWarmUp().subscribe({ error: (thrown: unknown) => this.hand.hold(problemOf(thrown).message) });
+    this.toGrid.next();
   }
 
   /** Readings out of a spreadsheet are seen before they are kept. */

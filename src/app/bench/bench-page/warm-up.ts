@@ -35,7 +35,7 @@ export class WarmUp {
   /** What to know before a reading is taken now; empty once units are warm. */
   readonly caution = computed(() => {
     if (this.state() === 'not-started')
-      return `The plan asks for ${this.minutes()} minutes of warm-up; it is not started.`;
+      return `The plan asks for ${minutesText(this.minutes())} of warm-up; it is not started.`;
     if (this.state() !== 'running') return '';
     return `The warm-up lasts until ${momentText(new Date(this.endsAt() ?? 0), 'auto', new Date())}.`;
   });
@@ -60,4 +60,8 @@ export class WarmUp {
     this.now.set(Date.now());
     if (this.state() === 'done') void this.announcer.announce('The warm-up is over.', 'polite');
   }
+}
+
+function minutesText(minutes: number | null): string {
+  return minutes === 1 ? '1 minute' : `${minutes} minutes`;
 }

@@ -62,7 +62,7 @@ function markOf(state: UnitState, unit: number, pitch: number): TallyShape[] {
   const cell = Math.max(pitch - (pitch >= LEAST_PITCH ? 1 : 0), 0.8);
   const centre = unit * pitch + cell / 2;
   if (state === 'hold') {
-    const half = Math.max(cell / 2, 4);
+    const half = Math.min(Math.max(cell / 2, 4), 7);
     return [{ kind: 'hold', x: centre - half, y: BASE - 3, width: 2 * half, height: 14 }];
   }
   const width = Math.max(cell, 3);

@@ -13,10 +13,17 @@ export function uncertaintyText(halfWidth: number, unit: string): string {
   return `±\u00a0${withUnit(uncertaintyDigits(halfWidth, unit), unit.replace(/ (p-p|rms)$/, ''))}`;
 }
 
+/** Decimals an uncertainty has in its display unit when it is written so; 0 for none. */
+export function uncertaintyDecimals(halfWidth: number, unit: string): number {
+  const { digits, rounded } = significant(inDisplayUnit(halfWidth, unit));
+  return rounded === 0 ? 0 : Math.max(0, digits - 1 - Math.floor(Math.log10(rounded)));
+}
+
 function uncertaintyDigits(halfWidth: number, unit: string): string {
-  const shown = inDisplayUnit(halfWidth, unit);
-  if (shown === 0) return '0';
+  return formatNumber(significant(inDisplayUnit(halfWidth, unit)).rounded, uncertaintyDecimals(halfWidth, unit));
+}
+
+function significant(shown: number): { digits: number; rounded: number } {
   const digits = shown.toExponential().startsWith('1') ? 2 : 1;
-  const rounded = Number(shown.toPrecision(digits));
-  return formatNumber(rounded, Math.max(0, digits - 1 - Math.floor(Math.log10(rounded))));
+  return { digits, rounded: Number(shown.toPrecision(digits)) };
 }
