@@ -8,7 +8,7 @@ import { BenchActs } from '../sheet/bench-acts';
 import { BenchCursor } from '../sheet/bench-cursor';
 import { type BenchReading } from '../sheet/bench-reading';
 import { PlausibilityCheck } from '../sheet/plausibility-check';
-import { ReadingDraft } from '../sheet/reading-draft';
+import { ReadingDraft, type TakenWaveform } from '../sheet/reading-draft';
 import { readingWords } from '../sheet/reading-words';
 import { countingAt } from '../sheet/unit-record';
 import { type Confirmation } from '../waiting/bench-act';
@@ -101,6 +101,13 @@ export class DeskCommands {
     this.acts.discardRefused(this.cursor.at().unit, id);
     if (entry !== null && value !== null) this.check.resume({ entry, value });
     this.toPanel.next(undefined);
+  }
+
+  /** Keeps what a captured file gave as the reading of the cell. */
+  takeWaveform(waveform: TakenWaveform): void {
+    if (!this.draft.mayLeave()) return;
+    this.draft.waveform.set(waveform);
+    this.keep();
   }
 
   /** Goes to the next characteristic; what is typed is kept first. */

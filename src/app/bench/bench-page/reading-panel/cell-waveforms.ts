@@ -6,6 +6,11 @@ import { type TakenWaveform } from '../../sheet/reading-draft';
 @Component({
   selector: 'qr-cell-waveforms',
   template: '',
+  styles: `
+    :host:empty {
+      display: none;
+    }
+  `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class CellWaveforms {

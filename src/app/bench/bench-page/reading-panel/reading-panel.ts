@@ -30,6 +30,7 @@ import { WarmUp } from '../warm-up';
 import { AttributeEntry } from './attribute-entry';
 import { CellActions } from './cell-actions';
 import { CellHistory } from './cell-history';
+import { CellWaveforms } from './cell-waveforms';
 import { CellUncertainty } from './cell-uncertainty';
 import { ComputedEntry } from './computed-entry';
 import { DirectEntry } from './direct-entry';
@@ -46,6 +47,7 @@ import { RefusedReading } from './refused-reading';
     AttributeEntry,
     CellActions,
     CellHistory,
+    CellWaveforms,
     ClassGlyph,
     ComputedEntry,
     DirectEntry,
