@@ -13,11 +13,9 @@ export class BenchCursor {
 
   /** Whether the attributes share one column. */
   readonly merged = signal(false);
-  readonly columns = computed(() =>
-    benchColumns(this.sheet.bench().characteristics, this.sheet.rules(), this.merged()),
-  );
+  readonly columns = computed(() => benchColumns(this.sheet.characteristics(), this.sheet.rules(), this.merged()));
   readonly stops = computed(() => this.columns().flatMap(({ stops }) => stops));
-  private readonly walk = computed(() => new GridWalk(this.sheet.bench().units.length, this.stops()));
+  private readonly walk = computed(() => new GridWalk(this.sheet.records().length, this.stops()));
 
   readonly at = computed(() => this.chosen() ?? this.named({ unit: 1, column: 0 }), {
     equal: (one, other) => one.unit === other.unit && one.key === other.key,

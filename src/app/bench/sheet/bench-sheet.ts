@@ -38,6 +38,8 @@ export class BenchSheet {
   /** The lot as it is now. */
   readonly bench = computed(() => opened(this.now()));
   readonly opened = computed(() => this.read() !== null);
+  /** The plan's characteristics; they stay the same while the lot is open, whatever else changes of it. */
+  readonly characteristics = computed(() => opened(this.read()).characteristics);
   readonly rules = computed(() => {
     const { characteristics, sampling, decisionRule: rule, coverageFactor } = opened(this.read());
     return judgingRules(characteristics.map(judgedCharacteristic), sampling.groups, { rule, coverageFactor });

@@ -31,13 +31,14 @@ export class DailyCheck {
   readonly instrument = input.required<Instrument>();
   readonly passed = output();
 
+  private readonly instrumentId = computed(() => this.instrument().id);
   protected readonly saving = new RecordSave();
   protected readonly form = new FormGroup({
     observed: new FormControl<number | null>(null, { validators: Validators.required }),
   });
   /** A check that failed; another instrument begins anew. */
   protected readonly failed = linkedSignal<unknown, InstrumentCheck | null>({
-    source: () => this.instrument().id,
+    source: this.instrumentId,
     computation: () => null,
   });
   protected readonly reference = computed(() => {
@@ -68,7 +69,6 @@ export class DailyCheck {
   }
 
   private take(check: InstrumentCheck): void {
-    this.form.reset();
     this.failed.set(check.passed ? null : check);
     const dailyCheck = check.passed ? 'passed' : 'failed';
     this.sheet.takeInstrument(this.instrument().id, { dailyCheck, usable: check.passed });

@@ -48,8 +48,7 @@ export class PlausibilityQuestion {
 
   /** Puts the question before a person who works with the keys. */
   focus(): void {
-    this.element.focus({ preventScroll: true });
-    this.element.scrollIntoView({ block: 'nearest' });
+    this.element.focus();
   }
 
   protected take(): void {
