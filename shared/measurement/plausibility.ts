@@ -94,18 +94,21 @@ const TIMES = new Map([
   [1000, 'a thousand times'],
 ]);
 
+/** Factors that a probe's switch can be set to. */
+const PROBES: readonly number[] = [1, 10, 100];
+
 /**
  * What to look at, for the likeliest slip.
  *
- * @param readOff the screen of a scope, whose probe may be switched wrongly, or a display
+ * @param scope how the scope was set; null for a display, undefined where it is not known
  */
-export function slipAdvice(slip: Slip, readOff: 'screen' | 'display' = 'screen'): string {
-  if (readOff === 'display') return 'Look at the decimal point and at the prefix of the unit.';
+export function slipAdvice(slip: Slip, scope?: ScopeSetting): string {
+  if (scope === null) return 'Look at the decimal point and at the prefix of the unit.';
   const size = slip.factor > 1 ? slip.factor : 1 / slip.factor;
   if (slip.kind === 'scale-step') return 'Look at the volts per division: a neighbouring step would fit.';
-  return Math.round(size) === 10
-    ? 'Look at the switch on the probe.'
-    : 'Look at the prefix of the unit, and at the probe.';
+  if (Math.round(size) !== 10) return 'Look at the prefix of the unit, and at the probe.';
+  const isProbe = scope === undefined || PROBES.includes(Number((scope.probeFactor / slip.factor).toPrecision(6)));
+  return isProbe ? 'Look at the switch on the probe.' : 'Look at the volts per division.';
 }
 
 function slipWords({ factor, kind }: Slip): string {
@@ -125,19 +128,19 @@ function farWords(ratio: number): string {
  * The question in words: the value, how far it is from what the part can give, the expected band, and the likeliest slip.
  *
  * @param unit display unit of the value, whose SI base unit value and band are in
- * @param readOff the screen of a scope, or a display
+ * @param scope how the scope was set; null for a display, undefined where it is not known
  */
 export function plausibilitySentence(
   value: number,
   band: ExpectedBand,
   found: Exclude<Plausibility, { state: 'inside' }>,
   unit: string,
-  readOff: 'screen' | 'display' = 'screen',
+  scope?: ScopeSetting,
 ): string {
   const shown = formatQuantity(value, unit, { significant: 3 });
   const can = `what this part can give (${bandWords(band, unit)})`;
   if (found.slip === null)
-    return `${shown} is ${farWords(found.ratio)} ${can}. Look at the load, the connection and the ${readOff === 'screen' ? 'scale' : 'range'}.`;
+    return `${shown} is ${farWords(found.ratio)} ${can}. Look at the load, the connection and the ${scope === null ? 'range' : 'scale'}.`;
   const side = found.ratio > 1 ? 'more' : 'less';
-  return `${shown} is ${side} than ${can}; ${slipWords(found.slip)}. ${slipAdvice(found.slip, readOff)}`;
+  return `${shown} is ${side} than ${can}; ${slipWords(found.slip)}. ${slipAdvice(found.slip, scope)}`;
 }

@@ -1,4 +1,4 @@
-import { correctedBy, plausibility, plausibilitySentence } from '#shared/measurement/plausibility';
+import { correctedBy, plausibility, plausibilitySentence, slipAdvice } from '#shared/measurement/plausibility';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 
@@ -68,5 +68,21 @@ describe('a reading beside what its part can give', () => {
   it('a band that begins at nothing says nothing', () => {
     expect(() => plausibility(1, { low: 0, high: 1 })).toThrow(RangeError);
     expect(() => plausibility(Number.NaN, band)).toThrow(RangeError);
+  });
+});
+
+describe('what to look at', () => {
+  const tenTimes = { kind: 'factor', factor: 10 } as const;
+
+  it('is the probe where its switch can be the cause, else the scale', () => {
+    expect(slipAdvice(tenTimes, { voltsPerDivision: 0.5, probeFactor: 10 })).toBe('Look at the switch on the probe.');
+    expect(slipAdvice(tenTimes, { voltsPerDivision: 5, probeFactor: 1 })).toBe('Look at the volts per division.');
+    expect(slipAdvice({ kind: 'factor', factor: 0.1 }, { voltsPerDivision: 0.05, probeFactor: 1 })).toBe(
+      'Look at the switch on the probe.',
+    );
+  });
+
+  it('is the decimal point where the value stood on a display', () => {
+    expect(slipAdvice(tenTimes, null)).toBe('Look at the decimal point and at the prefix of the unit.');
   });
 });

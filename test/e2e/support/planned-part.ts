@@ -72,6 +72,7 @@ export const ADAPTER: readonly Characteristic[] = [
     ...common,
     kind: 'measured',
     key: 'v_no_load',
+    measurand: 'no-load-voltage',
     name: 'No-load voltage',
     class: 'major',
     caution: CAUTION,
@@ -81,12 +82,14 @@ export const ADAPTER: readonly Characteristic[] = [
     lowerLimit: 14,
     upperLimit: 16,
     entryMode: 'direct',
+    alternatePeaks: 'worst',
     instrumentKind: 'multimeter',
   },
   {
     ...common,
     kind: 'measured',
     key: 'v_loaded',
+    measurand: 'loaded-voltage',
     name: 'Loaded voltage',
     class: 'major',
     caution: CAUTION,
@@ -96,12 +99,14 @@ export const ADAPTER: readonly Characteristic[] = [
     lowerLimit: 11.4,
     upperLimit: 12.9,
     entryMode: 'direct',
+    alternatePeaks: 'worst',
     instrumentKind: 'multimeter',
   },
   {
     ...common,
     kind: 'measured',
     key: 'ripple_pp',
+    measurand: 'ripple',
     name: 'Ripple',
     class: 'major',
     caution: CAUTION,
@@ -111,6 +116,7 @@ export const ADAPTER: readonly Characteristic[] = [
     lowerLimit: null,
     upperLimit: 2.4,
     entryMode: 'scope',
+    alternatePeaks: 'worst',
     instrumentKind: 'oscilloscope',
   },
   {
@@ -125,7 +131,7 @@ export const ADAPTER: readonly Characteristic[] = [
     target: null,
     lowerLimit: null,
     upperLimit: 0.3,
-    formula: { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' } },
+    formula: { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' }, constants: {} },
   },
 ];
 
@@ -137,4 +143,7 @@ export const ADAPTER_PLAN: Omit<RevisionBody, 'changeNote'> = {
     { class: 'minor', aql: '2.5' },
   ],
   characteristics: [...ADAPTER],
+  decisionRule: 'simple',
+  coverageFactor: 2,
+  warmUpMinutes: null,
 };

@@ -22,10 +22,17 @@ export function plausibilityOf(
 ): PlausibilityFound | null {
   const band = expectedBand(characteristic, expected);
   if (band === null || characteristic.kind !== 'measured' || typeof value !== 'number') return null;
-  const found = plausibility(value, band, { scope: entry?.kind === 'scope' ? entry.scope : null });
+  const scope = entry?.kind === 'scope' ? entry.scope : null;
+  const found = plausibility(value, band, { scope });
   if (found.state === 'inside') return { state: 'inside', band, slip: null, sentence: '' };
-  const readOff = entry?.kind === 'direct' || characteristic.entryMode === 'direct' ? 'display' : 'screen';
-  const sentence = plausibilitySentence(value, band, found, characteristic.unit, readOff);
+  const isOnDisplay = entry?.kind === 'direct' || characteristic.entryMode === 'direct';
+  const sentence = plausibilitySentence(
+    value,
+    band,
+    found,
+    characteristic.unit,
+    isOnDisplay ? null : (scope ?? undefined),
+  );
   return { state: found.state, band, slip: found.slip, sentence };
 }
 

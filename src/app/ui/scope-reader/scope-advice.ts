@@ -1,4 +1,10 @@
-import { type ExpectedBand, plausibility, type Slip, slipAdvice } from '#shared/measurement/plausibility';
+import {
+  type ExpectedBand,
+  plausibility,
+  type ScopeSetting,
+  type Slip,
+  slipAdvice,
+} from '#shared/measurement/plausibility';
 import { formatBand } from '#shared/quantities/format-band';
 import { formatQuantity } from '#shared/quantities/format-quantity';
 import { type VerdictLook } from '../verdict-look';
@@ -38,7 +44,7 @@ export function scopeAdvice(read: Read, text: ScopeText, band: ExpectedBand): Sc
   }
   const cure = scopeCure(read, text, band, found.slip);
   const questioned = found.state === 'question';
-  const advice = adviceWords(band, found.slip, cure);
+  const advice = adviceWords(band, found.slip, cure, read.entry);
   return { look: questioned ? 'hold' : 'open', title: titleOf(found), text: advice, cure, questioned };
 }
 
@@ -53,12 +59,12 @@ function titleOf({ slip, ratio }: { slip: Slip | null; ratio: number }): string 
   return `${times} ${ratio > 1 ? 'more' : 'less'} than the model.`;
 }
 
-function adviceWords(band: ExpectedBand, slip: Slip | null, cure: ScopeCure | null): string {
+function adviceWords(band: ExpectedBand, slip: Slip | null, cure: ScopeCure | null, scope: ScopeSetting): string {
   const expected = bandWords(band);
   if (slip === null) return `Expected ${expected}. Look at the load, the connection and the scale.`;
-  if (cure === null) return `Expected ${expected}. ${slipAdvice(slip)}`;
+  if (cure === null) return `Expected ${expected}. ${slipAdvice(slip, scope)}`;
   const mended = formatQuantity(cure.volts, 'V', { significant: 3 });
-  return `With ${cure.setting} it reads ${mended}, inside ${expected}. ${slipAdvice(slip)}`;
+  return `With ${cure.setting} it reads ${mended}, inside ${expected}. ${slipAdvice(slip, scope)}`;
 }
 
 function bandWords({ low, high }: ExpectedBand): string {
