@@ -15,6 +15,7 @@ import { FileStore } from './files/file-store';
 import { type Outbox, startOutbox } from './mail/outbox';
 import { startSmtpFake } from './mail/smtp-fake';
 import { smtpTransport } from './mail/transport';
+import { completeExpected } from './parts/complete-expected';
 import { type Passwords, workerPasswords } from './sessions/passwords';
 
 /** Seed of the demo: the same quarter at every first start, up to the day. */
@@ -104,6 +105,7 @@ export async function start(environment: Environment, workerUrl: URL): Promise<R
   if (environment.mode === 'demo' && !existsSync(file)) await makeDemo(file, environment, passwords);
   const db = openDatabase(file, environment.root);
   if (environment.mode === 'production') await refuseDemoPeople(db, passwords);
+  completeExpected(db);
   const running = await startOn(db, environment, passwords);
   await makeMissingFiles(running.context);
   return {

@@ -1,33 +1,24 @@
 import { type Db } from '#db/open-database';
-import { instruments } from '#db/schema/instruments';
-import { people } from '#db/schema/people';
-import { instrumentView } from '#server/instruments/instrument-queries';
+import { rulesOf, unitsOf } from '#server/judging/lot-judging';
+import { dayOf, listInstruments } from '#server/instruments/instrument-queries';
 import { fixedSampling } from '#server/lots/lot-sampling-queries';
 import { findLot, headOf } from '#server/lots/lot-rows';
 import { Conflict } from '#server/problems';
+import { racksOf } from '#server/racks/rack-mapping';
 import { type Bench } from '#shared/contract/bench';
-import { asc } from 'drizzle-orm';
-import { rulesOf, unitsOf } from '#server/judging/lot-judging';
+import { namesOf } from './bench-names';
+import { expectedOf } from './expected-of';
+import { conditionsOf } from './lot-conditions';
 import { readingView } from './reading-view';
-
-/** Names of everybody, by id. */
-export function namesOf(db: Db): ReadonlyMap<number, string> {
-  return new Map(
-    db
-      .select({ id: people.id, name: people.name })
-      .from(people)
-      .all()
-      .map(({ id, name }) => [id, name]),
-  );
-}
+import { sampleUnitView } from './sample-unit-view';
 
 /** Everything the bench needs of a drawn lot. @throws {Conflict} before the draw */
-export function readBench(db: Db, id: number, today: string): Bench {
+export function readBench(db: Db, id: number, now: Date): Bench {
   const joined = findLot(db, id);
   const { lot } = joined;
   const sampling = fixedSampling(db, lot);
   if (!sampling) throw new Conflict('not-drawn', `The sample of lot ${lot.number} is not drawn yet.`);
-  const { characteristics, keyOf } = rulesOf(db, lot);
+  const { characteristics, keyOf, revision } = rulesOf(db, lot);
   const units = unitsOf(db, id);
   const names = namesOf(db);
   return {
@@ -35,27 +26,17 @@ export function readBench(db: Db, id: number, today: string): Bench {
     version: lot.version,
     sampling,
     characteristics: characteristics.map(({ content }) => content),
-    units: units.map(({ unit }) => ({
-      unit: unit.unit,
-      position: unit.position,
-      carton: unit.carton,
-      setAside: unit.setAsideReason,
-    })),
+    units: units.map((rows) => sampleUnitView(rows, names.people)),
     readings: units.flatMap(({ unit, readings }) =>
-      readings.map((row) =>
-        readingView(
-          row,
-          unit.unit,
-          keyOf.get(row.characteristicId) ?? '',
-          row.takenById === null ? null : (names.get(row.takenById) ?? null),
-        ),
-      ),
+      readings.map((row) => readingView(row, unit.unit, keyOf.get(row.characteristicId) ?? '', names)),
     ),
-    instruments: db
-      .select()
-      .from(instruments)
-      .orderBy(asc(instruments.assetNumber))
-      .all()
-      .map((row) => instrumentView(row, today)),
+    instruments: listInstruments(db, dayOf(now)).sort((a, b) => a.assetNumber.localeCompare(b.assetNumber)),
+    decisionRule: revision.decisionRule,
+    coverageFactor: revision.coverageFactor,
+    warmUpMinutes: revision.warmUpMinutes,
+    expected: expectedOf(db, lot.partId),
+    conditions: conditionsOf(db, id),
+    racks: racksOf(db, lot.partId),
+    cursor: now.toISOString(),
   };
 }

@@ -1,18 +1,33 @@
 import { type Context } from '#server/context';
-import { dayOf } from '#server/instruments/instrument-queries';
 import { serve } from '#server/serve';
 import * as contract from '#shared/contract/bench';
+import * as conditions from '#shared/contract/conditions';
 import { type Router } from 'express';
+import { answerQuestion } from './answer-question';
+import { readBenchChanges } from './bench-changes';
 import { readBench } from './bench-queries';
 import { reopenLot, setUnitAside, submitLot, withdrawReading } from './change-bench';
 import { keepReading } from './keep-reading';
+import { noteConditions } from './lot-conditions';
 import { importRackFile, previewRackFile } from './rack-import';
-import { RunningVerdicts } from '#server/judging/running-verdicts';
+import { ruleOnUnit } from './rule-on-unit';
+import { type RunningVerdicts } from '#server/judging/running-verdicts';
 
-export function benchRoutes(router: Router, context: Context): void {
-  const verdicts = new RunningVerdicts();
-  const today = () => dayOf(context.clock.now());
-  serve(router, contract.readBench, ({ params }) => readBench(context.db, params.id, today()));
+export function benchRoutes(router: Router, context: Context, verdicts: RunningVerdicts): void {
+  const { db, clock } = context;
+  serve(router, contract.readBench, ({ params }) => readBench(db, params.id, clock.now()));
+  serve(router, contract.readBenchChanges, ({ params, query }) =>
+    readBenchChanges(db, params.id, query.since, clock.now()),
+  );
+  serve(router, conditions.noteConditions, ({ caller, params, body }) =>
+    noteConditions(context, caller, params.id, body),
+  );
+  serve(router, contract.answerQuestion, ({ caller, params, body }) =>
+    answerQuestion(context, verdicts, caller, { lotId: params.id, readingId: params.reading }, body),
+  );
+  serve(router, contract.ruleOnUnit, ({ caller, params, body }) =>
+    ruleOnUnit(context, verdicts, caller, { lotId: params.id, unit: params.unit }, body),
+  );
   serve(router, contract.keepReading, ({ caller, params, body }) =>
     keepReading(context, verdicts, caller, params.id, params.reading, body),
   );

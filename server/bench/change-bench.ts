@@ -1,4 +1,3 @@
-import { type Db } from '#db/open-database';
 import { lots, sampleUnits } from '#db/schema/lots';
 import { readings } from '#db/schema/readings';
 import { record } from '#server/audit/record';
@@ -11,31 +10,10 @@ import { formatNumber } from '#shared/quantities/format-number';
 import { type UnitVerdict } from '#shared/verdict/sample-verdict';
 import { and, eq } from 'drizzle-orm';
 import { lotAtBench } from './bench-lot';
-import { countingReadings, type LotRules, unitOf } from '#server/judging/lot-judging';
+import { countingReadings, type LotRules, unitOf, type UnitRows } from '#server/judging/lot-judging';
 import { judgeSampleOf } from '#server/judging/sample-judging';
-import { rejudge, type RunningVerdicts } from '#server/judging/running-verdicts';
-
-const DONE = { done: true } as const;
-
-/** Runs an act on one unit of a lot at the bench, judges the lot again, and forgets what was held of it. */
-function onUnit(
-  context: Context,
-  verdicts: RunningVerdicts,
-  lotId: number,
-  change: (db: Db, at: Date) => number,
-): typeof DONE {
-  const at = context.clock.now();
-  context.db.transaction((tx) => {
-    const lot = lotAtBench(tx, lotId);
-    const held = verdicts.of(tx, lot);
-    const unit = change(tx, at);
-    const rows = unitOf(tx, lotId, unit);
-    if (!rows) throw new Error(`Lot ${lot.number} has no unit ${unit}.`);
-    rejudge(tx, lot, held, rows, at);
-  });
-  verdicts.drop(lotId);
-  return DONE;
-}
+import { type RunningVerdicts } from '#server/judging/running-verdicts';
+import { DONE, onUnit } from './on-unit';
 
 /** Takes back the reading that counts in its cell; it stays on record as withdrawn. */
 export function withdrawReading(
@@ -109,13 +87,27 @@ function readingsMissing(units: readonly UnitVerdict[], characteristics: LotRule
   return units.reduce((sum, { missing }) => sum + missing.filter((key) => !computed.has(key)).length, 0);
 }
 
+/** A reading far from what the part can give is never taken in silently: somebody confirms or repeats it first. */
+function holdAnswered(units: readonly UnitRows[]): void {
+  const open = units.filter(({ readings: rows }) =>
+    [...countingReadings(rows).values()].some(({ question }) => question?.given.answer === 'open'),
+  );
+  if (open.length === 0) return;
+  const named = open.slice(0, 5).map(({ unit }) => unit.unit);
+  throw new Conflict(
+    'questions-open',
+    `Readings of a rack are far from what the part can give and wait for an answer: ${open.length === 1 ? 'unit' : 'units'} ${named.join(', ')}${open.length > 5 ? ' and others' : ''}. Confirm or repeat them.`,
+  );
+}
+
 /** Submits a lot for decision: everything required is judged, or a rejection number is reached. */
 export function submitLot(context: Context, verdicts: RunningVerdicts, caller: Caller, id: number, version: number) {
   const at = context.clock.now();
   context.db.transaction((tx) => {
     const lot = lotAtBench(tx, id);
     holdVersion(`Lot ${lot.number}`, lot.version, version);
-    const { verdict, rules } = judgeSampleOf(tx, lot);
+    const { verdict, rules, units } = judgeSampleOf(tx, lot);
+    holdAnswered(units);
     const settled = judgeSampleOf(tx, lot, { submitting: true }).verdict.lot;
     // A verdict may hang on a reading that is missing beyond its own group; without it nobody could sign.
     if ((!verdict.lot.stop && !verdict.lot.complete) || settled.verdict === 'continue') {

@@ -27,6 +27,11 @@ const insertion = preparedOnce((db) =>
       repeatNote: bound('repeatNote'),
       takenById: bound('takenById'),
       rackImportId: bound('rackImportId'),
+      rackId: bound('rackId'),
+      rangeId: bound('rangeId'),
+      expandedUncertainty: bound('expandedUncertainty'),
+      waveformId: bound('waveformId'),
+      question: sql`${bound('question')}`,
       takenAt: bound('takenAt'),
       receivedAt: bound('receivedAt'),
     })
@@ -39,6 +44,7 @@ export function insertReading(db: Db, fresh: FreshReading): ReadingRow {
     ...fresh,
     pass: fresh.pass === null ? null : Number(fresh.pass),
     entry: fresh.entry === null ? null : JSON.stringify(fresh.entry),
+    question: fresh.question === null ? null : JSON.stringify(fresh.question),
   });
   return { ...fresh, withdrawnAt: null, withdrawnById: null };
 }

@@ -12,15 +12,19 @@ import { findLot, type LotRow } from '#server/lots/lot-rows';
 import { recordLot } from '#server/lots/record-lot';
 import { Conflict, Refused } from '#server/problems';
 import { type Kept, type ReadingBody } from '#shared/contract/bench';
+import { type Characteristic } from '#shared/contract/plans';
 import { mayRepeat } from '#shared/verdict/counting-reading';
 import { eq, sql } from 'drizzle-orm';
 import { lotAtBench } from './bench-lot';
 import { entryValue } from './entry-value';
+import { expectedOf } from './expected-of';
 import { insertReading } from './insert-reading';
 import { countingReadings, unitOf, type LotRules, type ReadingRow, type UnitRows } from '#server/judging/lot-judging';
 import { holdInstrument } from './reading-instrument';
+import { answeredQuestion, questionOf, readingFacts } from './reading-facts';
 import { readingView } from './reading-view';
 import { takenAt } from './taken-at';
+import { waveOf } from './wave-of';
 import { rejudge, runningVerdict, type RunningVerdict, type RunningVerdicts } from '#server/judging/running-verdicts';
 
 const readingById = preparedOnce((db) =>
@@ -106,6 +110,30 @@ export function startMeasuring(db: Db, lot: LotRow, caller: Caller, at: Date): v
   recordLot(db, { at, person: caller, action: 'started', lotId: lot.id, note: '' });
 }
 
+/** Range, uncertainty and plausibility of a measured value; nothing of the kind for what is judged by eye. */
+function measuredFacts(
+  db: Db,
+  lot: LotRow,
+  rules: LotRules,
+  content: Characteristic,
+  given: { body: ReadingBody; value: number | null; by: { name: string; at: Date } },
+) {
+  const { body, value, by } = given;
+  if (content.kind !== 'measured' || value === null)
+    return { rangeId: null, expandedUncertainty: null, question: null } as const;
+  const { entry, instrumentId, rangeId } = body;
+  const facts = readingFacts(db, rules.revision, content, { value, entry, instrumentId, rangeId });
+  const expected = expectedOf(db, lot.partId);
+  const corrected = () => {
+    if (body.question?.answer !== 'corrected') return undefined;
+    const from = body.question.from;
+    const before = entryValue(from, content, waveOf(db, lot, { ...body, entry: from })).value;
+    return before === null ? undefined : questionOf(content, expected, { value: before, entry: from });
+  };
+  const question = answeredQuestion(questionOf(content, expected, { value, entry }), body.question, by, corrected);
+  return { ...facts, question };
+}
+
 function insert(
   db: Db,
   lot: LotRow,
@@ -118,9 +146,10 @@ function insert(
 ) {
   const content = rules.characteristics.find((one) => one.id === cell.characteristicId)?.content;
   if (!content) throw new Error('A cell without characteristic.');
-  const worth = entryValue(body.entry, content);
+  const worth = entryValue(body.entry, content, waveOf(db, lot, body));
   holdInstrument(db, content, body.instrumentId, dayOf(at));
   holdRepeat(db, cell, body);
+  const measured = measuredFacts(db, lot, rules, content, { body, value: worth.value, by: { name: caller.name, at } });
   const row = insertReading(db, {
     id,
     lotId: lot.id,
@@ -128,8 +157,11 @@ function insert(
     characteristicId: cell.characteristicId,
     attempt: cell.earlier.length + 1,
     ...worth,
+    ...measured,
     entry: body.entry,
     instrumentId: body.instrumentId,
+    waveformId: body.entry.kind === 'waveform' ? body.entry.waveformId : null,
+    rackId: null,
     note: body.note,
     repeatReason: body.repeat?.reason ?? null,
     repeatNote: body.repeat?.note ?? null,
@@ -144,15 +176,26 @@ function insert(
     action: 'kept',
     subject: 'reading',
     subjectId: id,
-    after: { lot: lot.id, unit: body.unit, characteristic: content.key, ...worth, attempt: row.attempt },
+    after: {
+      lot: lot.id,
+      unit: body.unit,
+      characteristic: content.key,
+      ...worth,
+      attempt: row.attempt,
+      ...(row.question && { question: row.question.given }),
+    },
   });
   return row;
 }
 
 function acknowledge(db: Db, row: ReadingRow, body: ReadingBody, running: RunningVerdict): Kept {
+  const names = {
+    people: new Map([[row.takenById ?? 0, nameOf(db, row.takenById)]]),
+    racks: new Map<number, string>(),
+  };
   const verdict = running.unit.characteristics.get(body.characteristicKey)?.verdict;
   return {
-    reading: readingView(row, body.unit, body.characteristicKey, nameOf(db, row.takenById)),
+    reading: readingView(row, body.unit, body.characteristicKey, names),
     verdict: verdict === undefined || verdict === 'not judged' ? 'conforming' : verdict,
     unitVerdict: running.unit.verdict,
     stop: running.lot.stop,

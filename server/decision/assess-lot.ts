@@ -1,5 +1,5 @@
 import { type Db } from '#db/open-database';
-import { namesOf } from '#server/bench/bench-queries';
+import { namesOf } from '#server/bench/bench-names';
 import { judgeSampleOf, type JudgedLot } from '#server/judging/sample-judging';
 import { type Caller } from '#server/caller';
 import { readLot } from '#server/lots/lot-queries';
@@ -73,7 +73,11 @@ export function assessLot(db: Db, id: number, caller: Caller): Assessment {
     characteristics: characteristicResults(judged),
     instruments: instrumentsUsed(db, counting),
     takenBy: [
-      ...new Set(counting.map(({ takenById }) => (takenById === null ? 'Rack' : (names.get(takenById) ?? '')))),
+      ...new Set(
+        counting.map(({ takenById, rackId }) =>
+          takenById === null ? (names.racks.get(rackId ?? 0) ?? 'Rack') : (names.people.get(takenById) ?? ''),
+        ),
+      ),
     ],
     repeats: repeatsOf(judged),
     setAside: judged.units.flatMap(({ unit }) =>

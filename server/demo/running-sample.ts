@@ -25,7 +25,7 @@ export class RunningSample {
     this.rules = rulesOf(db, lot);
     this.units = new Map(
       unitsOf(db, lot.id).map((rows) => {
-        const judged = judgedReadings(rows, this.rules.keyOf);
+        const judged = judgedReadings(db, rows, this.rules);
         const attempts = new Map([...judged.values.keys()].map((key) => [key, 1]));
         const running = { id: rows.unit.id, values: new Map(judged.values), attempts, verdict: this.judge(judged) };
         return [judged.unit, running];

@@ -46,7 +46,7 @@ export class RunningVerdicts {
     const known = this.held.get(lot.id);
     if (known) return known;
     const rules = rulesOf(db, lot);
-    const verdicts = unitsOf(db, lot.id).map((rows) => judgeUnit(rules.rules, judgedReadings(rows, rules.keyOf)));
+    const verdicts = unitsOf(db, lot.id).map((rows) => judgeUnit(rules.rules, judgedReadings(db, rows, rules)));
     const fresh = { rules, units: new Map(verdicts.map((verdict) => [verdict.unit, verdict])) };
     this.hold(lot.id, fresh);
     return fresh;
@@ -81,7 +81,7 @@ export function runningVerdict({ rules, units }: HeldLot, unit: number): Running
  * @param rows the unit and its readings as they are now
  */
 export function rejudge(db: Db, lot: LotRow, held: HeldLot, rows: UnitRows, at: Date): RunningVerdict {
-  const verdict = judgeUnit(held.rules.rules, judgedReadings(rows, held.rules.keyOf));
+  const verdict = judgeUnit(held.rules.rules, judgedReadings(db, rows, held.rules));
   const units = [...held.units.values()].map((known) => (known.unit === verdict.unit ? verdict : known));
   return { unit: verdict, lot: keepProgress(db, lot, held.rules, units, at) };
 }

@@ -17,7 +17,7 @@ export interface JudgedLot {
 export function judgeSampleOf(db: Db, lot: LotRow, options: JudgingOptions = {}): JudgedLot {
   const rules = rulesOf(db, lot);
   const rows = unitsOf(db, lot.id);
-  const units = rows.map((unit) => judgeUnit(rules.rules, judgedReadings(unit, rules.keyOf), options));
+  const units = rows.map((unit) => judgeUnit(rules.rules, judgedReadings(db, unit, rules), options));
   const groups = judgeGroups(rules.rules, units);
   return { rules, units: rows, verdict: { units, groups, lot: judgeLot(rules.rules, units, groups) } };
 }

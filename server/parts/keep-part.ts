@@ -6,6 +6,7 @@ import { type Context } from '#server/context';
 import { holdVersion, NotFound } from '#server/problems';
 import { holdUnique } from '#server/taken';
 import { type Part, type partBody } from '#shared/contract/parts';
+import { expectedBands } from '#shared/measurement/rectifier/expected-bands';
 import { eq } from 'drizzle-orm';
 import type * as z from 'zod';
 import { findPart, partOfRow } from './part-queries';
@@ -18,8 +19,9 @@ function holdOwnNumber(db: Db, own: number | undefined, number: string): void {
   ]);
 }
 
+/** What the rectifier ought to give is computed here, once, and not while somebody measures. */
 function columnsOf({ model, ...rest }: Body) {
-  return { ...rest, ...model };
+  return { ...rest, ...model, expected: expectedBands(model) };
 }
 
 export function addPart({ db, clock }: Context, caller: Caller, body: Body): Part {

@@ -12,10 +12,10 @@ type PartRow = typeof parts.$inferSelect;
 
 /** The columns of a part, as the contract groups them. */
 export function partOfRow(row: PartRow): Omit<Part, 'plan'> {
-  const { id, version, number, name, form, active, lineHertz, ...model } = row;
+  const { id, version, number, name, form, active, lineHertz, expected, ...model } = row;
   // The table's CHECK lets only these two in.
   const electrical: ElectricalModel = { ...model, lineHertz: lineHertz === 60 ? 60 : 50 };
-  return { id, version, number, name, form, active, model: electrical };
+  return { id, version, number, name, form, active, model: electrical, expected };
 }
 
 function withPlan(db: Db) {

@@ -1,15 +1,16 @@
+import { type Answer, type Question } from '#server/threads/worker-thread';
 import bcrypt from 'bcryptjs';
 import { parentPort } from 'node:worker_threads';
-import { type PasswordAnswer, type PasswordTask } from './passwords';
+import { type PasswordTask } from './passwords';
 
-function answer(task: PasswordTask): PasswordAnswer {
+function answer({ id, task }: Question<PasswordTask>): Answer<string | boolean, never> {
   try {
     const result =
       task.kind === 'hash' ? bcrypt.hashSync(task.password, task.cost) : bcrypt.compareSync(task.password, task.hash);
-    return { id: task.id, result };
+    return { id, result };
   } catch (error) {
-    return { id: task.id, failure: error instanceof Error ? error.message : String(error) };
+    return { id, failure: error instanceof Error ? error.message : String(error) };
   }
 }
 
-parentPort?.on('message', (task: PasswordTask) => parentPort?.postMessage(answer(task)));
+parentPort?.on('message', (question: Question<PasswordTask>) => parentPort?.postMessage(answer(question)));

@@ -10,6 +10,7 @@ const WRITERS = ['inspector', 'quality'] as const satisfies readonly Role[];
 export const FINDING_KINDS = [
   'clipped',
   'aliased',
+  'too-coarse',
   'too-short',
   'one-half-open',
   'unequal-halves',
@@ -30,12 +31,14 @@ export const waveformPeak = z.object({
 /** What was computed of a waveform's whole line cycles; SI base units. */
 export const waveformAnalysis = z.object({
   lineHertz: z.number(),
+  /** Whole line cycles that everything below was computed from; 0 where there is not one, then from all samples. */
   lineCycles: z.int(),
   mean: z.number(),
   max: z.number(),
   min: z.number(),
   peakToPeak: z.number(),
   rmsAc: z.number(),
+  /** The strongest multiple of the line frequency; null where there is no ripple or no whole line cycle. */
   rippleHertz: z.number().nullable(),
   /** Amplitudes at the line frequency and at twice it. */
   atLine: z.number(),
@@ -63,11 +66,10 @@ export const waveformRecord = z.object({
   columns: z.array(z.string()),
   channel: z.string(),
   samples: z.int(),
-  /** Start and interval in seconds where the samples are evenly spaced; null where their times are kept beside them. */
-  spacing: z.object({ start: z.number(), interval: z.number() }).nullable(),
-  /** First and last instant, in seconds. */
-  from: z.number(),
-  to: z.number(),
+  /** Instant of the first sample and the time between two, in seconds. */
+  spacing: z.object({ start: z.number(), interval: z.number() }),
+  /** Whether the file's samples were unevenly spaced: then these lie between its own, on straight lines. */
+  interpolated: z.boolean(),
   analysis: waveformAnalysis,
   findings: z.array(waveformFinding),
   spectrum: z.object({ hertzPerBin: z.number(), amplitudes: z.array(z.number()) }),
@@ -147,8 +149,7 @@ export const readWaveformSamples = endpoint({
   method: 'GET',
   path: '/api/waveforms/:waveform/samples',
   who: READERS,
-  summary:
-    'The samples: 32-bit floats in volts, little-endian; behind them, where unevenly spaced, 64-bit floats in seconds.',
+  summary: 'The samples: 32-bit floats in volts, little-endian, evenly spaced as the record says.',
   params: byWaveform,
   media: 'application/octet-stream',
   reply: storedFile,
