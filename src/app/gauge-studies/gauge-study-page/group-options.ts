@@ -13,9 +13,11 @@ export interface GroupsOfReadings {
   readonly decimals: number;
 }
 
-/** From so many groups on, their names no longer all have room. */
+/** With more groups their names no longer all have room. */
 const MOST_NAMES = 16;
-const NAME_WIDTH = 72;
+/** Room for the names together, and for one alone at most, in px. */
+const NAMES_WIDTH = 560;
+const NAME_WIDTH = 160;
 
 /** Readings as white-filled circles and their mean as a bar, group beside group on one scale. */
 export function groupOptions({ names, groups, unit, decimals }: GroupsOfReadings) {
@@ -35,8 +37,9 @@ export function groupOptions({ names, groups, unit, decimals }: GroupsOfReadings
         axisLabel: {
           ...axis.axisLabel,
           interval: names.length <= MOST_NAMES ? 0 : 'auto',
-          width: NAME_WIDTH,
+          width: Math.min(NAME_WIDTH, NAMES_WIDTH / Math.min(names.length, MOST_NAMES)),
           overflow: 'truncate',
+          ellipsis: '…',
           hideOverlap: true,
         },
       },

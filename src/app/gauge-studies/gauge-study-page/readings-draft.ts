@@ -20,15 +20,20 @@ export interface CellFault {
   message: string;
 }
 
-/** A value as its cell shows it, in the study's unit and with the decimal sign of this browser. */
-export function cellText(value: number | null, unit: string): string {
+/**
+ * A value as its cell shows it: in the study's unit, with its decimals unless the value has more of them, and with the
+ * decimal sign of this browser.
+ */
+export function cellText(value: number | null, { unit, decimals }: Pick<GaugeStudy, 'unit' | 'decimals'>): string {
   if (value === null) return '';
-  const text = String(inDisplayUnit(value, unit));
+  const shown = inDisplayUnit(value, unit);
+  const fixed = shown.toFixed(decimals);
+  const text = Number(fixed) === shown ? fixed : String(shown);
   return DECIMAL_COMMA ? text.replace('.', ',') : text;
 }
 
-function textsOf({ values, unit }: GaugeStudy): Texts {
-  return values.map((rows) => rows.map((cell) => cell.map((value) => cellText(value, unit))));
+function textsOf(study: GaugeStudy): Texts {
+  return study.values.map((rows) => rows.map((cell) => cell.map((value) => cellText(value, study))));
 }
 
 /** The readings of a study as they are typed, until they are saved. What cannot be read stays as it was typed. */

@@ -65,7 +65,7 @@ export class ReadingsEntry {
 
   private takeFile(name: string, text: string): void {
     const { study } = this.draft();
-    const show = (value: number) => cellText(value, study.unit);
+    const show = (value: number) => cellText(value, study);
     const { texts, faults } = studyFile(text, study, { unit: study.unit, show });
     this.file.set(faults.length > 0 ? { name, faults } : null);
     if (texts.length > 0) this.place(texts);

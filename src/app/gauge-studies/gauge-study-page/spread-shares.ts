@@ -39,6 +39,9 @@ import { ShareStrip } from './share-strip';
         </tbody>
       </table>
     </div>
+    @if (!hasTolerance()) {
+      <p class="caption">The share of tolerance needs a lower and an upper limit.</p>
+    }
     @if (negative()) {
       <p class="caption">{{ negative() }}</p>
     }

@@ -20,7 +20,7 @@ import { ScrollRegion } from '../../ui/scroll-region';
             <th scope="col" class="right">Mean square, ({{ unit() }})²</th>
             <th scope="col" class="right">F</th>
             <th scope="col" class="right">p</th>
-            <th scope="col">F divides by</th>
+            <th scope="col" class="against">F divides by</th>
           </tr>
         </thead>
         <tbody>
@@ -32,7 +32,7 @@ import { ScrollRegion } from '../../ui/scroll-region';
               <td class="num right">{{ row.mean }}</td>
               <td class="num right">{{ row.f }}</td>
               <td class="num right">{{ row.p }}</td>
-              <td class="quiet">{{ row.against }}</td>
+              <td class="quiet against">{{ row.against }}</td>
             </tr>
           }
         </tbody>
