@@ -27,6 +27,7 @@ export const waveformPeak = z.object({
   volts: z.number(),
   family: z.enum(['odd', 'even']),
 });
+export type WaveformPeak = z.infer<typeof waveformPeak>;
 
 /** What was computed of a waveform's whole line cycles; SI base units. */
 export const waveformAnalysis = z.object({
@@ -44,6 +45,7 @@ export const waveformAnalysis = z.object({
   atLine: z.number(),
   atTwiceLine: z.number(),
   peaksPerCycle: z.number(),
+  /** The first thousand of them; their means are over all. */
   peaks: z.array(waveformPeak),
   oddMean: z.number().nullable(),
   evenMean: z.number().nullable(),
