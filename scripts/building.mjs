@@ -32,9 +32,13 @@ function builtFrom(part) {
   return existsSync(stamp) ? readFileSync(stamp, 'utf8') : '';
 }
 
-/** What esbuild makes of the server: one file, and one for the thread that hashes passwords. Packages stay outside. */
+/** What esbuild makes of the server: one file, and one for each thread beside it. Packages stay outside. */
 export const serverBuild = {
-  entryPoints: { main: 'server/main.ts', 'password-worker': 'server/sessions/password-worker.ts' },
+  entryPoints: {
+    main: 'server/main.ts',
+    'password-worker': 'server/sessions/password-worker.ts',
+    'waveform-worker': 'server/waveforms/waveform-worker.ts',
+  },
   outdir: 'dist/server',
   bundle: true,
   platform: 'node',

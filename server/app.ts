@@ -17,6 +17,7 @@ import { nonconformanceRoutes } from './nonconformances/nonconformance-routes';
 import { partRoutes } from './parts/part-routes';
 import { peopleRoutes } from './people/people-routes';
 import { planRoutes } from './plans/plan-routes';
+import { waveformRoutes } from './waveforms/waveform-routes';
 import { yieldRoutes } from './yields/yield-routes';
 import { rackRoutes } from './racks/rack-routes';
 import { attachRack } from './racks/attach-rack';
@@ -50,6 +51,7 @@ const AREAS: readonly ((router: Router, context: Context, verdicts: RunningVerdi
   gaugeStudyRoutes,
   lotRoutes,
   benchRoutes,
+  waveformRoutes,
   rackRoutes,
   decisionRoutes,
   certificateRoutes,

@@ -6,6 +6,7 @@ import { type Stream } from './events/stream';
 import { type FileStore } from './files/file-store';
 import { type Outbox } from './mail/outbox';
 import { type Passwords } from './sessions/passwords';
+import { type WaveReader } from './waveforms/wave-reader';
 
 /** What every act may use; built once at the start and passed as an argument. */
 export interface Context {
@@ -17,4 +18,5 @@ export interface Context {
   outbox: Outbox;
   stream: Stream;
   files: FileStore;
+  waves: WaveReader;
 }

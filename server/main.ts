@@ -33,7 +33,7 @@ function greet(context: Context, address: string): void {
 
 async function main(environment: Environment): Promise<void> {
   if (environment.mode === 'demo') say('Starting in demo mode.');
-  const running = await start(environment, new URL('./password-worker.js', import.meta.url));
+  const running = await start(environment, new URL('./', import.meta.url));
   const server = createApp(running.context).listen(environment.port, environment.host, () => {
     const { port } = server.address() as AddressInfo;
     greet(running.context, environment.publicUrl ?? `http://${environment.host}:${port}`);

@@ -17,6 +17,7 @@ import { startSmtpFake } from './mail/smtp-fake';
 import { smtpTransport } from './mail/transport';
 import { completeExpected } from './parts/complete-expected';
 import { type Passwords, workerPasswords } from './sessions/passwords';
+import { inProcessWaves, type WaveReader, workerWaves } from './waveforms/wave-reader';
 
 /** Seed of the demo: the same quarter at every first start, up to the day. */
 const DEMO_SEED = 20_26;
@@ -33,7 +34,12 @@ function filesOf(environment: Environment): FileStore {
 }
 
 /** Starts everything on a database but the listening: mail, its local fake when no server is named, the live counts. */
-async function startOn(db: Database, environment: Environment, passwords: Passwords): Promise<Running> {
+async function startOn(
+  db: Database,
+  environment: Environment,
+  passwords: Passwords,
+  waves: WaveReader,
+): Promise<Running> {
   const log = pino({ level: environment.logLevel });
   const clock = systemClock;
   const fake = environment.smtpUrl === undefined ? await startSmtpFake({ db, clock, log }) : undefined;
@@ -42,7 +48,7 @@ async function startOn(db: Database, environment: Environment, passwords: Passwo
   const stream = new Stream({ db, clock });
   const files = filesOf(environment);
   files.sweep(db);
-  const context = { db, clock, environment, log, passwords, outbox, stream, files };
+  const context = { db, clock, environment, log, passwords, outbox, stream, files, waves };
   return {
     context,
     close: async () => {
@@ -67,7 +73,17 @@ async function makeDemo(file: string, environment: Environment, passwords: Passw
   const stream = new Stream({ db, clock });
   const log = pino({ level: environment.logLevel });
   const files = filesOf(environment);
-  const context = { db, clock, environment, log, passwords, outbox: QUIET_OUTBOX, stream, files };
+  const context = {
+    db,
+    clock,
+    environment,
+    log,
+    passwords,
+    outbox: QUIET_OUTBOX,
+    stream,
+    files,
+    waves: inProcessWaves(),
+  };
   await playDemo(context, { until: clock.now(), seed: DEMO_SEED });
   stream.close();
   db.$client.pragma('wal_checkpoint(TRUNCATE)');
@@ -95,24 +111,25 @@ async function refuseDemoPeople(db: Database, passwords: Passwords): Promise<voi
 /**
  * Opens the data folder and starts the program on it; in demo mode an empty folder is given the demo first.
  *
- * @param workerUrl where the thread that hashes passwords lies
+ * @param threads the folder in which the compiled threads lie
  * @throws {EnvironmentRefused} when production would run on demo data
  */
-export async function start(environment: Environment, workerUrl: URL): Promise<Running> {
+export async function start(environment: Environment, threads: URL): Promise<Running> {
   mkdirSync(environment.dataFolder, { recursive: true });
   const file = path.join(environment.dataFolder, 'quietrail.db');
-  const passwords = workerPasswords(environment.passwordCost, workerUrl);
+  const passwords = workerPasswords(environment.passwordCost, new URL('password-worker.js', threads));
   if (environment.mode === 'demo' && !existsSync(file)) await makeDemo(file, environment, passwords);
   const db = openDatabase(file, environment.root);
   if (environment.mode === 'production') await refuseDemoPeople(db, passwords);
   completeExpected(db);
-  const running = await startOn(db, environment, passwords);
+  const waves = workerWaves(new URL('waveform-worker.js', threads));
+  const running = await startOn(db, environment, passwords, waves);
   await makeMissingFiles(running.context);
   return {
     context: running.context,
     close: async () => {
       await running.close();
-      await passwords.close();
+      await Promise.all([passwords.close(), waves.close()]);
     },
   };
 }

@@ -19,6 +19,8 @@ export interface ReceivedFile {
 }
 
 const UNFINISHED = '.part';
+/** How many times the allowed size an upload may have before its connection is cut. */
+const HEARD_OUT = 4;
 
 /** Megabytes as people count them. */
 function megabytes(bytes: number): string {
@@ -54,12 +56,15 @@ export class FileStore {
     const unfinished = this.pathOf(id + UNFINISHED);
     const hash = createHash('sha256');
     let bytes = 0;
+    const tooLarge = () => new Problem(413, 'too-large', `The file is larger than ${megabytes(most)}.`);
     const measure = new Transform({
       transform(chunk: Buffer, _encoding, done) {
         bytes += chunk.length;
         hash.update(chunk);
-        if (bytes > most) done(new Problem(413, 'too-large', `The file is larger than ${megabytes(most)}.`));
-        else done(null, chunk);
+        if (bytes <= most) done(null, chunk);
+        // The rest is heard out, so that the answer reaches a sender who does not listen while it sends; up to a point.
+        else if (bytes <= most * HEARD_OUT) done();
+        else done(tooLarge());
       },
     });
     try {
@@ -68,6 +73,10 @@ export class FileStore {
       rmSync(unfinished, { force: true });
       if (stream.readableAborted) throw new Problem(400, 'upload-broken', 'The upload broke off; nothing was kept.');
       throw error;
+    }
+    if (bytes > most) {
+      rmSync(unfinished);
+      throw tooLarge();
     }
     return { ...this.finish(id), bytes, sha256: hash.digest('hex') };
   }

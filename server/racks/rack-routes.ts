@@ -9,6 +9,7 @@ import { issueToken, revokeToken } from './keep-tokens';
 import { rackLimit } from './rack-limit';
 import { readRackLot } from './rack-lot';
 import { findRack, listRacks } from './rack-queries';
+import { keepRackWaveform } from './keep-rack-waveform';
 
 /** What people do with racks, and behind it what racks do by themselves. */
 export function rackRoutes(router: Router, context: Context, verdicts: RunningVerdicts): void {
@@ -28,5 +29,8 @@ export function rackRoutes(router: Router, context: Context, verdicts: RunningVe
   serve(router, contract.readRackLot, ({ rack, params }) => readRackLot(db, verdicts, rack, params.number));
   serve(router, contract.sendRackReadings, ({ rack, params, body }) =>
     keepRackReadings(context, verdicts, rack, params.number, body.readings),
+  );
+  serve(router, contract.sendRackWaveform, ({ rack, params, query, request }) =>
+    keepRackWaveform(context, rack, params, { ...query, stream: request }),
   );
 }

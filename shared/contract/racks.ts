@@ -4,6 +4,7 @@ import { byId, done, endpoint } from './endpoint';
 import { id, line, moment, optionalLine, version } from './fields';
 import { instrumentKind } from './instruments';
 import { type Role } from './roles';
+import { LARGEST_WAVEFORM, waveformFinding } from './waveforms';
 
 const READERS = ['quality', 'auditor', 'admin'] as const satisfies readonly Role[];
 const WRITERS = ['admin'] as const satisfies readonly Role[];
@@ -193,5 +194,31 @@ export const sendRackReadings = endpoint({
     /** Whether a rejection number is reached. */
     stop: z.boolean(),
     reason: z.string(),
+  }),
+});
+
+export const sendRackWaveform = endpoint({
+  method: 'PUT',
+  path: '/api/rack/lots/:number/waveforms/:own',
+  who: 'rack',
+  summary: 'Keep a waveform file (CSV) of a unit under the rack’s own id; sending it twice changes nothing.',
+  params: z.object({ number: z.string().max(40), own: line(80) }),
+  query: z.object({
+    fileName: line(200),
+    unit: z.coerce.number().int().positive(),
+    characteristicKey: z.string().max(32).optional(),
+    /** Name of the column to take; the first after the time unless given. */
+    channel: z.string().max(200).optional(),
+  }),
+  upload: LARGEST_WAVEFORM,
+  reply: z.object({
+    /** The id it is kept under. */
+    id: z.uuid(),
+    /** Whether it was new. */
+    kept: z.boolean(),
+    samples: z.int(),
+    /** Volts. */
+    peakToPeak: z.number(),
+    findings: z.array(waveformFinding),
   }),
 });

@@ -110,7 +110,7 @@ export const waveform = waveformHead.extend({
 export type Waveform = z.infer<typeof waveform>;
 
 /** The largest file taken in: five million rows of thirty characters. */
-const LARGEST = 150_000_000;
+export const LARGEST_WAVEFORM = 150_000_000;
 
 export const listWaveforms = endpoint({
   method: 'GET',
@@ -133,7 +133,7 @@ export const keepWaveform = endpoint({
     /** Name of the column to take; the first after the time unless given. */
     channel: z.string().max(200).optional(),
   }),
-  upload: LARGEST,
+  upload: LARGEST_WAVEFORM,
   reply: waveform,
 });
 

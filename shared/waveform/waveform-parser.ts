@@ -168,9 +168,9 @@ export class WaveformParser {
     let start = from;
     if (delimiter === SPACE) while (start < to && bytes[start] === SPACE) start += 1;
     for (let passed = 0; passed < column; passed += 1) {
-      const next = bytes.indexOf(delimiter, start);
-      if (next < 0 || next >= to)
-        throw new WaveformNotUnderstood('it has fewer columns than the rows above it.', this.row);
+      let next = start;
+      while (next < to && bytes[next] !== delimiter) next += 1;
+      if (next === to) throw new WaveformNotUnderstood('it has fewer columns than the rows above it.', this.row);
       start = next + 1;
       if (delimiter === SPACE) while (start < to && bytes[start] === SPACE) start += 1;
     }

@@ -8,6 +8,7 @@ import { FileStore } from '#server/files/file-store';
 import { inProcessPasswords } from '#server/sessions/passwords';
 import { signAccessToken } from '#server/sessions/access-token';
 import { startSession } from '#server/sessions/start-session';
+import { inProcessWaves } from '#server/waveforms/wave-reader';
 import { type Role } from '#shared/contract/roles';
 import { type Express } from 'express';
 import { mkdtempSync, rmSync } from 'node:fs';
@@ -58,6 +59,7 @@ function testContext(environment: Environment, clock: TestClock): Context {
     outbox: { wake: () => undefined, close: () => Promise.resolve(), idle: () => Promise.resolve() },
     stream: new Stream({ db, clock }),
     files: new FileStore(environment.dataFolder),
+    waves: inProcessWaves(),
   };
 }
 
