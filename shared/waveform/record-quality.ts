@@ -21,19 +21,36 @@ const END = 0.01;
  * root of the depth); one that is cut off has all of the cut there.
  */
 const THICKER = 6;
+/** A wave that is cut off stays there for several samples at a time; one that turns may have a single one at its top. */
+const LEAST_STAY = 3;
 const MOST_LEVELS = 64;
 
-function ends(volts: Float32Array, min: number, max: number) {
-  const range = max - min;
-  const counts = { top: 0, belowTop: 0, bottom: 0, aboveBottom: 0 };
+/** Samples at an end of the range, how often the wave comes there, and samples just short of it. */
+interface EndOfRange {
+  flat: number;
+  visits: number;
+  short: number;
+}
+
+/** @param heightOf height of a sample above the other end, as a share of the range */
+function endOfRange(volts: Float32Array, heightOf: (value: number) => number): EndOfRange {
+  const end = { flat: 0, visits: 0, short: 0 };
+  let wasFlat = false;
   for (const value of volts) {
-    const height = (value - min) / range;
-    if (height >= 1 - END) counts.top += 1;
-    else if (height >= 1 - 2 * END) counts.belowTop += 1;
-    else if (height <= END) counts.bottom += 1;
-    else if (height <= 2 * END) counts.aboveBottom += 1;
+    const height = heightOf(value);
+    const isFlat = height >= 1 - END;
+    if (isFlat) {
+      end.flat += 1;
+      if (!wasFlat) end.visits += 1;
+    } else if (height >= 1 - 2 * END) end.short += 1;
+    wasFlat = isFlat;
   }
-  return counts;
+  return end;
+}
+
+/** Share of the samples that lie flat at an end; 0 where the wave only turns there. */
+function flatShare({ flat, visits, short }: EndOfRange, samples: number): number {
+  return flat > THICKER * short && flat >= LEAST_STAY * visits ? flat / samples : 0;
 }
 
 function levelsOf(volts: Float32Array): number {
@@ -71,11 +88,13 @@ export function recordQuality({ volts, interval }: EvenSamples, lineHertz: numbe
     if (value < min) min = value;
     if (value > max) max = value;
   }
-  const { top, belowTop, bottom, aboveBottom } = ends(volts, min, max);
+  const range = max - min;
+  const top = endOfRange(volts, (value) => (value - min) / range);
+  const bottom = endOfRange(volts, (value) => (max - value) / range);
   const { count, samplesPerCycle } = lineCycles(volts.length, interval, lineHertz);
   return {
-    flatTop: top > THICKER * belowTop ? top / volts.length : 0,
-    flatBottom: bottom > THICKER * aboveBottom ? bottom / volts.length : 0,
+    flatTop: flatShare(top, volts.length),
+    flatBottom: flatShare(bottom, volts.length),
     levels: levelsOf(volts),
     samplesPerPeriod: periodOf(volts),
     samplesPerCycle,
