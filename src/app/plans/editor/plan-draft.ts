@@ -13,6 +13,27 @@ export interface DraftRow {
 /** What belongs to the whole plan. */
 export type PlanSettings = Omit<RevisionBody, 'characteristics'>;
 
+const NO_SETTINGS: PlanSettings = {
+  level: 'II',
+  classAqls: [],
+  decisionRule: 'simple',
+  coverageFactor: 2,
+  warmUpMinutes: null,
+  changeNote: '',
+};
+
+/** What a revision says of the whole plan, without what it is beside its content. */
+function settingsOf({
+  level,
+  classAqls,
+  decisionRule,
+  coverageFactor,
+  warmUpMinutes,
+  changeNote,
+}: RevisionBody): PlanSettings {
+  return { level, classAqls, decisionRule, coverageFactor, warmUpMinutes, changeNote };
+}
+
 /** The content of a plan revision on the screen: shown, or changed and checked as it is typed. */
 export class PlanDraft {
   private readonly stored = signal<RevisionBody | null>(null);
@@ -21,7 +42,7 @@ export class PlanDraft {
   private nextId = 1;
 
   readonly rows = signal<readonly DraftRow[]>([]);
-  readonly settings = signal<PlanSettings>({ level: 'II', classAqls: [], changeNote: '' });
+  readonly settings = signal<PlanSettings>(NO_SETTINGS);
   readonly selectedId = signal<number | null>(null);
   /** Counts the times the content was replaced from outside, so that forms over it start anew. */
   readonly shownTimes = signal(0);
@@ -38,10 +59,11 @@ export class PlanDraft {
 
   /** Shows a stored revision; keeps the place of the selection. */
   show(body: RevisionBody): void {
-    const { level, classAqls, changeNote, characteristics } = body;
+    const { characteristics } = body;
+    const settings = settingsOf(body);
     const place = Math.max(this.selectedIndex(), 0);
-    this.stored.set({ level, classAqls, changeNote, characteristics });
-    this.settings.set({ level, classAqls, changeNote });
+    this.stored.set({ ...settings, characteristics });
+    this.settings.set(settings);
     this.rows.set(characteristics.map((value) => ({ id: this.nextId++, value })));
     this.refused.set([]);
     this.unread.set(new Map());
@@ -51,8 +73,7 @@ export class PlanDraft {
 
   /** Takes the content as stored by now, without disturbing what is being typed. */
   markStored(body: RevisionBody): void {
-    const { level, classAqls, changeNote, characteristics } = body;
-    this.stored.set({ level, classAqls, changeNote, characteristics });
+    this.stored.set({ ...settingsOf(body), characteristics: body.characteristics });
     this.refused.set([]);
   }
 

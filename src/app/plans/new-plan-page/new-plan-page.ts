@@ -34,6 +34,9 @@ const START: RevisionBody = {
     { class: 'minor', aql: '2.5' },
   ],
   characteristics: [],
+  decisionRule: 'simple',
+  coverageFactor: 2,
+  warmUpMinutes: null,
   changeNote: '',
 };
 
