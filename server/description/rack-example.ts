@@ -1,4 +1,4 @@
-import { type RackLot, type sendRackReadings } from '#shared/contract/racks';
+import { type RackLot, type sendRackReadings, type sendRackWaveform } from '#shared/contract/racks';
 import { REQUESTS_A_MINUTE } from '#server/racks/rack-limit';
 import type * as z from 'zod';
 
@@ -69,6 +69,20 @@ export const EXAMPLE_ANSWER: Kept = {
   reason: 'No rejection number reached, 1 of 80 units judged.',
 };
 
+export const EXAMPLE_WAVEFORM_ANSWER: z.input<(typeof sendRackWaveform)['reply']> = {
+  id: '5e0c7d1e-9a53-8b41-9d2c-0f6f6e1f4a10',
+  kept: true,
+  samples: 50_000,
+  peakToPeak: 0.412,
+  findings: [
+    {
+      kind: 'nothing-unusual',
+      evidence: 'The ripple is 412 mV peak to peak; sound units of this part give 310 mV to 520 mV.',
+      cause: 'Nothing points to a fault of the rectifier.',
+    },
+  ],
+};
+
 const json = (value: unknown) => JSON.stringify(value, null, 2);
 
 /** A step of the conversation: what it is for, what is typed, what comes back. */
@@ -103,6 +117,12 @@ export const RACK_STEPS: readonly Step[] = [
     typed: `curl -H "Authorization: Bearer $TOKEN" -H "Content-Type: application/json" \\\n  --data @readings.json "$SITE/api/rack/lots/L-26-0412/readings"`,
     answer: json({ ...EXAMPLE_ANSWER, kept: 0, known: 2 } satisfies Kept),
   },
+  {
+    about:
+      'It sends a waveform of a unit as its oscilloscope wrote it: a table (CSV) of times and voltages with any delimiter. The id at the end of the address is the rack’s own; sent again, it changes nothing. The answer says what the waveform shows; the bench lists it with the unit.',
+    typed: `curl -H "Authorization: Bearer $TOKEN" -H "Content-Type: text/csv" -T run-7731-1.csv \\\n  "$SITE/api/rack/lots/L-26-0412/waveforms/run-7731-1?unit=1&characteristicKey=ripple_pp&fileName=run-7731-1.csv"`,
+    answer: json(EXAMPLE_WAVEFORM_ANSWER),
+  },
 ];
 
 /** What a rack does about each refusal. */
@@ -111,8 +131,12 @@ export const RACK_REFUSALS: readonly { status: number; means: string }[] = [
   { status: 401, means: 'The token is not accepted: it is wrong or revoked. Ask for a new one.' },
   { status: 403, means: 'The rack is out of use, or not set up for this part; the title says which.' },
   { status: 404, means: 'There is no such lot.' },
-  { status: 409, means: 'The lot is not at the bench, or an id was used for another reading.' },
-  { status: 422, means: 'A rule of the plan refuses readings; errors name each one. None was kept.' },
+  { status: 409, means: 'The lot is not at the bench, or an id was used for another reading or waveform.' },
+  { status: 413, means: 'The waveform file is larger than 150 MB.' },
+  {
+    status: 422,
+    means: 'A rule of the plan refuses readings; errors name each one; or the file is no waveform. None was kept.',
+  },
   {
     status: 429,
     means: `More than ${REQUESTS_A_MINUTE} requests in a minute with one token. Wait as Retry-After says, and send more readings at once.`,

@@ -5,6 +5,7 @@ export const SUBJECT_TITLES: Readonly<Record<string, string>> = {
   lot: 'Lot',
   unit: 'Unit',
   reading: 'Reading',
+  waveform: 'Waveform',
   nonconformance: 'Nonconformance',
   certificate: 'Certificate',
   'plan-revision': 'Plan revision',
