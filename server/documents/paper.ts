@@ -3,6 +3,7 @@ import { PRIMARY } from './paper-colours';
 import { rippleLine } from './ripple-line';
 import { fitted, type Piece, type TextLine, wrap } from './text-lines';
 import { type TextStyle } from './text-style';
+import { rememberedWidth } from './width-cache';
 
 /** Points in one of the design's pixels, in which every length of a paper is given. */
 const POINTS = 0.75;
@@ -63,11 +64,13 @@ export class Paper {
     this.doc.endMarkedContent();
   }
 
-  readonly measure = ({ text, style }: Piece): number =>
-    this.fonts.split(text, style).reduce((width, run) => {
-      this.doc.font(run.font).fontSize(style.size);
-      return width + this.doc.widthOfString(run.text, { characterSpacing: style.tracking ?? 0 });
-    }, 0);
+  readonly measure = (piece: Piece): number =>
+    rememberedWidth(piece, () =>
+      this.fonts.split(piece.text, piece.style).reduce((width, run) => {
+        this.doc.font(run.font).fontSize(piece.style.size);
+        return width + this.doc.widthOfString(run.text, { characterSpacing: piece.style.tracking ?? 0 });
+      }, 0),
+    );
 
   wrap(pieces: readonly Piece[], width: number): TextLine[] {
     return wrap(pieces, width, this.measure);

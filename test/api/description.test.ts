@@ -2,7 +2,7 @@ import { type Endpoint } from '#shared/contract/endpoint';
 import { ENDPOINTS } from '#shared/contract/index';
 import * as racks from '#shared/contract/racks';
 import { escape } from '#server/description/escape';
-import { EXAMPLE_ANSWER, EXAMPLE_LOT, EXAMPLE_READINGS, RACK_STEPS } from '#server/description/rack-example';
+import { EXAMPLE_ANSWER, EXAMPLE_LOT, EXAMPLE_READINGS, EXAMPLE_WAVEFORM_ANSWER, RACK_STEPS } from '#server/description/rack-example';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { testSite, type TestSite } from '../support/test-site';
 
@@ -53,6 +53,7 @@ describe('the description of the interface', () => {
     expect(racks.rackLot.parse(EXAMPLE_LOT)).toEqual(EXAMPLE_LOT);
     expect(racks.sendRackReadings.body.parse(EXAMPLE_READINGS)).toEqual(EXAMPLE_READINGS);
     expect(racks.sendRackReadings.reply.parse(EXAMPLE_ANSWER)).toEqual(EXAMPLE_ANSWER);
+    expect(racks.sendRackWaveform.reply.parse(EXAMPLE_WAVEFORM_ANSWER)).toEqual(EXAMPLE_WAVEFORM_ANSWER);
     const { text } = await site.nobody().get('/api/docs').expect(200);
     for (const { about, typed } of RACK_STEPS)
       for (const words of [about, typed]) expect(text).toContain(escape(words));
