@@ -57,6 +57,8 @@ function body(
     characteristicKey,
     entry,
     instrumentId,
+    rangeId: null,
+    question: null,
     note: '',
     repeat: null,
     takenAt: '2026-03-12T08:00:00.000Z',

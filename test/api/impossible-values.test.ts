@@ -17,7 +17,7 @@ async function lotWithRegulation() {
     ...measured('regulation', 'minor', { upper: 0.2 }),
     kind: 'computed',
     unit: '%',
-    formula: { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' } },
+    formula: { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' }, constants: {} },
   } as Parameters<typeof planOf>[0]);
   return drawnLot(site, addPlannedPart(site.db, site.people.quality.id, plan), 3);
 }

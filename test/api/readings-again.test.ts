@@ -116,7 +116,7 @@ describe('a sample with a reading missing that the verdict still hangs on', () =
         ...measured('regulation', 'minor', { upper: 5 }),
         kind: 'computed',
         unit: '%',
-        formula: { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' } },
+        formula: { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' }, constants: {} },
       } as Parameters<typeof planOf>[0],
     );
     const lot = await drawnLot(site, addPlannedPart(site.db, site.people.quality.id, plan), 100);

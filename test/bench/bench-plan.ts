@@ -1,5 +1,5 @@
 import { type Characteristic, type RevisionBody } from '#shared/contract/plans';
-import { attribute, computed, measured } from '../support/plan-bodies';
+import { attribute, computed, measured, SIMPLE_RULES } from '../support/plan-bodies';
 
 const LIMITS = { lowerLimit: 11.4, upperLimit: 12.6, target: 12 } as const;
 
@@ -28,6 +28,7 @@ export function planOf(characteristics: readonly Characteristic[], level: Revisi
       { class: 'minor', aql: '1.5' },
     ],
     characteristics: [...characteristics],
+    ...SIMPLE_RULES,
     changeNote: '',
   };
 }

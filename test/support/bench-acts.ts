@@ -3,6 +3,7 @@ import { type Characteristic, type RevisionBody } from '#shared/contract/plans';
 import { type Role } from '#shared/contract/roles';
 import { randomUUID } from 'node:crypto';
 import { type TestSite } from './test-site';
+import { SIMPLE_RULES } from './plan-bodies';
 
 /** A plan at level II with the usual AQLs of each class. */
 export function planOf(...characteristics: Characteristic[]): RevisionBody {
@@ -11,7 +12,7 @@ export function planOf(...characteristics: Characteristic[]): RevisionBody {
     { class: 'major', aql: '1.0' },
     { class: 'minor', aql: '2.5' },
   ];
-  return { level: 'II', classAqls, characteristics, changeNote: '' };
+  return { level: 'II', classAqls, characteristics, ...SIMPLE_RULES, changeNote: '' };
 }
 
 /** A reading as the inspector types it. */

@@ -1,4 +1,4 @@
-import { type Characteristic, type RevisionBody } from '#shared/contract/plans';
+import { type Characteristic, type RevisionBody, type StoredCharacteristic } from '#shared/contract/plans';
 
 type Kind = Characteristic['kind'];
 type Of<K extends Kind> = Extract<Characteristic, { kind: K }>;
@@ -16,18 +16,23 @@ export function measured(key: string, given: Partial<Of<'measured'>> = {}): Of<'
   return { kind: 'measured', key, name: `Measured ${key}`, ...common, ...volts, ...entry, ...given };
 }
 
+/** What is computed by a formula that takes no ratings, unless they are given. */
 export function computed(
   key: string,
-  formula: Of<'computed'>['formula'],
+  { constants = {}, ...formula }: Extract<StoredCharacteristic, { kind: 'computed' }>['formula'],
   given: Partial<Of<'computed'>> = {},
 ): Of<'computed'> {
-  return { kind: 'computed', key, name: `Computed ${key}`, ...common, ...volts, unit: '%', formula, ...given };
+  const stated = { name: `Computed ${key}`, formula: { ...formula, constants } };
+  return { kind: 'computed', key, ...common, ...volts, unit: '%', ...stated, ...given };
 }
 
 export function attribute(key: string, given: Partial<Of<'attribute'>> = {}): Of<'attribute'> {
   const judged = { requirement: 'Legible, complete', failReasons: ['Missing', 'Smeared'], instrumentKind: null };
   return { kind: 'attribute', key, name: `Judged ${key}`, ...common, ...judged, ...given };
 }
+
+/** How most plans judge: by their limits alone, with nothing asked of the warm-up. */
+export const SIMPLE_RULES = { decisionRule: 'simple', coverageFactor: 2, warmUpMinutes: null } as const;
 
 /** The plan of a 24 V adapter: two voltages, ripple, the regulation computed from them, and a label judged by eye. */
 export function revisionBody(given: Partial<RevisionBody> = {}): RevisionBody {
@@ -49,9 +54,7 @@ export function revisionBody(given: Partial<RevisionBody> = {}): RevisionBody {
       ),
       attribute('label', { class: 'minor' }),
     ],
-    decisionRule: 'simple',
-    coverageFactor: 2,
-    warmUpMinutes: null,
+    ...SIMPLE_RULES,
     changeNote: 'First issue.',
     ...given,
   };

@@ -2,6 +2,7 @@ import { type Characteristic, type RevisionBody } from '#shared/contract/plans';
 import { type Aql } from '#shared/sampling/scheme';
 import { readFileSync } from 'node:fs';
 import { measured } from './bench-fixtures';
+import { SIMPLE_RULES } from './plan-bodies';
 
 /** A lot of readings made by an independent circuit simulator, with what must be decided of it. */
 export interface ReferenceLot {
@@ -23,8 +24,8 @@ interface GivenPlan {
 }
 
 const COMPUTED = {
-  regulation: { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' } },
-  balance: { key: 'transformer-balance', inputs: { half1: 'half1_peak', half2: 'half2_peak' } },
+  regulation: { key: 'load-regulation', inputs: { no_load: 'v_no_load', loaded: 'v_loaded' }, constants: {} },
+  balance: { key: 'transformer-balance', inputs: { half1: 'half1_peak', half2: 'half2_peak' }, constants: {} },
 } as const;
 
 function characteristicOf(given: GivenPlan['characteristics'][number]): Characteristic {
@@ -51,6 +52,7 @@ function planOf(given: GivenPlan): RevisionBody {
       { class: 'minor', aql: given.aql.minor.toFixed(1) as Aql },
     ],
     characteristics: [...halves, ...given.characteristics.map(characteristicOf)],
+    ...SIMPLE_RULES,
     changeNote: '',
   };
 }

@@ -53,6 +53,6 @@ describe('Chart', () => {
   });
 
   it('does not move when it is drawn', () => {
-    expect(chartBase(chartColours(element())).animation).toBe(false);
+    expect(chartBase(chartColours(element()))['animation']).toBe(false);
   });
 });
