@@ -11,7 +11,9 @@ import { and, eq, inArray } from 'drizzle-orm';
 import { findPlan } from './plan-queries';
 import { contentOf } from './plan-rows';
 import {
+  headColumns,
   type HeldRevision,
+  holdGuardBands,
   holdPlanRules,
   holdRevision,
   moveRevision,
@@ -61,7 +63,9 @@ export function approveRevision({ db, clock }: Context, caller: Caller, named: N
     const isOwn = hasWritten(tx, caller, held);
     if (isOwn && !findSite(tx).approveOwnPlans)
       throw new Conflict('own-plan', 'You wrote this revision; somebody else approves it.');
-    holdPlanRules({ level: held.level, ...contentOf(tx, held.id) });
+    const content = { ...headColumns(held), ...contentOf(tx, held.id) };
+    holdPlanRules(content);
+    holdGuardBands(tx, content, now);
     retireEarlier(tx, caller, held, now);
     moveRevision(tx, held.id, { status: 'effective', approverId: caller.id, effectiveAt: now.toISOString() });
     const { subjectId } = held;

@@ -4,14 +4,23 @@ import { type Context } from '#server/context';
 import { type Plan } from '#shared/contract/plans';
 import { findPlan } from './plan-queries';
 import { contentOf } from './plan-rows';
-import { holdPlanRules, holdRevision, moveRevision, type NamedRevision } from './revision-rows';
+import {
+  headColumns,
+  holdGuardBands,
+  holdPlanRules,
+  holdRevision,
+  moveRevision,
+  type NamedRevision,
+} from './revision-rows';
 
 /** Sends a draft for review. */
 export function submitRevision({ db, clock }: Context, caller: Caller, named: NamedRevision): Plan {
   return db.transaction((tx) => {
     const now = clock.now();
     const held = holdRevision(tx, named, 'draft');
-    holdPlanRules({ level: held.level, ...contentOf(tx, held.id) });
+    const content = { ...headColumns(held), ...contentOf(tx, held.id) };
+    holdPlanRules(content);
+    holdGuardBands(tx, content, now);
     moveRevision(tx, held.id, { status: 'in-review', submittedAt: now.toISOString() });
     const { subjectId } = held;
     record(tx, { at: now, person: caller, action: 'submitted', subject: 'plan-revision', subjectId });

@@ -1,9 +1,12 @@
 import { type Db } from '#db/open-database';
 import { planCharacteristics, planClassAqls, planRevisions, plans } from '#db/schema/plans';
 import { Conflict, holdVersion, NotFound, Refused } from '#server/problems';
+import { dayOf, listInstruments } from '#server/instruments/instrument-queries';
 import { type Fault } from '#shared/contract/problem';
 import { type RevisionBody, type RevisionStatus } from '#shared/contract/plans';
+import { guardFaults } from '#shared/plan/guard-faults';
 import { planFaults } from '#shared/plan/plan-faults';
+import { typicalUncertainties } from '#shared/plan/typical-uncertainty';
 import { and, eq, sql } from 'drizzle-orm';
 
 /** Which revision is meant, and which version of it the caller saw. */
@@ -49,13 +52,31 @@ export function holdPlanRules(
   content: Pick<RevisionBody, 'level' | 'classAqls' | 'characteristics'>,
   at: Fault['path'] = [],
 ): void {
-  const faults = planFaults(content);
+  refuseFaults(planFaults(content), at);
+}
+
+function refuseFaults(faults: readonly Fault[], at: Fault['path'] = []): void {
   if (faults.length > 0)
     throw new Refused(
       'plan-not-sound',
       'The plan cannot be used as it stands.',
       faults.map(({ path, message }) => ({ path: [...at, ...path], message })),
     );
+}
+
+/**
+ * Holds that guard bands leave something to accept with the finest instruments that the site has now. A draft may be kept
+ * without; what goes to review and into force may not.
+ *
+ * @throws {Refused} with U at the limit that it takes
+ */
+export function holdGuardBands(
+  db: Db,
+  content: Pick<RevisionBody, 'characteristics' | 'decisionRule' | 'coverageFactor'>,
+  now: Date,
+): void {
+  if (content.decisionRule === 'simple') return;
+  refuseFaults(guardFaults(content, typicalUncertainties(content, listInstruments(db, dayOf(now)))));
 }
 
 /** Writes what a draft holds in place of what it held. */

@@ -1,5 +1,6 @@
 import { type Fault } from '../contract/problem';
 import { FORMULAS } from '../measurement/formula';
+import { LARGEST_VALUE } from '../quantities/largest-value';
 import { type ComputedCharacteristic, type PlanContent } from './plan-content';
 
 type Characteristics = PlanContent['characteristics'];
@@ -12,7 +13,24 @@ function inputFault(named: string | undefined, characteristics: Characteristics)
   return found.kind === 'measured' ? undefined : 'Only a measured characteristic can be taken here.';
 }
 
-function faultsOf({ formula }: ComputedCharacteristic, characteristics: Characteristics): [string, string][] {
+/** What is wrong with a rating that a formula takes beside readings; undefined when nothing is. */
+function constantFault(value: number | undefined): string | undefined {
+  if (value === undefined) return 'Give this rating.';
+  if (value <= 0) return 'A rating is more than 0.';
+  return value > LARGEST_VALUE ? 'This is too large.' : undefined;
+}
+
+function constantFaults({ formula }: ComputedCharacteristic): [string, string][] {
+  const wanted = FORMULAS[formula.key].constants.map(({ name }) => name);
+  const faults = wanted.flatMap((name): [string, string][] => {
+    const message = constantFault(formula.constants[name]);
+    return message === undefined ? [] : [[name, message]];
+  });
+  const unknown = Object.keys(formula.constants).filter((name) => !wanted.includes(name));
+  return [...faults, ...unknown.map((name): [string, string] => [name, 'This formula has no such rating.'])];
+}
+
+function inputFaults({ formula }: ComputedCharacteristic, characteristics: Characteristics): [string, string][] {
   const wanted = FORMULAS[formula.key].inputs.map(({ name }) => name);
   const faults = wanted.flatMap((name): [string, string][] => {
     const message = inputFault(formula.inputs[name], characteristics);
@@ -31,15 +49,20 @@ function faultsOf({ formula }: ComputedCharacteristic, characteristics: Characte
 
 /**
  * Every input of a formula is a measured characteristic of the same plan, a different one each: what is computed never
- * feeds what is computed.
+ * feeds what is computed. Every rating it takes is given, in SI base units.
  */
 export function formulaFaults({ characteristics }: PlanContent): Fault[] {
-  return characteristics.flatMap((one, index) =>
-    one.kind === 'computed'
-      ? faultsOf(one, characteristics).map(([name, message]) => ({
-          path: ['characteristics', index, 'formula', 'inputs', name],
-          message,
-        }))
-      : [],
-  );
+  return characteristics.flatMap((one, index) => {
+    if (one.kind !== 'computed') return [];
+    const placed =
+      (part: 'inputs' | 'constants') =>
+      ([name, message]: [string, string]): Fault => ({
+        path: ['characteristics', index, 'formula', part, name],
+        message,
+      });
+    return [
+      ...inputFaults(one, characteristics).map(placed('inputs')),
+      ...constantFaults(one).map(placed('constants')),
+    ];
+  });
 }

@@ -38,10 +38,15 @@ function digitalBudget(value: number, entry: ReadEntry, range: DigitalRange): Co
   return [own, rectangular('Resolution of the display', resolution / 2)];
 }
 
+/** The smallest scale, in volts per division, on which a screen shows a wave of this height. */
+export function smallestScale(height: number, screenDivisions: number): number {
+  return SCALES.find((scale) => scale * screenDivisions >= Math.abs(height)) ?? 100;
+}
+
 /** Volts for one division at the tip of the probe; of a captured file the smallest scale that shows the wave. */
 function voltsPerDivision(value: number, entry: ReadEntry, { screenDivisions }: GraticuleRange): number {
   if (entry?.kind === 'scope') return entry.scope.voltsPerDivision * entry.scope.probeFactor;
-  return SCALES.find((scale) => scale * screenDivisions >= Math.abs(value)) ?? 100;
+  return smallestScale(value, screenDivisions);
 }
 
 function graticuleBudget(

@@ -130,3 +130,31 @@ describe('a computed characteristic', () => {
     ]);
   });
 });
+
+describe('a rating that a formula takes', () => {
+  const readings = [measured('v0'), measured('v1')];
+  const line = (constants: Record<string, number>) =>
+    faultsOf(
+      ...readings,
+      computed('line', { key: 'line-regulation', inputs: { high_line: 'v0', low_line: 'v1' }, constants }),
+    );
+
+  it('is given, above 0, and one the formula has', () => {
+    expect(line({ rated: 12 })).toEqual([]);
+    expect(line({})).toEqual(['characteristics.2.formula.constants.rated: Give this rating.']);
+    expect(line({ rated: 0 })).toEqual(['characteristics.2.formula.constants.rated: A rating is more than 0.']);
+    expect(line({ rated: 12, load: 1 })).toEqual([
+      'characteristics.2.formula.constants.load: This formula has no such rating.',
+    ]);
+  });
+});
+
+describe('what is measured', () => {
+  it('is in a unit of its own kind', () => {
+    expect(faultsOf(measured('hot', { measurand: 'temperature', unit: '°C' }))).toEqual([]);
+    expect(faultsOf(measured('ripple', { measurand: 'ripple', unit: 'mV p-p' }))).toEqual([]);
+    expect(faultsOf(measured('ripple', { measurand: 'ripple', unit: 'A' }))).toEqual([
+      'characteristics.0.measurand: Ripple, peak to peak is not measured in A.',
+    ]);
+  });
+});
