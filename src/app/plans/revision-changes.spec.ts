@@ -8,7 +8,16 @@ function measured(key: string, change: Partial<Extract<Characteristic, { kind: '
 }
 
 function plan(characteristics: Characteristic[], change: Partial<RevisionBody> = {}): RevisionBody {
-  return { level: 'II', classAqls: [{ class: 'major', aql: '1.0' }], characteristics, changeNote: '', ...change };
+  return {
+    level: 'II',
+    classAqls: [{ class: 'major', aql: '1.0' }],
+    characteristics,
+    decisionRule: 'simple',
+    coverageFactor: 2,
+    warmUpMinutes: null,
+    changeNote: '',
+    ...change,
+  };
 }
 
 describe('revisionChanges', () => {
@@ -44,6 +53,37 @@ describe('revisionChanges', () => {
       'Inspection level',
       'AQL major',
       'AQL minor',
+    ]);
+  });
+
+  it('names the decision rule, the coverage factor and the warm-up', () => {
+    const after = plan([measured('a')], { decisionRule: 'guarded', coverageFactor: 1.65, warmUpMinutes: 15 });
+    expect(revisionChanges(plan([measured('a')]), after)).toEqual([
+      { position: null, what: 'Decision rule', before: 'Simple acceptance', after: 'Guarded acceptance' },
+      { position: null, what: 'Coverage factor k', before: '2', after: '1.65' },
+      { position: null, what: 'Warm-up', before: 'none', after: '15\u00a0min' },
+    ]);
+  });
+
+  it('names what is measured, which peak counts and the ratings of a formula', () => {
+    const ripple = { measurand: 'ripple', entryMode: 'scope' } as const;
+    const before = plan([measured('a', { ...ripple, alternatePeaks: 'worst' })]);
+    const after = plan([measured('a', { ...ripple, alternatePeaks: 'mean' })]);
+    expect(revisionChanges(before, after)).toMatchObject([
+      { what: 'Voltage a, alternate peaks', before: 'the higher one counts', after: 'their mean counts' },
+    ]);
+    expect(revisionChanges(plan([measured('a')]), before).map((line) => line.what)).toContain(
+      'Voltage a, what is measured',
+    );
+    const rated = (volts: number) =>
+      ({
+        ...newCharacteristic('computed'),
+        key: 'line',
+        name: 'Line regulation',
+        formula: { key: 'line-regulation', inputs: {}, constants: { rated: volts } },
+      }) as Characteristic;
+    expect(revisionChanges(plan([rated(12)]), plan([rated(24)]))).toMatchObject([
+      { what: 'Line regulation, ratings', before: 'Rated voltage 12\u00a0V', after: 'Rated voltage 24\u00a0V' },
     ]);
   });
 });

@@ -1,4 +1,4 @@
-import { type Characteristic, type RevisionBody } from '#shared/contract/plans';
+import { type Characteristic, DECISION_RULE_TITLES, type RevisionBody } from '#shared/contract/plans';
 import { characteristicWords } from './characteristic-words';
 
 /** One line of what a revision changes. `before` is null for what is new, `after` for what is gone. */
@@ -38,9 +38,26 @@ function planChanges(before: RevisionBody, after: RevisionBody): RevisionChange[
       before: aql(before, name),
       after: aql(after, name),
     })),
+    {
+      position: null,
+      what: 'Decision rule',
+      before: DECISION_RULE_TITLES[before.decisionRule],
+      after: DECISION_RULE_TITLES[after.decisionRule],
+    },
+    {
+      position: null,
+      what: 'Coverage factor k',
+      before: String(before.coverageFactor),
+      after: String(after.coverageFactor),
+    },
+    { position: null, what: 'Warm-up', before: warmUpWords(before), after: warmUpWords(after) },
   ];
   const changed = lines.filter((line) => line.before !== line.after);
   return sameOrder(before, after) ? changed : [...changed, orderLine(before, after)];
+}
+
+function warmUpWords({ warmUpMinutes }: RevisionBody): string {
+  return warmUpMinutes === null ? 'none' : `${warmUpMinutes}\u00a0min`;
 }
 
 /** Whether the characteristics that both hold follow each other alike. */

@@ -15,6 +15,7 @@ import {
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { type Bench, keepReading } from '#shared/contract/bench';
 import { LOT_STATUS_TITLES, type LotStatus, STATIONS } from '#shared/contract/lots';
+import { cautionOf } from '#shared/plan/method-notes';
 import { may } from '../../session/may';
 import { narrowerThan } from '../../shell/screen-width';
 import { ReadOnlyNote } from '../../ui/states/read-only-note';
@@ -105,7 +106,7 @@ export class BenchDesk {
   private readonly panelElement = viewChild(ReadingPanel, { read: ElementRef<HTMLElement> });
 
   protected readonly narrow = narrowerThan(1000);
-  protected readonly caution = computed(() => this.cursor.stop().characteristic.caution);
+  protected readonly caution = computed(() => cautionOf(this.cursor.stop().characteristic));
   private readonly merged = narrowerThan(1360);
   private readonly mayKeep = may(keepReading);
 

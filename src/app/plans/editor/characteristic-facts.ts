@@ -1,10 +1,10 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { type Characteristic, type RevisionBody } from '#shared/contract/plans';
 import { FORMULAS } from '#shared/measurement/formula';
-import { characteristicWords } from '../characteristic-words';
+import { characteristicWords, ratingWords } from '../characteristic-words';
 
 /** Shown elsewhere in the panel, or by the table. */
-const SHOWN_ELSEWHERE = new Set(['name', 'kind', 'class', 'caution', 'inputs']);
+const SHOWN_ELSEWHERE = new Set(['name', 'kind', 'class', 'caution', 'inputs', 'ratings']);
 
 /** A characteristic's fields as text, each with its name. */
 @Component({
@@ -42,8 +42,12 @@ export class CharacteristicFacts {
 
   private inputFacts(characteristic: Characteristic) {
     if (characteristic.kind !== 'computed') return [];
-    const { key, inputs } = characteristic.formula;
+    const { key, inputs, constants } = characteristic.formula;
     const nameOf = (input: string) => this.plan().characteristics.find((each) => each.key === inputs[input])?.name;
-    return FORMULAS[key].inputs.map(({ name, title }) => ({ name: title, value: nameOf(name) ?? 'none' }));
+    const { inputs: taken, constants: ratings } = FORMULAS[key];
+    return [
+      ...taken.map(({ name, title }) => ({ name: title, value: nameOf(name) ?? 'none' })),
+      ...ratings.map(({ name, title, unit }) => ({ name: title, value: ratingWords(constants[name], unit) })),
+    ];
   }
 }

@@ -1,4 +1,4 @@
-import { type Characteristic, type RevisionBody } from '#shared/contract/plans';
+import { type Characteristic, DECISION_RULE_TITLES, type RevisionBody } from '#shared/contract/plans';
 import { formatLimits, inDisplayUnit } from '#shared/quantities/format-quantity';
 import { type SamplingGroup } from '#shared/sampling/lot-sampling';
 
@@ -26,7 +26,7 @@ export function characteristicLine(
     unit: characteristic.kind === 'attribute' ? '' : characteristic.unit,
     aql: aql ?? 'none',
     sampleSize: group?.sampleSize ?? null,
-    rule: characteristic.kind === 'attribute' ? 'Pass or fail' : 'Simple',
+    rule: characteristic.kind === 'attribute' ? 'Pass or fail' : DECISION_RULE_TITLES[plan.decisionRule],
   };
 }
 

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatSnackBar } from '@angular/material/snack-bar';
+import { cautionOf, METHOD_NOTES, methodNote } from '#shared/plan/method-notes';
 import { LimitStrip } from '../../ui/limit-strip/limit-strip';
 import { ClassGlyph } from '../../ui/marks/class-glyph';
 import { VerdictMark } from '../../ui/marks/verdict-mark';
@@ -25,6 +26,15 @@ export class CharacteristicPanel {
   readonly editable = input.required<boolean>();
 
   protected readonly characteristic = computed(() => this.draft().selected()?.value ?? null);
+
+  protected readonly note = computed(() => {
+    const characteristic = this.characteristic();
+    return characteristic === null ? METHOD_NOTES.other : methodNote(characteristic);
+  });
+  protected readonly caution = computed(() => {
+    const characteristic = this.characteristic();
+    return characteristic === null ? '' : cautionOf(characteristic);
+  });
 
   /** What is drawn as a limit strip; nothing without a limit. */
   protected readonly limited = computed(() => {

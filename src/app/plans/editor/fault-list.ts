@@ -6,19 +6,16 @@ import { type PlanDraft } from './plan-draft';
 /** More faults than these are counted rather than listed. */
 const MOST_LISTED = 5;
 
-/** What has to be mended before a draft can be saved; each line opens the characteristic it is about. */
+/** What has to be mended before a draft can be saved or approved; each line opens the characteristic it is about. */
 @Component({
   selector: 'qr-fault-list',
   imports: [MessageNote],
   template: `
-    @if (faults().length > 0) {
+    @for (group of groups(); track group.sentence) {
       <qr-message-note look="hold">
-        <p>
-          {{ faults().length === 1 ? 'One thing is' : faults().length + ' things are' }} to be mended before the draft
-          can be saved.
-        </p>
+        <p>{{ group.sentence }}</p>
         <ul>
-          @for (fault of listed(); track $index) {
+          @for (fault of group.listed; track $index) {
             <li>
               @if (fault.index !== null) {
                 <button type="button" class="link" (click)="open(fault.index)">{{ fault.place }}</button>
@@ -33,6 +30,10 @@ const MOST_LISTED = 5;
     }
   `,
   styles: `
+    :host {
+      display: grid;
+      gap: 8px;
+    }
     ul {
       margin: 4px 0 0;
       padding-left: 16px;
@@ -52,11 +53,16 @@ const MOST_LISTED = 5;
 export class FaultList {
   readonly draft = input.required<PlanDraft>();
 
-  protected readonly faults = computed(() => this.draft().faults());
-  protected readonly listed = computed(() =>
-    this.faults()
-      .slice(0, MOST_LISTED)
-      .map((fault) => ({ ...this.placeOf(fault), message: fault.message })),
+  protected readonly groups = computed(() =>
+    [
+      { faults: this.draft().faults(), until: 'the draft can be saved' },
+      { faults: this.draft().guardFaults(), until: 'the plan can be approved' },
+    ]
+      .filter(({ faults }) => faults.length > 0)
+      .map(({ faults, until }) => ({
+        sentence: `${faults.length === 1 ? 'One thing is' : `${faults.length} things are`} to be mended before ${until}.`,
+        listed: faults.slice(0, MOST_LISTED).map((fault) => ({ ...this.placeOf(fault), message: fault.message })),
+      })),
   );
 
   protected open(index: number): void {
@@ -66,7 +72,13 @@ export class FaultList {
 
   private placeOf({ path: [area, at] }: Fault): { index: number | null; place: string } {
     if (area !== 'characteristics' || typeof at !== 'number') {
-      const places: Record<string, string> = { classAqls: 'AQLs:', level: 'Level:', changeNote: 'Why it changes:' };
+      const places: Record<string, string> = {
+        classAqls: 'AQLs:',
+        level: 'Level:',
+        coverageFactor: 'Coverage factor:',
+        warmUpMinutes: 'Warm-up:',
+        changeNote: 'Why it changes:',
+      };
       return { index: null, place: places[String(area)] ?? '' };
     }
     const name = this.draft().rows()[at]?.value.name;

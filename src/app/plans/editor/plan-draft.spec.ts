@@ -2,6 +2,19 @@ import { type RevisionBody } from '#shared/contract/plans';
 import { newCharacteristic } from './new-characteristic';
 import { PlanDraft } from './plan-draft';
 
+const COARSE = {
+  id: 1,
+  form: 'digital',
+  name: '20 V',
+  unit: 'V',
+  current: 'dc',
+  fullScale: 20,
+  resolution: 0.01,
+  ofReading: 0.02,
+  ofRange: 0,
+  counts: 0,
+} as const;
+
 function measured(key: string, limits: { lowerLimit?: number; upperLimit?: number } = { upperLimit: 10 }) {
   return { ...newCharacteristic('measured'), key, name: key, ...limits } as RevisionBody['characteristics'][number];
 }
@@ -12,6 +25,9 @@ function draftOf(...keys: string[]): PlanDraft {
     level: 'II',
     classAqls: [{ class: 'major', aql: '1.0' }],
     characteristics: keys.map((key) => measured(key)),
+    decisionRule: 'simple',
+    coverageFactor: 2,
+    warmUpMinutes: null,
     changeNote: '',
   });
   return draft;
@@ -68,6 +84,26 @@ describe('PlanDraft', () => {
     draft.refuse([{ path: ['level'], message: 'Not this level.' }]);
     expect(draft.faults()).toHaveLength(1);
     draft.changeSettings({ level: 'III' });
+    expect(draft.faults()).toEqual([]);
+  });
+
+  it('tells of guard bands that leave nothing, and can be saved with them', () => {
+    const draft = draftOf('loaded');
+    draft.instruments.set([{ kind: 'multimeter', status: 'in-service', ranges: [COARSE] }]);
+    draft.change(draft.rows()[0]?.id ?? 0, measured('loaded', { lowerLimit: 11.9, upperLimit: 12.1 }));
+    expect(draft.guardFaults()).toEqual([]);
+    draft.changeSettings({ decisionRule: 'guarded' });
+    expect(draft.guardFaults()[0]?.message).toContain('leave nothing to accept');
+    expect(draft.faults()).toEqual([]);
+  });
+
+  it('does not take a coverage factor that is not understood for the last one', () => {
+    const draft = draftOf('loaded');
+    draft.changeSettings({ coverageFactor: 2 }, [{ path: ['coverageFactor'], message: 'Type a number.' }]);
+    expect(draft.faults()).toEqual([{ path: ['coverageFactor'], message: 'Type a number.' }]);
+    draft.changeSettings({ level: 'III' });
+    expect(draft.faults()).toHaveLength(1);
+    draft.changeSettings({ coverageFactor: 1.65 }, []);
     expect(draft.faults()).toEqual([]);
   });
 });

@@ -1,6 +1,8 @@
 import { computed, signal } from '@angular/core';
 import { type Characteristic, type RevisionBody } from '#shared/contract/plans';
 import { type Fault } from '#shared/contract/problem';
+import { guardFaults } from '#shared/plan/guard-faults';
+import { type SiteInstrument, typicalUncertainties } from '#shared/plan/typical-uncertainty';
 import { contentFaults } from './content-faults';
 import { sameValue } from './same-value';
 
@@ -38,6 +40,7 @@ function settingsOf({
 export class PlanDraft {
   private readonly stored = signal<RevisionBody | null>(null);
   private readonly refused = signal<readonly Fault[]>([]);
+  private readonly unreadSettings = signal<readonly Fault[]>([]);
   private readonly unread = signal<ReadonlyMap<number, readonly Fault[]>>(new Map());
   private nextId = 1;
 
@@ -53,7 +56,21 @@ export class PlanDraft {
   }));
   readonly changed = computed(() => !sameValue(this.content(), this.stored()));
   /** What the rules and the server find wrong, by path. */
-  readonly faults = computed(() => [...this.unreadFaults(), ...contentFaults(this.content()), ...this.refused()]);
+  readonly faults = computed(() => [
+    ...this.unreadSettings(),
+    ...this.unreadFaults(),
+    ...contentFaults(this.content()),
+    ...this.refused(),
+  ]);
+  /** What the site measures with; its uncertainties tell what guard bands leave. */
+  readonly instruments = signal<readonly SiteInstrument[]>([]);
+  /** Guard bands that leave nothing: a draft may be kept with them, and is not sent for approval. */
+  readonly guardFaults = computed(() => {
+    const content = this.content();
+    return guardFaults(content, typicalUncertainties(content, this.instruments()));
+  });
+  /** Faults that are shown at once, whether or not somebody has been in their field. */
+  readonly pressing = computed(() => [...this.refused(), ...this.guardFaults()]);
   readonly selected = computed(() => this.rows().find((row) => row.id === this.selectedId()) ?? null);
   readonly selectedIndex = computed(() => this.rows().findIndex((row) => row.id === this.selectedId()));
 
@@ -66,6 +83,7 @@ export class PlanDraft {
     this.settings.set(settings);
     this.rows.set(characteristics.map((value) => ({ id: this.nextId++, value })));
     this.refused.set([]);
+    this.unreadSettings.set([]);
     this.unread.set(new Map());
     this.selectedId.set(this.rows()[Math.min(place, characteristics.length - 1)]?.id ?? null);
     this.shownTimes.update((times) => times + 1);
@@ -86,8 +104,10 @@ export class PlanDraft {
     this.refused.set(faults);
   }
 
-  changeSettings(change: Partial<PlanSettings>): void {
+  /** Changes what belongs to the whole plan; `unread` names the fields of the change whose text is not understood. */
+  changeSettings(change: Partial<PlanSettings>, unread?: readonly Fault[]): void {
     this.refused.set([]);
+    if (unread !== undefined) this.unreadSettings.set(unread);
     this.settings.update((settings) => ({ ...settings, ...change }));
   }
 

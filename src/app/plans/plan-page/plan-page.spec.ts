@@ -7,6 +7,37 @@ import { PlanPage } from './plan-page';
 const RIPPLE = { ...newCharacteristic('measured'), key: 'ripple', name: 'Ripple', upperLimit: 2.4 } as Characteristic;
 const PART = { id: 5, number: 'WA-12-500', name: 'Wall adapter 12 V, 500 mA' };
 
+const METER = {
+  id: 1,
+  version: 1,
+  assetNumber: 'MM-01',
+  kind: 'multimeter',
+  description: 'Bench multimeter',
+  serialNumber: '',
+  place: '',
+  status: 'in-service',
+  dailyReference: null,
+  calibrationDue: '2027-01-31',
+  dailyCheck: 'not-asked',
+  openReview: null,
+  usable: true,
+  daysLeft: 60,
+  ranges: [
+    {
+      id: 1,
+      form: 'digital',
+      name: '20 V',
+      unit: 'V',
+      current: 'dc',
+      fullScale: 20,
+      resolution: 0.01,
+      ofReading: 0.05,
+      ofRange: 0,
+      counts: 2,
+    },
+  ],
+};
+
 function revision(number: number, status: Revision['status'], authorId: number): Revision {
   return {
     id: number,
@@ -14,6 +45,8 @@ function revision(number: number, status: Revision['status'], authorId: number):
     status,
     version: 3,
     decisionRule: 'simple',
+    coverageFactor: 2,
+    warmUpMinutes: null,
     author: 'R. Okonvei',
     authorId,
     approver: null,
@@ -99,5 +132,46 @@ describe('PlanPage', () => {
     expect(page.text()).toContain('Revision 5 is in force and cannot be edited.');
     expect(page.element.querySelector('qr-characteristic-fields')).toBeNull();
     expect(button(page.element, 'Make revision 6')).toBeUndefined();
+  });
+
+  it('chooses a decision rule by what it does, with k and the warm-up', async () => {
+    const page = await openPlan(planWith(revision(5, 'draft', 1)));
+    const guarded = [...page.element.querySelectorAll<HTMLElement>('mat-radio-button')].find((each) =>
+      each.textContent.includes('Guarded acceptance'),
+    );
+    expect(guarded?.textContent).toContain('drawn in by U');
+    guarded?.querySelector('input')?.click();
+    await page.type('Coverage factor k', '1.65');
+    await page.type('Warm-up before measuring', '15');
+    await page.press('Save draft');
+    const { body } = page.http.expectOne('/api/plans/1/revisions/5').request;
+    expect(body).toMatchObject({ decisionRule: 'guarded', coverageFactor: 1.65, warmUpMinutes: 15 });
+  });
+
+  it('puts what is wrong with k beside its field', async () => {
+    const page = await openPlan(planWith(revision(5, 'draft', 1)));
+    await page.type('Coverage factor k', '9');
+    expect(page.element.querySelector('qr-decision-sheet mat-error')?.textContent).toContain('At most 4.');
+    await page.type('Coverage factor k', 'two');
+    expect(button(page.element, 'Save draft')?.disabled).toBe(true);
+  });
+
+  it('tells which guard band leaves nothing with the instruments of the site', async () => {
+    const plan = planWith({ ...revision(5, 'draft', 1), decisionRule: 'guarded' });
+    const [characteristic] = plan.revisions[0]?.characteristics ?? [];
+    Object.assign(characteristic ?? {}, { lowerLimit: 2.3, upperLimit: 2.4 });
+    const page = await openPlan(plan);
+    await page.answer('/api/instruments', { items: [METER] });
+    expect(page.text()).toContain('One thing is to be mended before the plan can be approved.');
+    expect(page.element.querySelector('qr-limit-fields mat-error')?.textContent).toContain('leave nothing to accept');
+    expect(page.element.querySelector('qr-guard-table')?.textContent).toContain('nothing');
+  });
+
+  it('shows the method note and the caution of what is measured', async () => {
+    const plan = planWith(revision(5, 'effective', 2));
+    plan.revisions[0]?.characteristics.splice(0, 1, { ...RIPPLE, measurand: 'ripple' } as Characteristic);
+    const page = await openPlan(plan, 'inspector');
+    expect(page.text()).toContain('Couple the channel AC');
+    expect(page.element.querySelector('qr-caution-note')?.textContent).toContain('earth lead');
   });
 });

@@ -53,6 +53,8 @@ export class QuantityField implements ControlValueAccessor, Validator {
   readonly label = input.required<string>();
   /** The unit a bare number is in, and which is shown; empty for a plain number. */
   readonly unit = input.required<string>();
+  /** Shown behind a plain number in a unit that takes no prefix, as min. */
+  readonly shownUnit = input('');
   readonly hint = input('');
   readonly placeholder = input('');
   /** Whether the comma is the decimal sign; as people write at this browser unless given. */

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { MAINS_CAUTIONS, TRAINED_ONLY } from '#shared/plan/mains-cautions';
 import { CautionNote } from '../../../ui/states/caution-note';
-import { MAINS_CAUTIONS, TRAINED_ONLY } from './mains-caution';
 
 /** The caution of the characteristic in focus, with the usual ones; it stands as long as the focus is there. */
 @Component({

@@ -8,6 +8,7 @@ import {
   viewChild,
 } from '@angular/core';
 import { expectedBand } from '#shared/plan/expected-band';
+import { cautionOf, methodNote } from '#shared/plan/method-notes';
 import { narrowerThan } from '../../../shell/screen-width';
 import { ScopeReader } from '../../../ui/scope-reader/scope-reader';
 import { type ScopeText } from '../../../ui/scope-reader/scope-text';
@@ -100,6 +101,10 @@ export class ReadingPanel {
     const answered = !this.draft.started() && (this.cell.standing()?.question ?? null) !== null;
     return answered || this.check.asking() || this.cell.openQuestion() !== undefined;
   });
+  /** What there is to beware of, in the plan's words or those of the kind of measurement. */
+  protected readonly caution = computed(() => cautionOf(this.cell.characteristic()));
+  /** How this kind of quantity is measured. */
+  protected readonly kindNote = computed(() => methodNote(this.cell.characteristic()).method);
   /** What is odd about the value, in words. */
   protected readonly odd = computed(() => this.cell.plausibility()?.sentence ?? '');
   protected readonly consequence = computed(() => failureWords(this.sheet, this.draft));
