@@ -7,6 +7,8 @@ import { countRoutes } from './counts/count-routes';
 import { descriptionRoutes } from './description/description-routes';
 import { eventRoutes } from './events/event-routes';
 import { benchRoutes } from './bench/bench-routes';
+import { budgetRoutes } from './budgets/budget-routes';
+import { calibrationRoutes } from './calibrations/calibration-routes';
 import { certificateRoutes } from './certificates/certificate-routes';
 import { decisionRoutes } from './decision/decision-routes';
 import { gaugeStudyRoutes } from './gauge-studies/gauge-study-routes';
@@ -19,6 +21,7 @@ import { peopleRoutes } from './people/people-routes';
 import { planRoutes } from './plans/plan-routes';
 import { waveformRoutes } from './waveforms/waveform-routes';
 import { yieldRoutes } from './yields/yield-routes';
+import { reviewRoutes } from './reviews/review-routes';
 import { rackRoutes } from './racks/rack-routes';
 import { attachRack } from './racks/attach-rack';
 import { RunningVerdicts } from './judging/running-verdicts';
@@ -48,9 +51,12 @@ const AREAS: readonly ((router: Router, context: Context, verdicts: RunningVerdi
   partRoutes,
   planRoutes,
   instrumentRoutes,
+  calibrationRoutes,
+  reviewRoutes,
   gaugeStudyRoutes,
   lotRoutes,
   benchRoutes,
+  budgetRoutes,
   waveformRoutes,
   rackRoutes,
   decisionRoutes,

@@ -5,6 +5,7 @@ import { inArray } from 'drizzle-orm';
 import { existsSync, mkdirSync, renameSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import pino from 'pino';
+import { startReminders } from './calibrations/remind-daily';
 import { makeMissingFiles } from './certificates/make-certificate-file';
 import { systemClock } from './clock';
 import { type Context } from './context';
@@ -125,9 +126,11 @@ export async function start(environment: Environment, threads: URL): Promise<Run
   const waves = workerWaves(new URL('waveform-worker.js', threads));
   const running = await startOn(db, environment, passwords, waves);
   await makeMissingFiles(running.context);
+  const stopReminders = startReminders(running.context);
   return {
     context: running.context,
     close: async () => {
+      stopReminders();
       await running.close();
       await Promise.all([passwords.close(), waves.close()]);
     },

@@ -1,4 +1,5 @@
 import { type Db } from '#db/open-database';
+import { instrumentReviews } from '#db/schema/calibrations';
 import { certificates } from '#db/schema/certificates';
 import { gaugeStudies } from '#db/schema/gauge-studies';
 import { instruments } from '#db/schema/instruments';
@@ -19,6 +20,7 @@ const NAMES = {
   supplier: { table: suppliers, name: suppliers.code },
   instrument: { table: instruments, name: instruments.assetNumber },
   'gauge-study': { table: gaugeStudies, name: gaugeStudies.number },
+  review: { table: instrumentReviews, name: instrumentReviews.number },
   person: { table: people, name: people.email },
   rack: { table: racks, name: racks.name },
   'reading-batch': { table: lots, name: lots.number },

@@ -1,10 +1,12 @@
 import { type Db } from '#db/open-database';
 import { preparedOnce } from '#db/prepared-once';
+import { instrumentChecks } from '#db/schema/calibrations';
 import { instruments } from '#db/schema/instruments';
 import { Refused } from '#server/problems';
+import { findSite } from '#server/site/site-queries';
 import { INSTRUMENT_KIND_TITLES } from '#shared/contract/instruments';
 import { type Characteristic } from '#shared/contract/plans';
-import { eq, sql } from 'drizzle-orm';
+import { and, desc, eq, sql } from 'drizzle-orm';
 
 type InstrumentRow = typeof instruments.$inferSelect;
 
@@ -16,12 +18,35 @@ const instrumentById = preparedOnce((db) =>
     .prepare(),
 );
 
+const lastCheck = preparedOnce((db) =>
+  db
+    .select({ passed: instrumentChecks.passed })
+    .from(instrumentChecks)
+    .where(
+      and(
+        eq(instrumentChecks.instrumentId, sql.placeholder('instrumentId')),
+        eq(instrumentChecks.day, sql.placeholder('day')),
+      ),
+    )
+    .orderBy(desc(instrumentChecks.id))
+    .limit(1)
+    .prepare(),
+);
+
+/** Why today's check against the reference keeps an instrument from being used; undefined when it does not. */
+function unchecked(db: Db, { id, assetNumber, checkName }: InstrumentRow, today: string): string | undefined {
+  if (checkName === null || !findSite(db).dailyChecks) return undefined;
+  const check = lastCheck(db).get({ instrumentId: id, day: today });
+  if (!check) return `Check ${assetNumber} against ${checkName} before its first reading of the day.`;
+  return check.passed ? undefined : `${assetNumber} did not pass today’s check against ${checkName}.`;
+}
+
 /** Why an instrument may not be used on a day; undefined when it may. The due date itself is still good. */
-export function unusable(instrument: InstrumentRow, today: string): string | undefined {
+export function unusable(db: Db, instrument: InstrumentRow, today: string): string | undefined {
   if (instrument.status === 'withdrawn') return `${instrument.assetNumber} is withdrawn.`;
   if (instrument.calibrationDue < today)
     return `${instrument.assetNumber} is past its calibration date ${instrument.calibrationDue}.`;
-  return undefined;
+  return unchecked(db, instrument, today);
 }
 
 /** @throws {Refused} when no such instrument exists or it may not be used today */
@@ -31,7 +56,7 @@ export function usableInstrument(db: Db, id: number, today: string): InstrumentR
   };
   const found = instrumentById(db).get({ id });
   if (!found) return refuse('This instrument does not exist.');
-  const why = unusable(found, today);
+  const why = unusable(db, found, today);
   return why === undefined ? found : refuse(why);
 }
 

@@ -54,6 +54,16 @@ export function listCertificates(db: Db, page: { after?: string | undefined; lim
   );
 }
 
+/** The certificates of a lot, with where each stands. */
+export function certificatesOfLot(db: Db, lotId: number): Pick<Certificate, 'id' | 'number' | 'status'>[] {
+  return db
+    .select({ id: certificates.id, number: certificates.number })
+    .from(certificates)
+    .where(eq(certificates.lotId, lotId))
+    .all()
+    .map((row) => ({ ...row, status: statusOf(db, row.id) }));
+}
+
 /** @throws {NotFound} */
 export function readCertificate(db: Db, id: number): Certificate {
   const found = joined(db).where(eq(certificates.id, id)).get();

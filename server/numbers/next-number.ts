@@ -2,8 +2,8 @@ import { type Db } from '#db/open-database';
 import { numberSeries } from '#db/schema/site';
 import { sql } from 'drizzle-orm';
 
-/** The numbered papers, each with the digits of its running number: lots, certificates, nonconformances, gauge studies. */
-const DIGITS = { L: 4, CC: 4, NC: 3, GS: 3 } as const;
+/** The numbered papers, each with its running number's digits: lots, certificates, nonconformances, studies, reviews. */
+const DIGITS = { L: 4, CC: 4, NC: 3, GS: 3, IR: 3 } as const;
 export type NumberKind = keyof typeof DIGITS;
 
 /** A paper's number, as L-26-0001. */

@@ -155,8 +155,11 @@ export const review = reviewHead.extend({
       readings: z.int(),
       firstAt: moment,
       lastAt: moment,
-      /** Readings so near a limit that the error found could have turned their verdict. */
-      nearLimit: z.int(),
+      /**
+       * Readings so near a limit that the error found could have turned their verdict; null where the calibration has no
+       * point of what they measure.
+       */
+      nearLimit: z.int().nullable(),
       certificates: z.array(z.object({ id, number: z.string(), status: z.string() })),
       effect: z.enum(REVIEW_EFFECTS).nullable(),
       note: z.string(),
@@ -182,13 +185,45 @@ export const readReview = endpoint({
   params: byId,
   reply: review,
 });
+
+/** A reading in doubt. */
+export const doubtfulReading = z.object({
+  id: z.uuid(),
+  unit: z.int(),
+  characteristic: z.object({ key: z.string(), name: z.string(), unit: z.string(), decimals: z.int() }),
+  lowerLimit: z.number().nullable(),
+  upperLimit: z.number().nullable(),
+  /** SI base unit. */
+  value: z.number().nullable(),
+  pass: z.boolean().nullable(),
+  /** Whether the error found could have turned its verdict; null where it is not known. */
+  nearLimit: z.boolean().nullable(),
+  takenAt: moment,
+  /** Null when a rack took it. */
+  takenBy: z.string().nullable(),
+});
+export type DoubtfulReading = z.infer<typeof doubtfulReading>;
+
+export const listDoubtfulReadings = endpoint({
+  method: 'GET',
+  path: '/api/reviews/:id/lots/:lot/readings',
+  who: READERS,
+  summary: 'Every reading of a lot that is in doubt, in the order of its units.',
+  params: z.object({ id: z.coerce.number().int().positive(), lot: z.coerce.number().int().positive() }),
+  reply: z.object({ items: z.array(doubtfulReading) }),
+});
 export const assessReviewLot = endpoint({
   method: 'PUT',
   path: '/api/reviews/:id/lots/:lot',
   who: ['quality'],
   summary: 'Say what the doubt means for one lot.',
   params: z.object({ id: z.coerce.number().int().positive(), lot: z.coerce.number().int().positive() }),
-  body: z.object({ effect: z.enum(REVIEW_EFFECTS), note: prose(500) }),
+  body: z
+    .object({ effect: z.enum(REVIEW_EFFECTS), note: prose(500) })
+    .refine(({ effect, note }) => effect === 'none' || note.length >= 3, {
+      path: ['note'],
+      message: 'Say in a few words what is done about it.',
+    }),
   versioned: true,
   reply: review,
 });

@@ -12,6 +12,7 @@ export const SUBJECT_TITLES: Readonly<Record<string, string>> = {
   part: 'Part',
   supplier: 'Supplier',
   instrument: 'Instrument',
+  review: 'Review',
   'gauge-study': 'Gauge study',
   person: 'Person',
   rack: 'Rack',
