@@ -1,5 +1,6 @@
 import * as audit from './audit';
 import * as bench from './bench';
+import * as budgets from './budgets';
 import * as calibrations from './calibrations';
 import * as conditions from './conditions';
 import * as certificates from './certificates';
@@ -35,6 +36,7 @@ const areas = {
   gaugeStudies,
   lots,
   bench,
+  budgets,
   racks,
   decision,
   certificates,
