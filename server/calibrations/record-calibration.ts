@@ -9,6 +9,7 @@ import { holdVersion, Refused } from '#server/problems';
 import { openReview } from '#server/reviews/open-review';
 import { type CalibrationBody, type recordCalibration as Recorded } from '#shared/contract/calibrations';
 import { type Fault } from '#shared/contract/problem';
+import { isWithinTolerance } from '#shared/measurement/within-tolerance';
 import { desc, eq } from 'drizzle-orm';
 import type * as z from 'zod';
 
@@ -20,7 +21,7 @@ function faultsOf({ calibratedOn, asFound, points }: CalibrationBody, today: str
   if (calibratedOn > today) faults.push({ path: ['calibratedOn'], message: 'This day has not come yet.' });
   if (asFound === 'in-tolerance')
     points.forEach(({ found, reference, limit }, index) => {
-      if (Math.abs(found - reference) > limit)
+      if (!isWithinTolerance(found, reference, limit))
         faults.push({ path: ['points', index, 'found'], message: 'This is beyond its limit: out of tolerance.' });
     });
   return faults;

@@ -5,6 +5,7 @@ import { type Context } from '#server/context';
 import { dayOf, findInstrument } from '#server/instruments/instrument-queries';
 import { Conflict } from '#server/problems';
 import { type InstrumentCheck } from '#shared/contract/calibrations';
+import { isWithinTolerance } from '#shared/measurement/within-tolerance';
 
 /**
  * Records what an instrument showed of its reference; the last check of a day decides whether it may be used on it.
@@ -19,7 +20,7 @@ export function recordCheck({ db, clock }: Context, caller: Caller, id: number, 
     if (!dailyReference)
       throw new Conflict('no-reference', `${assetNumber} has no reference that it is checked against.`);
     const { value: reference, tolerance } = dailyReference;
-    const passed = Math.abs(observed - reference) <= tolerance;
+    const passed = isWithinTolerance(observed, reference, tolerance);
     const at = now.toISOString();
     const check = { day, observed, reference, tolerance, passed, at };
     const row = tx
