@@ -23,6 +23,6 @@ export async function keepRackWaveform(
     { person: null, actor: `Rack ${rack.name}`, rackId: rack.id },
     { ...sent, id: ownReadingId(rack.id, lot.id, `waveform ${own}`), most: LARGEST_WAVEFORM },
   );
-  const { id, samples, peakToPeak, findings } = waveform;
-  return { id, kept: isNew, samples, peakToPeak, findings };
+  const { id, samples, values, findings } = waveform;
+  return { id, kept: isNew, samples, peakToPeak: values.peakToPeak, findings };
 }

@@ -24,7 +24,7 @@ const headColumns = {
   bytes: storedFiles.bytes,
   sha256: storedFiles.sha256,
   samples: sql<number>`json_extract(${waveforms.record}, '$.samples')`,
-  peakToPeak: sql<number>`json_extract(${waveforms.record}, '$.analysis.peakToPeak')`,
+  values: sql<string>`json_remove(json_extract(${waveforms.record}, '$.analysis'), '$.peaks', '$.harmonics')`,
   findings: sql<string>`json_extract(${waveforms.record}, '$.findings')`,
   uploadedAt: waveforms.uploadedAt,
   uploadedBy: people.name,
@@ -49,10 +49,16 @@ function heads(db: Db) {
 type HeadRow = NonNullable<ReturnType<ReturnType<typeof heads>['get']>>;
 
 function headView(row: HeadRow, readingIds: string[]): WaveformHead {
-  const { withdrawnAt, withdrawnBy, withdrawReason, findings, ...head } = row;
+  const { withdrawnAt, withdrawnBy, withdrawReason, findings, values, ...head } = row;
   const withdrawn =
     withdrawnAt === null ? null : { by: withdrawnBy ?? '', at: withdrawnAt, reason: withdrawReason ?? '' };
-  return { ...head, findings: JSON.parse(findings) as WaveformHead['findings'], withdrawn, readingIds };
+  return {
+    ...head,
+    values: JSON.parse(values) as WaveformHead['values'],
+    findings: JSON.parse(findings) as WaveformHead['findings'],
+    withdrawn,
+    readingIds,
+  };
 }
 
 /** Readings that stand and were taken from waveforms, by waveform. */

@@ -54,6 +54,18 @@ export const waveformAnalysis = z.object({
 });
 export type WaveformAnalysis = z.infer<typeof waveformAnalysis>;
 
+/** What a reading can be taken from. */
+export const waveformValues = waveformAnalysis.pick({
+  mean: true,
+  min: true,
+  peakToPeak: true,
+  rmsAc: true,
+  rippleHertz: true,
+  oddMean: true,
+  evenMean: true,
+});
+export type WaveformValues = z.infer<typeof waveformValues>;
+
 export const waveformFinding = z.object({
   kind: z.enum(FINDING_KINDS),
   /** What is seen, with its figures. */
@@ -89,7 +101,7 @@ export const waveformHead = z.object({
   bytes: z.int(),
   sha256: z.string(),
   samples: z.int(),
-  peakToPeak: z.number(),
+  values: waveformValues,
   findings: z.array(waveformFinding),
   uploadedAt: moment,
   /** Null when a rack sent it. */

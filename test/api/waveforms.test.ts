@@ -82,7 +82,7 @@ describe('a waveform file', () => {
     expect(waveform.record.analysis.peaksPerCycle).toBe(2);
     expect(waveform.record.spacing.interval).toBeCloseTo(25e-6, 12);
     expect(lastEntry()).toMatchObject({ action: 'kept', subject: 'waveform', actor: site.people.inspector.name });
-    expect(await list()).toMatchObject([{ id: waveform.id, unit: 1, samples: 4001, peakToPeak: waveform.peakToPeak }]);
+    expect(await list()).toMatchObject([{ id: waveform.id, unit: 1, samples: 4001, values: waveform.values }]);
   });
 
   it('is judged against what the part ought to give', async () => {
