@@ -1,4 +1,6 @@
 import { type Routes } from '@angular/router';
+import { readBudget } from '#shared/contract/budgets';
+import { areaFor } from '../session/role-guard';
 
 const loadList = () => import('./lot-list-page/lot-list-page').then((file) => file.LotListPage);
 
@@ -15,4 +17,9 @@ export default [
     title: 'Pull list',
     loadComponent: () => import('./pull-list-page/pull-list-page').then((file) => file.PullListPage),
   },
+  ...areaFor(readBudget.who, {
+    path: 'lots/:id/units/:unit/budgets/:key',
+    title: 'Uncertainty budget',
+    loadComponent: () => import('./budget-page/budget-page').then((file) => file.BudgetPage),
+  }),
 ] satisfies Routes;

@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { RouterLink } from '@angular/router';
 import { type Assessment } from '#shared/contract/decision';
 import { VerdictMark } from '../../ui/marks/verdict-mark';
 import { readingDigits } from '../../ui/values/reading-text';
@@ -9,12 +10,14 @@ import { ScrollRegion } from '../../ui/scroll-region';
 interface Cell {
   readonly text: string;
   readonly failed: boolean;
+  /** Key of the characteristic whose uncertainty budget the value has; none where it is judged by eye. */
+  readonly budget?: string;
 }
 
-/** Every reading that counts: a row for each unit of the sample, a column for each characteristic. */
+/** Every reading that counts: a row for each unit of the sample, a column for each characteristic; a value opens its budget. */
 @Component({
   selector: 'qr-reading-table',
-  imports: [ScrollRegion, VerdictMark],
+  imports: [RouterLink, ScrollRegion, VerdictMark],
   template: `
     <div class="scroll" qrScrollRegion="Table of readings">
       <table class="table">
@@ -37,7 +40,16 @@ interface Cell {
                   @if (cell.failed) {
                     <qr-verdict-mark look="nok" [size]="12" label="nonconforming" />
                   }
-                  {{ cell.text }}
+                  @if (cell.budget; as key) {
+                    <a
+                      class="open"
+                      [routerLink]="['/lots', assessment().lot.id, 'units', row.unit, 'budgets', key]"
+                      [attr.aria-label]="cell.text + ', uncertainty budget'"
+                      >{{ cell.text }}</a
+                    >
+                  } @else {
+                    {{ cell.text }}
+                  }
                 </td>
               }
             </tr>
@@ -94,11 +106,11 @@ export class ReadingTable {
 }
 
 function cellOf(
-  { scale, failedUnits }: CharacteristicRow,
+  { key, scale, failedUnits }: CharacteristicRow,
   reading: CharacteristicRow['readings'][number] | undefined,
 ): Cell {
   if (reading === undefined || (reading.value === null && reading.pass === null)) return { text: '', failed: false };
   const failed = failedUnits.includes(reading.unit);
   if (scale === null || reading.value === null) return { text: failed ? 'Fail' : 'Pass', failed };
-  return { text: readingDigits(reading.value, scale.unit, scale.decimals), failed };
+  return { text: readingDigits(reading.value, scale.unit, scale.decimals), failed, budget: key };
 }

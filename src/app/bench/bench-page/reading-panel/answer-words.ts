@@ -2,7 +2,7 @@ import { CONFIRM_REASON_TITLES, type PlausibilityQuestion } from '#shared/contra
 import { type Characteristic } from '#shared/contract/plans';
 import { formatBand } from '#shared/quantities/format-band';
 import { readingText } from '../../../ui/values/reading-text';
-import { entryWords } from './entry-words';
+import { entryWords } from '../../../ui/values/entry-words';
 
 /** How the question about a reading was answered, in words; empty where none was asked. */
 export function answerWords(question: PlausibilityQuestion | null, characteristic: Characteristic): string {

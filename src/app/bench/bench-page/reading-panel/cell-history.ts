@@ -9,7 +9,7 @@ import { rangeById } from '../../sheet/reading-range';
 import { readingWords } from '../../sheet/reading-words';
 import { WarmUp } from '../warm-up';
 import { answerWords } from './answer-words';
-import { entryWords } from './entry-words';
+import { entryWords } from '../../../ui/values/entry-words';
 
 /** The readings of one cell, each as it was typed, with who took it, when and with what; repeats with their reason. */
 @Component({

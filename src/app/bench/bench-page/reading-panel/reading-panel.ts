@@ -7,6 +7,7 @@ import {
   inject,
   viewChild,
 } from '@angular/core';
+import { RouterLink } from '@angular/router';
 import { expectedBand } from '#shared/plan/expected-band';
 import { cautionOf, methodNote } from '#shared/plan/method-notes';
 import { narrowerThan } from '../../../shell/screen-width';
@@ -58,6 +59,7 @@ import { RefusedReading } from './refused-reading';
     PanelCaution,
     PlausibilityQuestion,
     RefusedReading,
+    RouterLink,
     ScopeReader,
     VerdictChip,
   ],
@@ -100,6 +102,13 @@ export class ReadingPanel {
   protected readonly asked = computed(() => {
     const answered = !this.draft.started() && (this.cell.standing()?.question ?? null) !== null;
     return answered || this.check.asking() || this.cell.openQuestion() !== undefined;
+  });
+  /** The page with the uncertainty budget of the value that is kept; null while there is none. */
+  protected readonly budget = computed(() => {
+    const { kind, key } = this.cell.characteristic();
+    const isKept = kind === 'computed' ? this.cell.number() !== null : this.cell.standing()?.state === 'kept';
+    if (kind === 'attribute' || !isKept || this.draft.started()) return null;
+    return ['/lots', this.sheet.bench().lot.id, 'units', this.cursor.at().unit, 'budgets', key];
   });
   /** What there is to beware of, in the plan's words or those of the kind of measurement. */
   protected readonly caution = computed(() => cautionOf(this.cell.characteristic()));

@@ -1,5 +1,5 @@
 import { type ReadingEntry } from '#shared/contract/bench';
-import { scopeTextOf } from '../../../ui/scope-reader/scope-text';
+import { scopeTextOf } from '../scope-reader/scope-text';
 
 /** What was typed for a reading, as it was typed; empty where that says no more than the value does. */
 export function entryWords(entry: ReadingEntry | null): string {
