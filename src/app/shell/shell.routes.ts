@@ -15,6 +15,7 @@ import { listPlans } from '#shared/contract/plans';
 import { listRacks } from '#shared/contract/racks';
 import { readSite } from '#shared/contract/site';
 import { listSuppliers } from '#shared/contract/suppliers';
+import { readWaveform } from '#shared/contract/waveforms';
 import { readYields } from '#shared/contract/yields';
 import { areaFor } from '../session/role-guard';
 import { Session } from '../session/session';
@@ -61,6 +62,11 @@ export default [
         path: 'gauge-studies',
         title: 'Gauge studies',
         loadChildren: () => import('../gauge-studies/gauge-studies.routes'),
+      }),
+      ...areaFor(readWaveform.who, {
+        path: 'waveforms',
+        title: 'Waveform',
+        loadChildren: () => import('../waveforms/waveforms.routes'),
       }),
       ...areaFor(listRacks.who, { path: 'racks', title: 'Racks', loadChildren: () => import('../racks/racks.routes') }),
       ...areaFor(listCertificates.who, {

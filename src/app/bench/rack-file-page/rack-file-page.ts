@@ -14,18 +14,27 @@ import { type Bench, importRackFile, previewRackFile, type RackPreview, readBenc
 import { ApiClient, endpointResource } from '../../data/api';
 import { RecordSave } from '../../data/record-save';
 import { BackLink } from '../../shell/back-link';
+import { FileDrop } from '../../ui/file-drop';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
 import { MessageNote } from '../../ui/states/message-note';
 import { columnMeanings, type Meaning } from './column-meaning';
 import { ExpectedColumns } from './expected-columns';
-import { FileDrop, type PickedFile } from './file-drop';
 import { RackChoice } from './rack-choice';
 import { RackColumns, type SaidOfColumn } from './rack-columns';
 import { RackFaults } from './rack-faults';
 import { RackInstruments } from './rack-instruments';
 import { RackQuestions } from './rack-questions';
 import { RackResult } from './rack-result';
+
+/** Larger files are not rack files; the server takes no more either. */
+const MOST_BYTES = 20_000_000;
+
+/** A file that was picked, as text. */
+interface PickedFile {
+  readonly name: string;
+  readonly text: string;
+}
 
 /** Brings the readings of an automated rack in from its CSV file: its columns named, then seen, then all rows or none. */
 @Component({
@@ -57,6 +66,7 @@ export class RackFilePage {
   readonly id = input.required({ transform: numberAttribute });
 
   protected readonly bench = endpointResource(readBench, () => ({ params: { id: this.id() } }));
+  protected readonly mostBytes = MOST_BYTES;
   protected readonly file = signal<PickedFile | null>(null);
   /** Ids of the instruments the rack measured with. */
   protected readonly instruments = signal<readonly number[]>([]);
@@ -93,8 +103,8 @@ export class RackFilePage {
   protected readonly importing = new RecordSave();
   protected readonly sound = computed(() => this.preview()?.faults.length === 0);
 
-  protected pick(file: PickedFile): void {
-    this.file.set(file);
+  protected async pick(file: File): Promise<void> {
+    this.file.set({ name: file.name, text: await file.text() });
     this.look();
   }
 

@@ -6,6 +6,7 @@ import { liftHold, readAssessment } from '#shared/contract/decision';
 import { type Lot, readLot } from '#shared/contract/lots';
 import { readCertificate } from '#shared/contract/certificates';
 import { readNonconformance } from '#shared/contract/nonconformances';
+import { listWaveforms } from '#shared/contract/waveforms';
 import { ApiClient, endpointResource } from '../../data/api';
 import { PageTitle } from '../../page-title';
 import { may } from '../../session/may';
@@ -21,6 +22,7 @@ import { PlateOfLot } from '../evidence/plate-of-lot';
 import { SampleSheet } from '../evidence/sample-sheet';
 import { SamplingFacts } from '../evidence/sampling-facts';
 import { AskReason } from '../../shell/reason-dialog/ask-reason';
+import { LotWaveformsPanel } from '../../waveforms/lot-waveforms-panel';
 import { CertificatePanel } from './certificate-panel';
 import { LotFacts } from './lot-facts';
 import { NonconformancePanel } from './nonconformance-panel';
@@ -36,6 +38,7 @@ import { placeOf } from './lot-place';
     LotFacts,
     LotHead,
     LotHistory,
+    LotWaveformsPanel,
     MatButton,
     MeasuredWith,
     MessageNote,
@@ -73,6 +76,7 @@ export class LotPage {
   protected readonly mayMeasure = may(readBench);
   protected readonly mayLift = may(liftHold);
   protected readonly mayReadCertificate = may(readCertificate);
+  protected readonly mayReadWaveforms = may(listWaveforms);
   protected readonly mayReadNonconformance = may(readNonconformance);
   protected readonly placeOf = placeOf;
 

@@ -10,6 +10,7 @@ import {
 import { RouterLink } from '@angular/router';
 import { expectedBand } from '#shared/plan/expected-band';
 import { cautionOf, methodNote } from '#shared/plan/method-notes';
+import { UnitWaveforms } from '../../../waveforms/unit-waveforms/unit-waveforms';
 import { narrowerThan } from '../../../shell/screen-width';
 import { ScopeReader } from '../../../ui/scope-reader/scope-reader';
 import { type ScopeText } from '../../../ui/scope-reader/scope-text';
@@ -32,7 +33,6 @@ import { WarmUp } from '../warm-up';
 import { AttributeEntry } from './attribute-entry';
 import { CellActions } from './cell-actions';
 import { CellHistory } from './cell-history';
-import { CellWaveforms } from './cell-waveforms';
 import { CellUncertainty } from './cell-uncertainty';
 import { ComputedEntry } from './computed-entry';
 import { DirectEntry } from './direct-entry';
@@ -49,7 +49,6 @@ import { RefusedReading } from './refused-reading';
     AttributeEntry,
     CellActions,
     CellHistory,
-    CellWaveforms,
     ClassGlyph,
     ComputedEntry,
     DirectEntry,
@@ -61,6 +60,7 @@ import { RefusedReading } from './refused-reading';
     RefusedReading,
     RouterLink,
     ScopeReader,
+    UnitWaveforms,
     VerdictChip,
   ],
   providers: [PanelCell, CellUncertainty],
@@ -70,7 +70,7 @@ import { RefusedReading } from './refused-reading';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ReadingPanel {
-  private readonly sheet = inject(BenchSheet);
+  protected readonly sheet = inject(BenchSheet);
   private readonly settings = inject(BenchSettings);
   protected readonly commands = inject(DeskCommands);
   protected readonly cursor = inject(BenchCursor);

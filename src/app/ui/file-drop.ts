@@ -1,15 +1,6 @@
 import { ChangeDetectionStrategy, Component, input, output, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
-import { Icon } from '../../ui/marks/icon';
-
-/** A file that was picked, as text. */
-export interface PickedFile {
-  readonly name: string;
-  readonly text: string;
-}
-
-/** Larger files are not rack files; the server takes no more either. */
-const MOST_BYTES = 20_000_000;
+import { Icon } from './marks/icon';
 
 /** Takes a file by choosing or by dropping. */
 @Component({
@@ -24,7 +15,7 @@ const MOST_BYTES = 20_000_000;
       (drop)="drop($event)"
     >
       <qr-icon name="upload" [size]="24" />
-      <span>{{ name() || 'Drop the CSV file here' }}</span>
+      <span>{{ name() || prompt() }}</span>
       <button type="button" matButton="outlined" (click)="chooser.click()">
         {{ name() ? 'Choose another' : 'Choose a file' }}
       </button>
@@ -33,8 +24,8 @@ const MOST_BYTES = 20_000_000;
         class="unseen"
         type="file"
         tabindex="-1"
-        accept=".csv,.txt,text/csv,text/plain"
-        aria-label="Rack file"
+        [accept]="accept()"
+        [attr.aria-label]="label()"
         (change)="take(chooser.files); chooser.value = ''"
       />
     </div>
@@ -69,7 +60,16 @@ const MOST_BYTES = 20_000_000;
 export class FileDrop {
   /** Name of the file picked before. */
   readonly name = input('');
-  readonly picked = output<PickedFile>();
+  /** What the choosing is called for who does not see it: "Rack file". */
+  readonly label = input.required<string>();
+  readonly prompt = input('Drop the CSV file here');
+  /** Endings and media types that the chooser offers. */
+  readonly accept = input('.csv,.txt,text/csv,text/plain');
+  /** Bytes at most. */
+  readonly most = input.required<number>();
+  /** What to do about a file that is too large. */
+  readonly tooLarge = input('');
+  readonly picked = output<File>();
 
   protected readonly over = signal(false);
   protected readonly refusal = signal('');
@@ -77,18 +77,19 @@ export class FileDrop {
   protected drop(event: DragEvent): void {
     event.preventDefault();
     this.over.set(false);
-    void this.take(event.dataTransfer?.files ?? null);
+    this.take(event.dataTransfer?.files ?? null);
   }
 
-  protected async take(files: FileList | null): Promise<void> {
+  protected take(files: FileList | null): void {
     const file = files?.[0];
     if (file === undefined) return;
-    this.refusal.set(refusalOf(file));
-    if (this.refusal() === '') this.picked.emit({ name: file.name, text: await file.text() });
+    this.refusal.set(this.refusalOf(file));
+    if (this.refusal() === '') this.picked.emit(file);
   }
-}
 
-function refusalOf({ name, size }: File): string {
-  if (size === 0) return `${name} is empty.`;
-  return size > MOST_BYTES ? `${name} is larger than 20 MB. Export the readings of one lot only.` : '';
+  private refusalOf({ name, size }: File): string {
+    if (size === 0) return `${name} is empty.`;
+    if (size <= this.most()) return '';
+    return `${name} is larger than ${Math.floor(this.most() / 1_000_000)} MB. ${this.tooLarge()}`.trim();
+  }
 }
