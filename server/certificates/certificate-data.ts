@@ -1,12 +1,15 @@
 import { type Db } from '#db/open-database';
 import { type JudgedLot } from '#server/judging/sample-judging';
 import { type Caller } from '#server/caller';
+import { conditionsOf } from '#server/bench/lot-conditions';
 import { characteristicResults } from '#server/judging/characteristic-results';
 import { instrumentsUsed, readingsThatCount, repeatsOf } from '#server/judging/counting';
+import { largestUncertainty } from '#server/judging/largest-uncertainty';
 import { fixedSampling } from '#server/lots/lot-sampling-queries';
 import { signerOf } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
 import { findSite } from '#server/site/site-queries';
+import { type LotConditions } from '#shared/contract/conditions';
 import { type CertificateData, type CertificateResult } from '#shared/papers/certificate-data';
 import { SCHEME_NAME, SCHEME_TABLES } from '#shared/sampling/scheme';
 
@@ -19,7 +22,20 @@ export interface Release {
   unitsReleased: number;
 }
 
-function resultOf(result: ReturnType<typeof characteristicResults>[number]): CertificateResult {
+const NOTHING_NOTED: LotConditions = {
+  ambientCelsius: null,
+  mainsVolts: null,
+  mainsHertz: null,
+  load: '',
+  bandwidth: '',
+  warmUpStartedAt: null,
+  note: '',
+};
+
+function resultOf(
+  result: ReturnType<typeof characteristicResults>[number],
+  expandedUncertainty: number | null,
+): CertificateResult {
   const { characteristic, n, found, min, mean, max, failReasons, acceptance, rejection } = result;
   const { name, condition, class: nonconformityClass, kind } = characteristic;
   const measured = characteristic.kind === 'attribute' ? null : characteristic;
@@ -38,10 +54,26 @@ function resultOf(result: ReturnType<typeof characteristicResults>[number]): Cer
     min,
     mean,
     max,
+    expandedUncertainty,
     failReasons,
     acceptance,
     rejection,
   };
+}
+
+/** Every characteristic with the largest U of its readings. */
+function resultsOf(db: Db, judged: JudgedLot): CertificateResult[] {
+  const uncertainties = judged.rules.characteristics.map((one) => largestUncertainty(db, judged, one));
+  return characteristicResults(judged).map((result, index) => resultOf(result, uncertainties[index] ?? null));
+}
+
+/** What was noted last of the conditions; null where nothing was noted and the plan asks for no warm-up. */
+function conditionsFor(db: Db, lotId: number, { rules }: JudgedLot): CertificateData['conditions'] {
+  const { warmUpMinutes } = rules.revision;
+  const noted = conditionsOf(db, lotId);
+  if (noted === null) return warmUpMinutes === null ? null : { ...NOTHING_NOTED, warmUpMinutes };
+  const { ambientCelsius, mainsVolts, mainsHertz, load, bandwidth, warmUpStartedAt, note } = noted;
+  return { ambientCelsius, mainsVolts, mainsHertz, load, bandwidth, warmUpStartedAt, note, warmUpMinutes };
 }
 
 function groupsOf({ verdict }: JudgedLot): CertificateData['groups'] {
@@ -99,8 +131,11 @@ export function certificateData(db: Db, number: string, release: Release): Certi
     sampleSize: sampling.sampleSize,
     unitsJudged: lot.unitsJudged,
     groups: groupsOf(judged),
-    results: characteristicResults(judged).map(resultOf),
-    decisionRule: 'simple',
+    results: resultsOf(db, judged),
+    decisionRule: judged.rules.revision.decisionRule,
+    coverageFactor: judged.rules.revision.coverageFactor,
+    conditions: conditionsFor(db, lot.id, judged),
+    unitsRuled: judged.units.filter(({ unit }) => unit.ruling === 'conforming').length,
     repeats: repeatsOf(judged),
     unitsRemoved: lot.countedQuantity - unitsReleased,
     unitsReleased,

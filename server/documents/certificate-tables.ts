@@ -2,7 +2,7 @@ import { INSTRUMENT_KIND_TITLES } from '#shared/contract/instruments';
 import { type CertificateData } from '#shared/papers/certificate-data';
 import { type NonconformityClass } from '#shared/sampling/scheme';
 import { formatNumber } from '#shared/quantities/format-quantity';
-import { findings, limitsText, meanText, resultName } from './certificate-words';
+import { findings, limitsText, meanText, resultName, uncertaintyCell } from './certificate-words';
 import { CLASS_GLYPH_WIDTH, classGlyph } from './class-glyph';
 import { LEFT, type Paper, WIDTH } from './paper';
 import { type Cell, type Column, type Table } from './paper-table';
@@ -21,13 +21,14 @@ function classCell({ doc }: Paper, kind: NonconformityClass): Cell {
 }
 
 const RESULT_COLUMNS: Column[] = [
-  { head: 'Characteristic', x: 0, width: 158, align: 'left' },
-  { head: 'Class', x: 164, width: 62, align: 'left' },
-  { head: 'Limits', x: 232, width: 117, align: 'left' },
-  { head: 'n', x: 349, width: 26, align: 'right' },
-  { head: 'Found', x: 377, width: 34, align: 'right' },
-  { head: 'Range of readings', x: 426, width: 126, align: 'left' },
-  { head: 'Mean', x: 554, width: 50, align: 'right' },
+  { head: 'Characteristic', x: 0, width: 140, align: 'left' },
+  { head: 'Class', x: 145, width: 58, align: 'left' },
+  { head: 'Limits', x: 206, width: 113, align: 'left' },
+  { head: 'n', x: 319, width: 23, align: 'right' },
+  { head: 'Found', x: 344, width: 33, align: 'right' },
+  { head: 'Range of readings', x: 385, width: 126, align: 'left' },
+  { head: 'U', x: 511, width: 46, align: 'right' },
+  { head: 'Mean', x: 559, width: 45, align: 'right' },
   { head: 'Ac / Re', x: 606, width: 44, align: 'right' },
 ];
 
@@ -41,6 +42,7 @@ export function resultsTable(paper: Paper, { results }: CertificateData): Table 
       count(result.n),
       count(result.found),
       set(findings(result)),
+      figures(uncertaintyCell(result)),
       figures(meanText(result)),
       acceptReject(result.acceptance, result.rejection),
     ];

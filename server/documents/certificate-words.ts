@@ -1,5 +1,8 @@
 import { type CertificateData, type CertificateResult } from '#shared/papers/certificate-data';
-import { formatLimits, formatNumber, inDisplayUnit } from '#shared/quantities/format-quantity';
+import { DECISION_RULE_TITLES } from '#shared/contract/plans';
+import { DECISION_RULE_MEANINGS } from '#shared/plan/decision-rule-words';
+import { formatLimits, formatNumber, formatQuantity, inDisplayUnit } from '#shared/quantities/format-quantity';
+import { uncertaintyDigits } from '#shared/quantities/format-uncertainty';
 import { rangeText } from './paper-reading';
 import { utcDay } from './paper-time';
 
@@ -22,6 +25,37 @@ function inspectedOn({ measuredFrom, measuredTo }: CertificateData): string {
   return first === last ? first : `${first} to ${last}`;
 }
 
+/** The warm-up that the plan asks for, and how much of it was over at the first reading. */
+function warmUpText(conditions: NonNullable<CertificateData['conditions']>, measuredFrom: string): string {
+  const { warmUpMinutes, warmUpStartedAt } = conditions;
+  if (warmUpMinutes === null) return '';
+  const asked = `${warmUpMinutes}${NB}min`;
+  if (warmUpStartedAt === null) return `warm-up of ${asked} asked, its start not noted`;
+  const over = Math.floor((Date.parse(measuredFrom) - Date.parse(warmUpStartedAt)) / 60_000);
+  if (over >= warmUpMinutes) return `after ${asked} of warm-up`;
+  return over < 0
+    ? `warm-up of ${asked} begun after the first reading`
+    : `from ${over}${NB}min into a warm-up of ${asked}`;
+}
+
+/** Room, mains, load, bandwidth and warm-up, as noted last; nothing is said of what was not noted. */
+export function conditionsText({ conditions, measuredFrom }: CertificateData): string {
+  if (!conditions) return '';
+  const { ambientCelsius, mainsVolts, mainsHertz, load, bandwidth, note } = conditions;
+  const mains = [
+    mainsVolts === null ? '' : formatQuantity(mainsVolts, 'V'),
+    mainsHertz === null ? '' : formatQuantity(mainsHertz, 'Hz'),
+  ].filter((part) => part !== '');
+  return given(
+    ambientCelsius === null ? '' : formatQuantity(ambientCelsius, '°C'),
+    labelled('mains', mains.join(' ')),
+    load,
+    bandwidth,
+    warmUpText(conditions, measuredFrom),
+    note,
+  );
+}
+
 /** The facts beside the plate, as label and value. */
 export function certificateFacts(data: CertificateData): { label: string; value: string }[] {
   const { lot, part, plan } = data;
@@ -37,6 +71,7 @@ export function certificateFacts(data: CertificateData): { label: string; value:
       value: `Level${NB}${plan.level}, ${lettersOf(data)}, ${plan.severity}, n${NB}=${NB}${formatNumber(data.sampleSize, 0)}`,
     },
     { label: 'Inspected', value: inspectedOn(data) },
+    { label: 'Conditions', value: conditionsText(data) },
   ].filter((fact) => fact.value !== '');
 }
 
@@ -63,12 +98,35 @@ function repeatsTold(repeats: number): string {
   return `${many} repeated; every reading taken is on record, and the last counts.`;
 }
 
+/** The rule by its name and what it does; the guard bands with their k. */
+function ruleText({ decisionRule, coverageFactor }: CertificateData): string {
+  const title = DECISION_RULE_TITLES[decisionRule].toLowerCase();
+  const meaning = lowerFirst(DECISION_RULE_MEANINGS[decisionRule]);
+  const guard =
+    decisionRule === 'simple' ? '' : ` (ILAC-G8:09/2019, guard band w${NB}=${NB}U, k${NB}=${NB}${coverageFactor ?? 2})`;
+  return `Decision rule: ${title}${guard}; ${meaning}`;
+}
+
+/** What the column U states, and which units quality ruled on. */
+function uncertaintyTold({ results, coverageFactor = 2, unitsRuled = 0 }: CertificateData): string {
+  const isStated = results.some(({ expandedUncertainty }) => typeof expandedUncertainty === 'number');
+  const stated = isStated
+    ? ` U is the largest expanded uncertainty of the readings, k${NB}=${NB}${coverageFactor} (JCGM${NB}100).`
+    : '';
+  if (unitsRuled === 0) return stated;
+  const many = unitsRuled === 1 ? '1 undecided unit was' : `${formatNumber(unitsRuled, 0)} undecided units were`;
+  return `${stated} ${many} ruled conforming by quality.`;
+}
+
+function lowerFirst(sentence: string): string {
+  return sentence.charAt(0).toLowerCase() + sentence.slice(1);
+}
+
 /** How the readings were judged, what the certificate does not state, and the digest of what it states. */
 export function finePrint(data: CertificateData, dataDigest: string): string[] {
   const judged = formatNumber(data.unitsJudged, 0);
   return [
-    'Decision rule: simple acceptance; a reading conforms within its limits, these included, and measurement ' +
-      `uncertainty is not deducted. ${repeatsTold(data.repeats)} ` +
+    `${ruleText(data)}${uncertaintyTold(data)} ${repeatsTold(data.repeats)} ` +
       `Sampling: ${data.scheme}, single sampling; ${judged} units judged.`,
     'This states conformity of the sampled lot to the plan, not product-safety approval; local electrical-safety rules ' +
       'take precedence.',
@@ -88,6 +146,12 @@ export function findings(result: CertificateResult): string {
     return given(`${formatNumber(result.found, 0)} fail`, ...new Set(result.failReasons));
   }
   return result.min === null || result.max === null ? 'no reading' : rangeText(result.min, result.max, result);
+}
+
+/** The largest U of the readings, in the unit that the range names. */
+export function uncertaintyCell({ kind, unit, expandedUncertainty = null }: CertificateResult): string {
+  if (kind === 'attribute' || expandedUncertainty === null) return '';
+  return `±${NB}${uncertaintyDigits(expandedUncertainty, unit ?? '')}`;
 }
 
 /** The mean, in the unit that the range beside it names. */

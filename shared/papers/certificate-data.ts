@@ -1,3 +1,5 @@
+import { type LotConditions } from '../contract/conditions';
+import { type DecisionRule } from '../uncertainty/guard-band';
 import { type NonconformityClass } from '../sampling/scheme';
 
 /** A person's signature under a paper: name, stamp and instant (UTC, ISO 8601). */
@@ -24,6 +26,8 @@ export interface CertificateResult {
   min: number | null;
   mean: number | null;
   max: number | null;
+  /** The largest U of its readings; null where that of one is not known. Papers stated before readings had one lack it. */
+  expandedUncertainty?: number | null;
   failReasons: string[];
   acceptance: number;
   rejection: number;
@@ -58,7 +62,13 @@ export interface CertificateData {
     found: number;
   }[];
   results: CertificateResult[];
-  decisionRule: 'simple';
+  decisionRule: DecisionRule;
+  /** k of every U. Papers stated before readings had an uncertainty lack it, as they lack what follows. */
+  coverageFactor?: number;
+  /** What the lot was measured under, as noted last, and the warm-up that the plan asks for. */
+  conditions?: (LotConditions & { warmUpMinutes: number | null }) | null;
+  /** Units that the rule left undecided and quality ruled conforming. */
+  unitsRuled?: number;
   repeats: number;
   unitsRemoved: number;
   unitsReleased: number;

@@ -1,12 +1,14 @@
 import { certificatePdf } from '#server/documents/certificate-pdf';
 import {
   certificateFacts,
+  conditionsText,
   findings,
   finePrint,
   limitsText,
   meanText,
   resultName,
   statement,
+  uncertaintyCell,
 } from '#server/documents/certificate-words';
 import { FontRuns } from '#server/documents/font-runs';
 import { STYLES } from '#server/documents/text-style';
@@ -120,6 +122,51 @@ describe('the words of a certificate', () => {
     expect(print).toContain('not product-safety approval; local electrical-safety rules take precedence');
     expect(print).toContain(DIGEST);
     expect(print).not.toMatch(/17050|ISO/);
+  });
+
+  it.each([
+    ['guarded', 'guarded acceptance (ILAC-G8:09/2019, guard band w = U, k = 1.65); each limit is drawn in by U'],
+    [
+      'non-binary',
+      'guard band on both sides (ILAC-G8:09/2019, guard band w = U, k = 1.65); a guard band of U lies on both',
+    ],
+  ] as const)('state the decision rule %s in words, with its k', (decisionRule, words) => {
+    const [judged = ''] = finePrint(certificate({ decisionRule, coverageFactor: 1.65 }), DIGEST);
+    expect(plain(judged)).toContain(`Decision rule: ${words}`);
+    expect(judged).not.toContain('simple');
+  });
+
+  it('state the largest uncertainty in the unit of the range, and what it is', () => {
+    const ripple = measured({ unit: 'mV p-p', expandedUncertainty: 0.0061 });
+    expect(plain(uncertaintyCell(ripple))).toBe('± 6');
+    expect(uncertaintyCell(measured())).toBe('');
+    expect(uncertaintyCell(attribute({ expandedUncertainty: null }))).toBe('');
+    const told = plain(
+      finePrint(certificate({ results: [ripple], coverageFactor: 2, unitsRuled: 1 }), DIGEST).join(' '),
+    );
+    expect(told).toContain('U is the largest expanded uncertainty of the readings, k = 2 (JCGM 100).');
+    expect(told).toContain('1 undecided unit was ruled conforming by quality.');
+    expect(finePrint(certificate(), DIGEST).join(' ')).not.toContain('expanded uncertainty');
+  });
+
+  it('state what the lot was measured under, and nothing that was not noted', () => {
+    const noted = {
+      ambientCelsius: 23,
+      mainsVolts: 230,
+      mainsHertz: 50,
+      load: 'electronic load',
+      bandwidth: '20 MHz',
+      note: '',
+      warmUpMinutes: 15,
+      warmUpStartedAt: '2026-03-17T08:40:00.000Z',
+    };
+    const words = (more: Partial<typeof noted>) =>
+      plain(conditionsText(certificate({ conditions: { ...noted, ...more } })));
+    expect(words({})).toBe('23 °C, mains 230 V 50 Hz, electronic load, 20 MHz, after 15 min of warm-up');
+    expect(words({ warmUpStartedAt: '2026-03-17T08:55:00.000Z' })).toContain('from 5 min into a warm-up of 15 min');
+    expect(words({ warmUpStartedAt: '2026-03-17T09:30:00.000Z' })).toContain('begun after the first reading');
+    expect(conditionsText(certificate())).toBe('');
+    expect(certificateFacts(certificate()).map(({ label }) => label)).not.toContain('Conditions');
   });
 
   it('leave out an order and a date code that were not given', () => {
