@@ -107,7 +107,7 @@ const KEYS: Readonly<Record<string, (view: WaveWindow) => void>> = {
       align-items: center;
       margin-bottom: 8px;
     }
-    @media (pointer: coarse) {
+    @media (pointer: coarse), (max-width: 700px) {
       .hint {
         display: none;
       }

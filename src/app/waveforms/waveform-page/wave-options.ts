@@ -47,7 +47,8 @@ export function drawnPoints({ samples, spacing, share }: DrawnWave): [number, nu
   }).flat();
 }
 
-export const secondsText = (seconds: number) => formatQuantity(seconds, 's', { significant: 4 });
+export const secondsText = (seconds: number) => formatQuantity(seconds, 's');
+/** Labels of an axis all have the digits that tell them apart. */
 const voltsText = (volts: number) => formatQuantity(volts, 'V', { significant: 4 });
 
 function familyLine(mean: number | null, name: string, colours: ChartColours) {
@@ -58,8 +59,8 @@ function familyLine(mean: number | null, name: string, colours: ChartColours) {
         symbol: 'none',
         lineStyle: { color: colours.ink2, type: 'dashed' as const, width: 1 },
         label: {
-          formatter: `${name} ${voltsText(mean)}`,
-          position: 'insideEndTop' as const,
+          formatter: `${name}\n${voltsText(mean)}`,
+          position: 'end' as const,
           color: colours.ink2,
           fontSize: 11,
         },
@@ -109,7 +110,7 @@ export function waveOptions(drawn: DrawnWave): (colours: ChartColours) => ChartO
     const axis = chartAxis(colours);
     return {
       ...chartBase(colours),
-      grid: { left: 8, right: 16, top: 28, bottom: 48, outerBoundsMode: 'same', outerBoundsContain: 'axisLabel' },
+      grid: { left: 8, right: 68, top: 28, bottom: 48, outerBoundsMode: 'same', outerBoundsContain: 'axisLabel' },
       dataZoom: [
         { type: 'inside', ...zoom, zoomOnMouseWheel: 'ctrl', moveOnMouseWheel: false, filterMode: 'none' },
         {
