@@ -6,10 +6,13 @@ import { systemClock } from '#server/clock';
 import { type Context } from '#server/context';
 import { readEnvironment } from '#server/environment';
 import { Stream } from '#server/events/stream';
+import { FileStore } from '#server/files/file-store';
 import { signAccessToken } from '#server/sessions/access-token';
 import { inProcessPasswords } from '#server/sessions/passwords';
 import { startSession } from '#server/sessions/start-session';
+import { inProcessWaves } from '#server/waveforms/wave-reader';
 import { type AddressInfo } from 'node:net';
+import path from 'node:path';
 import process from 'node:process';
 import { pino } from 'pino';
 import { addTestPerson } from '../support/test-people';
@@ -28,6 +31,8 @@ export function contextOn(file: string): Context {
     passwords: inProcessPasswords(environment.passwordCost),
     outbox: { wake: () => undefined, close: () => Promise.resolve(), idle: () => Promise.resolve() },
     stream: new Stream({ db, clock }),
+    files: new FileStore(path.join(path.dirname(file), 'files')),
+    waves: inProcessWaves(),
   };
 }
 

@@ -8,6 +8,7 @@ import { measureFirstPage } from './measure-first-page';
 import { measureRackFile } from './measure-rack-file';
 import { measureReadings } from './measure-readings';
 import { measureVerdicts } from './measure-verdicts';
+import { measureWaveform } from './measure-waveform';
 import { measureYields } from './measure-yields';
 import { readingFile } from './reading-file';
 import { type Line, table } from './report';
@@ -15,13 +16,14 @@ import { type Line, table } from './report';
 async function measureAll(folder: string): Promise<Line[]> {
   const certificate = await measureCertificate();
   const verdicts = await measureVerdicts();
+  const waveform = await measureWaveform();
   const { lines: readings, afterYears } = await measureReadings(folder);
   const db = openDatabase(afterYears, process.cwd());
   const yields = await measureYields(db);
   db.$client.close();
   const rack = await measureRackFile(folder);
   const page = await measureFirstPage(await readingFile(path.join(folder, 'page.db'), false));
-  return [...readings, ...verdicts, ...yields, ...rack, ...certificate, ...page];
+  return [...readings, ...verdicts, ...waveform, ...yields, ...rack, ...certificate, ...page];
 }
 
 const start = performance.now();
