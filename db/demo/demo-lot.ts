@@ -38,5 +38,7 @@ export interface DemoLot {
   endsAtStop: boolean;
   /** The unit that its inspector sets aside. */
   setAside: { unit: number; reason: string } | null;
+  /** Whether the inspector captures the waveform of a unit. */
+  captured: boolean;
   ending: Ending;
 }

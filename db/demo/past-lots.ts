@@ -10,11 +10,13 @@ export interface PastLot {
   fault: Fault;
   endsAtStop: boolean;
   ending: Ending;
+  /** The least that is delivered of the part. */
+  isSmall?: boolean;
 }
 
 const DECIDED: Ending = { kind: 'decided' };
 
-/** The events of the quarter, by their place counted back from its last decided lot. */
+/** The events of the year, by their place counted back from its last decided lot. */
 const EVENTS: ReadonlyMap<number, PastLot> = new Map([
   [
     2,
@@ -48,6 +50,8 @@ const EVENTS: ReadonlyMap<number, PastLot> = new Map([
     },
   ],
   [19, { partNumber: 'WA-09-300', supplierCode: 'BAL', fault: 'smeared-marking', endsAtStop: false, ending: DECIDED }],
+  [57, { partNumber: 'WA-12-500', supplierCode: 'KES', fault: 'low-capacitance', endsAtStop: false, ending: DECIDED }],
+  [71, { partNumber: 'WA-24-400', supplierCode: 'OMD', fault: 'smeared-marking', endsAtStop: false, ending: DECIDED }],
   [31, { partNumber: 'WA-24-400', supplierCode: 'OMD', fault: 'reversed-plug', endsAtStop: true, ending: DECIDED }],
 ]);
 
@@ -62,8 +66,12 @@ function everyPair(chance: Chance): { partNumber: string; supplierCode: string }
     .map(({ pair }) => pair);
 }
 
-/** So many past lots in the order of their days: parts and suppliers in turn, with the events of the quarter between. */
-export function pastLots(count: number, chance: Chance): PastLot[] {
+/**
+ * So many past lots in the order of their days: parts and suppliers in turn, with the events between.
+ *
+ * @param small how many of them, the first, are small
+ */
+export function pastLots(count: number, small: number, chance: Chance): PastLot[] {
   const plain: { partNumber: string; supplierCode: string }[] = [];
   return Array.from({ length: count }, (_, index) => {
     const event = EVENTS.get(count - index);
@@ -71,6 +79,6 @@ export function pastLots(count: number, chance: Chance): PastLot[] {
     if (plain.length === 0) plain.push(...everyPair(chance));
     const pair = plain.shift();
     if (!pair) throw new RangeError('The demo has no parts.');
-    return { ...pair, fault: 'none', endsAtStop: false, ending: DECIDED };
+    return { ...pair, fault: 'none', endsAtStop: false, ending: DECIDED, isSmall: index < small };
   });
 }

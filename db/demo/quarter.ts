@@ -15,8 +15,18 @@ export interface Quarter {
   lots: DemoLot[];
 }
 
+/** The time the demo tells of: so many weeks in full, and before them so many of which there is less to tell. */
+export interface DemoSpan {
+  until: Date;
+  seed: number;
+  weeks: number;
+  weeksBefore?: number;
+}
+
 const HOUR = 3_600_000;
 const LOTS_A_WEEK = 4;
+/** Of the weeks before the quarter there is less to tell, and the first start takes less long. */
+const LOTS_A_WEEK_BEFORE = 1;
 /** The open lots take the last hours; the lots before them are decided by then. */
 const OPEN_HOURS = 15;
 const LARGEST_SEED = 2 ** 31 - 1;
@@ -45,12 +55,18 @@ function papers(lot: { partNumber: string; quantity: number; arrivedAt: Date }, 
   };
 }
 
+/** The day of one of so many lots that are spread evenly over days. */
+function spreadOver(days: readonly Date[], index: number, count: number): Date | undefined {
+  return days[Math.floor((index * days.length) / count)];
+}
+
 /** Two lots a day at most: one in the morning, one after noon. */
 function pastLot(past: PastLot, day: Date, index: number, chance: Chance): DemoLot {
   const isMorning = index % 2 === 0;
   const arrivedAt = isMorning ? timeOn(day, 7, chance.whole(4, 50)) : timeOn(day, 8, chance.whole(0, 150));
   const drawnAt = isMorning ? timeOn(day, 8, chance.whole(5, 40)) : timeOn(day, 11, chance.whole(30, 55));
-  const quantity = chance.pick(demoPart(past.partNumber).lotSizes);
+  const { lotSizes } = demoPart(past.partNumber);
+  const quantity = past.isSmall ? Math.min(...lotSizes) : chance.pick(lotSizes);
   const byRack = past.fault === 'none' && chance.happens(0.25);
   return {
     ...papers({ partNumber: past.partNumber, quantity, arrivedAt }, index, chance),
@@ -64,6 +80,7 @@ function pastLot(past: PastLot, day: Date, index: number, chance: Chance): DemoL
     byRack,
     endsAtStop: past.endsAtStop,
     setAside: null,
+    captured: past.fault === 'low-capacitance' || past.fault === 'bad-tap',
     ending: past.ending,
   };
 }
@@ -82,15 +99,16 @@ function openLot(open: OpenLot, until: Date, index: number, chance: Chance): Dem
     byRack: false,
     endsAtStop: false,
     setAside: open.setAside ?? null,
+    captured: open.ending.kind === 'measuring' || open.ending.kind === 'submitted',
     ending: open.ending,
   };
 }
 
 /**
- * Everything that arrives in the weeks up to a moment. Past lots fall into working hours; the open lots of the last hours
+ * Everything that arrives in the weeks up to a moment, and more sparsely in the weeks before them. Past lots fall into working hours; the open lots of the last hours
  * are placed by that moment alone, so that the queues look alike whenever the demo is made.
  */
-export function quarterOf({ until, seed, weeks }: { until: Date; seed: number; weeks: number }): Quarter {
+export function quarterOf({ until, seed, weeks, weeksBefore = 0 }: DemoSpan): Quarter {
   const chance = chanceOf(seed);
   const end = new Date(until.getTime() - OPEN_HOURS * HOUR);
   // A day counts as past when its last working hour is.
@@ -98,14 +116,18 @@ export function quarterOf({ until, seed, weeks }: { until: Date; seed: number; w
   const [first, ...rest] = days;
   const last = rest.at(-1);
   if (!first || !last) throw new RangeError('weeks is too short for a quarter with a past.');
-  const told = pastLots(weeks * LOTS_A_WEEK, chance);
+  const before = workDays(new Date(first.getTime() - weeksBefore * 7 * 24 * HOUR), new Date(first.getTime() - HOUR));
+  const [start = first, ...early] = before;
+  const earlier = weeksBefore * LOTS_A_WEEK_BEFORE;
+  const told = pastLots(earlier + weeks * LOTS_A_WEEK, earlier, chance);
   const past = told.map((one, index) => {
-    const day = rest[Math.floor((index * rest.length) / told.length)] ?? last;
-    return pastLot(one, day, index, chance);
+    const day =
+      index < earlier ? spreadOver(early, index, earlier) : spreadOver(rest, index - earlier, told.length - earlier);
+    return pastLot(one, day ?? last, index, chance);
   });
   const open = OPEN_LOTS.map((one, index) => openLot(one, until, past.length + index, chance));
   return {
-    firstMorning: timeOn(first, 7, 10),
+    firstMorning: timeOn(start, 7, 10),
     revisedAt: timeOn(rest[Math.floor(rest.length / 3)] ?? last, 15, 40),
     lastAfternoon: timeOn(last, 15, 45),
     lots: [...past, ...open],

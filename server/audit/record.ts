@@ -43,12 +43,12 @@ const lastEntry = preparedOnce((db) =>
 );
 
 /** The hash that the next entry follows. */
-export function chainHead(db: Db): string {
+function chainHead(db: Db): string {
   return lastEntry(db).get()?.hash ?? FIRST_HASH;
 }
 
 /** A change as the entry that follows the one with `previousHash`. */
-export function chainEntry(change: Change, previousHash: string) {
+function chainEntry(change: Change, previousHash: string) {
   const entry = {
     at: change.at.toISOString(),
     personId: change.person?.id ?? null,

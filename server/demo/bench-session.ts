@@ -1,15 +1,20 @@
 import { type TypedReading } from '#db/demo/bench-work';
 import { type Db } from '#db/open-database';
 import { startMeasuring } from '#server/bench/keep-reading';
+import { type MeasuredValue, type ReadingFacts, readingFacts } from '#server/bench/reading-facts';
 import { holdInstrument } from '#server/bench/reading-instrument';
 import { type Caller } from '#server/caller';
 import { type Context } from '#server/context';
 import { dayOf } from '#server/instruments/instrument-queries';
 import { keepProgress } from '#server/judging/running-verdicts';
 import { findLot } from '#server/lots/lot-rows';
+import { type Characteristic } from '#shared/contract/plans';
 import { type Agenda } from './agenda';
 import { type ReadingToKeep, keepTyped } from './keep-typed';
 import { type RunningSample } from './running-sample';
+
+/** A value with how it was read; null for what is judged by eye. */
+type FoundValue = Omit<MeasuredValue, 'value' | 'rangeId'> & { value: number | null };
 
 interface Session {
   lotId: number;
@@ -75,7 +80,16 @@ export class BenchSession {
     const { id, content } = sample.characteristic(typed.key);
     const kind = content.kind === 'computed' ? null : content.instrumentKind;
     const instrumentId = instrumentFor(kind, dayOf(typed.at));
-    return { typed, characteristicId: id, instrumentId, ...sample.take(typed) };
+    const taken = sample.take(typed);
+    const facts = this.factsOf(content, { value: taken.worth.value, entry: typed.entry, instrumentId });
+    return { typed, characteristicId: id, instrumentId, ...facts, ...taken };
+  }
+
+  /** The range and the uncertainty of what is measured, as the bench finds them. */
+  private factsOf(content: Characteristic, { value, ...given }: FoundValue): ReadingFacts {
+    if (content.kind !== 'measured' || value === null) return { rangeId: null, expandedUncertainty: null };
+    const { revision } = this.session.sample.rules;
+    return readingFacts(this.context.db, revision, content, { ...given, value, rangeId: null });
   }
 
   private keep(db: Db, run: readonly ReadingToKeep[], at: Date): void {

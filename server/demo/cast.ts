@@ -1,6 +1,6 @@
 import { DEMO_PASSWORD, DEMO_SIGN_INS } from '#db/demo/sign-ins';
 import { people } from '#db/schema/people';
-import { recordAll } from '#server/audit/record-all';
+import { record } from '#server/audit/record';
 import { type Caller } from '#server/caller';
 import { type Context } from '#server/context';
 import { keepRoles } from '#server/people/person-rules';
@@ -50,7 +50,7 @@ export async function addCast({ db, clock, passwords }: Context): Promise<Cast> 
       subjectId: id,
       after: { name, email, stampNumber, roles },
     }));
-    recordAll(tx, added);
+    for (const change of added) record(tx, change);
     return cast;
   });
 }

@@ -2,6 +2,7 @@ import { type DemoLot } from '#db/demo/demo-lot';
 import { benchWork, type TypedReading } from '#db/demo/bench-work';
 import { type Chance, chanceOf } from '#db/demo/chance';
 import { demoPart } from '#db/demo/demo-parts';
+import { demoWave } from '#db/demo/demo-wave';
 import { productionOf } from '#db/demo/production';
 import { isReadByRack, RACK_MAPPING, rackFile } from '#db/demo/rack-file';
 import { type UnitTruth, unitTruth } from '#db/demo/unit-readings';
@@ -15,7 +16,11 @@ import { type RunningVerdicts } from '#server/judging/running-verdicts';
 import { bookLot, cancelLot } from '#server/lots/book-lot';
 import { drawSample } from '#server/lots/draw-sample';
 import { findLot } from '#server/lots/lot-rows';
+import { keepWaveform } from '#server/waveforms/keep-waveform';
 import { type Lot } from '#shared/contract/lots';
+import { LARGEST_WAVEFORM } from '#shared/contract/waveforms';
+import { randomUUID } from 'node:crypto';
+import { Readable } from 'node:stream';
 import { type Agenda } from './agenda';
 import { benchInstrument } from './bench-instruments';
 import { BenchSession } from './bench-session';
@@ -36,6 +41,9 @@ export interface LotStage {
 }
 
 const RACK_MINUTES = 35;
+/** How long after the draw a waveform is captured, and of one of how many units. */
+const CAPTURE_MINUTES = 14;
+const CAPTURED_AMONG = 6;
 const RACK_KINDS = ['multimeter', 'oscilloscope', 'insulation-tester'];
 
 function idOf(ids: ReadonlyMap<string, number>, name: string): number {
@@ -83,8 +91,32 @@ export class LotPlay {
     const drawn = drawSample(context, this.inspector, this.id, version, this.lot.seed);
     if (this.lot.ending.kind === 'drawn') return;
     const truths = this.truths(drawn);
+    if (this.lot.captured) agenda.add(later(this.lot.drawnAt, CAPTURE_MINUTES), () => this.capture(truths));
     if (!this.lot.byRack) this.measure(truths, later(this.lot.drawnAt, this.chance.between(3, 6)));
     else agenda.add(later(this.lot.drawnAt, RACK_MINUTES), () => this.importRack(drawn.number, truths));
+  }
+
+  /** Captures the waveform of the unit with the most ripple among the first ones. */
+  private async capture(truths: readonly UnitTruth[]): Promise<void> {
+    const part = demoPart(this.lot.partNumber);
+    const ripples = truths.slice(0, CAPTURED_AMONG).map(({ values }) => values.get('ripple_pp') ?? 0);
+    const most = Math.max(...ripples);
+    const unit = ripples.indexOf(most) + 1;
+    const wave = demoWave(part, this.lot.fault, most, this.chance);
+    if (wave === undefined) return;
+    await keepWaveform(
+      this.on.context,
+      this.id,
+      { person: this.inspector, rackId: null },
+      {
+        id: randomUUID(),
+        fileName: `${this.lot.deliveryNumber}-unit-${unit}.csv`,
+        unit,
+        characteristicKey: 'ripple_pp',
+        stream: Readable.from([Buffer.from(wave)]),
+        most: LARGEST_WAVEFORM,
+      },
+    );
   }
 
   private truths({ sampleSize }: Lot): UnitTruth[] {

@@ -1,4 +1,4 @@
-import { quarterOf } from '#db/demo/quarter';
+import { type DemoSpan, quarterOf } from '#db/demo/quarter';
 import { type Context } from '#server/context';
 import { RunningVerdicts } from '#server/judging/running-verdicts';
 import { Agenda } from './agenda';
@@ -12,16 +12,15 @@ import { setStage } from './stage';
 import { addStudySteps } from './study-steps';
 
 const WEEKS = 13;
+/** With the quarter they make a year. */
+const WEEKS_BEFORE = 39;
 
 /** How long a notice is on its way, in seconds. */
 const MAIL_SECONDS = 4;
 
-async function playQuarter(
-  context: Context,
-  clock: DemoClock,
-  { until, seed, weeks }: { until: Date; seed: number; weeks: number },
-): Promise<void> {
-  const quarter = quarterOf({ until, seed, weeks });
+async function playQuarter(context: Context, clock: DemoClock, span: DemoSpan): Promise<void> {
+  const { until, seed } = span;
+  const quarter = quarterOf(span);
   const agenda = new Agenda(clock);
   clock.set(quarter.firstMorning);
   const cast = await addCast(context);
@@ -43,13 +42,13 @@ async function playQuarter(
  */
 export async function playDemo(
   context: Context,
-  { until, seed, weeks = WEEKS }: { until: Date; seed: number; weeks?: number },
+  { until, seed, weeks = WEEKS, weeksBefore = WEEKS_BEFORE }: Omit<DemoSpan, 'weeks'> & { weeks?: number },
 ): Promise<void> {
   const clock = new DemoClock();
   const outbox = await startDemoMail(context, clock);
   try {
     const passwords = rememberedPasswords(context.passwords);
-    await playQuarter({ ...context, clock, outbox, passwords }, clock, { until, seed, weeks });
+    await playQuarter({ ...context, clock, outbox, passwords }, clock, { until, seed, weeks, weeksBefore });
   } finally {
     await outbox.close();
   }

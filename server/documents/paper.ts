@@ -95,7 +95,7 @@ export class Paper {
         const options = { characterSpacing: style.tracking ?? 0 };
         this.doc.font(run.font).fontSize(style.size).fillColor(style.colour);
         this.doc.text(run.text, at, baseline, { ...options, lineBreak: false, baseline: 'alphabetic' });
-        at += this.doc.widthOfString(run.text, options);
+        at += this.measure({ text: run.text, style });
       }
     }
   }

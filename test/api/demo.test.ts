@@ -23,7 +23,7 @@ let db: Database;
 
 async function played(): Promise<Database> {
   const fresh = openDatabase(':memory:', site.context.environment.root);
-  await playDemo({ ...site.context, db: fresh }, { until: UNTIL, seed: 11, weeks: 2 });
+  await playDemo({ ...site.context, db: fresh }, { until: UNTIL, seed: 11, weeks: 2, weeksBefore: 1 });
   return fresh;
 }
 

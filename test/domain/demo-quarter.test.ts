@@ -55,6 +55,18 @@ describe('the quarter of the demo', () => {
     expect(waiting.filter((lot) => lot.countedQuantity !== lot.statedQuantity)).toHaveLength(2);
   });
 
+  it('follows three quarters with a lot a week, of which some went wrong as well', () => {
+    const year = quarterOf({ until: UNTIL, seed: 5, weeks: 13, weeksBefore: 39 });
+    const start = UNTIL.getTime() - 13 * 7 * 24 * 3_600_000;
+    const before = year.lots.filter(({ arrivedAt }) => arrivedAt.getTime() < start);
+    expect(before.length).toBeGreaterThanOrEqual(37);
+    expect(before.length).toBeLessThanOrEqual(40);
+    expect(new Set(before.map(({ arrivedAt }) => arrivedAt.toISOString().slice(0, 7))).size).toBeGreaterThanOrEqual(9);
+    expect(before.filter(({ fault }) => fault !== 'none').length).toBeGreaterThanOrEqual(2);
+    expect(year.firstMorning.getTime()).toBeLessThan(Math.min(...before.map(({ arrivedAt }) => arrivedAt.getTime())));
+    expect(year.lots.length - before.length).toBeGreaterThanOrEqual(60);
+  });
+
   it('ends before its last moment, at every hour of the week', () => {
     for (let hour = 0; hour < 168; hour += 1) {
       const until = new Date(UNTIL.getTime() + hour * 3_600_000);
