@@ -3,11 +3,20 @@ import { createRequire } from 'node:module';
 import { type Page } from '@playwright/test';
 import type Axe from 'axe-core';
 import { settling } from './support/settling';
+import { demoPlaces } from './support/demo-places';
 import { expect, test } from './support/site';
 
 const axe = readFileSync(createRequire(import.meta.url).resolve('axe-core'), 'utf8');
 
-const LOT_PAGES = ['/arrivals', '/arrivals/55', '/released', '/on-hold', '/lots/51', '/lots/52', '/lots/52/pull-list'];
+const LOT_PAGES = [
+  '/arrivals',
+  '/arrivals/{arrived}',
+  '/released',
+  '/on-hold',
+  '/lots/{rejected}',
+  '/lots/{released}',
+  '/lots/{released}/pull-list',
+];
 const RECORD_PAGES = ['/parts', '/parts/1', '/suppliers', '/suppliers/1', '/account', '/no-such-page'];
 const QUALITY_RECORDS = [
   '/plans',
@@ -15,25 +24,27 @@ const QUALITY_RECORDS = [
   '/instruments',
   '/instruments/1',
   '/certificates',
-  '/certificates/46',
+  '/certificates/{certificate}',
   '/nonconformances',
-  '/nonconformances/5',
+  '/nonconformances/{nonconformance}',
 ];
 
 /** Who may see which pages of the demo, and some of those that are closed to them. */
 const PEOPLE: Record<string, { sees: readonly string[]; closed: readonly string[] }> = {
   receiving: {
-    sees: [...LOT_PAGES, '/arrivals/new', '/arrivals/55/correct', ...RECORD_PAGES, '/suppliers/new', '/plans'],
+    sees: [...LOT_PAGES, '/arrivals/new', '/arrivals/{arrived}/correct', ...RECORD_PAGES, '/suppliers/new', '/plans'],
     closed: ['/bench', '/decision', '/trends', '/people', '/mail', '/site', '/parts/new'],
   },
   inspector: {
     sees: [
       '/arrivals',
-      '/arrivals/55',
+      '/arrivals/{arrived}',
       '/bench',
-      '/bench/59',
-      '/bench/62',
-      '/bench/59/rack-file',
+      '/bench/{measuring}',
+      '/bench/{drawn}',
+      '/bench/{measuring}/rack-file',
+      '/waveforms/{waveform}',
+      '/lots/{measuring}',
       '/trends',
       '/plans/1',
     ],
@@ -41,14 +52,41 @@ const PEOPLE: Record<string, { sees: readonly string[]; closed: readonly string[
   },
   quality: {
     sees: [
-      ...['/decision', '/decision/53', '/decision/54', '/trends', '/bench/59', ...QUALITY_RECORDS],
-      ...['/plans/5', '/parts/new', '/suppliers/new', '/instruments/new', '/plans/new', '/lots/53'],
+      ...[
+        '/decision',
+        '/decision/{submitted}',
+        '/decision/{submitted-last}',
+        '/trends',
+        '/bench/{measuring}',
+        ...QUALITY_RECORDS,
+      ],
+      ...[
+        '/gauge-studies',
+        '/gauge-studies/{study}',
+        '/gauge-studies/new',
+        '/parts/1',
+        '/plans/5',
+        '/parts/new',
+        '/suppliers/new',
+        '/instruments/new',
+        '/plans/new',
+        '/lots/{submitted}',
+      ],
     ],
     closed: ['/people', '/mail', '/site'],
   },
   engineering: {
-    sees: ['/on-hold', '/lots/34', '/trends', '/plans/1', '/parts/1', '/nonconformances/1', '/bench', '/audit'],
-    closed: ['/people', '/bench/59/rack-file', '/plans/new', '/mail'],
+    sees: [
+      '/on-hold',
+      '/lots/{held}',
+      '/trends',
+      '/plans/1',
+      '/parts/1',
+      '/nonconformances/{nonconformance}',
+      '/bench',
+      '/audit',
+    ],
+    closed: ['/people', '/bench/{measuring}/rack-file', '/plans/new', '/mail'],
   },
   auditor: {
     sees: ['/audit', '/people', '/people/1', '/mail', '/mail/1', '/mail/received/1', '/decision', '/site', '/racks/1'],
@@ -68,7 +106,7 @@ const PEOPLE: Record<string, { sees: readonly string[]; closed: readonly string[
       '/racks/1',
       '/racks/new',
     ],
-    closed: ['/arrivals', '/bench', '/lots/51', '/decision', '/trends', '/plans'],
+    closed: ['/arrivals', '/bench', '/lots/{rejected}', '/decision', '/trends', '/plans'],
   },
 };
 
@@ -123,11 +161,15 @@ async function faultsOnScreens(page: Page, path: string): Promise<string[]> {
 test.describe.configure({ mode: 'parallel' });
 
 for (const [who, { sees, closed }] of Object.entries(PEOPLE)) {
-  test(`every page of ${who} has one heading, fits the screen and can be read by everybody`, async ({ pageOf }) => {
+  test(`every page of ${who} has one heading, fits the screen and can be read by everybody`, async ({
+    pageOf,
+    api,
+  }) => {
+    const placeOf = await demoPlaces(await api('quality'));
     const page = await pageOf(who);
     const shown = settling(page);
     const faults: string[] = [];
-    for (const path of sees) {
+    for (const path of sees.map(placeOf)) {
       await page.setViewportSize(SCREENS[0]);
       await page.goto(path);
       await shown();
@@ -138,15 +180,16 @@ for (const [who, { sees, closed }] of Object.entries(PEOPLE)) {
     expect(faults).toEqual([]);
   });
 
-  test(`pages closed to ${who} say who may open them`, async ({ pageOf }) => {
+  test(`pages closed to ${who} say who may open them`, async ({ pageOf, api }) => {
+    const placeOf = await demoPlaces(await api('quality'));
     const page = await pageOf(who);
     const shown = settling(page);
-    for (const path of closed) {
+    for (const path of closed.map(placeOf)) {
       await page.goto(path);
       await shown();
       await expect(page.getByRole('heading', { level: 1 }), path).toBeVisible();
       await expect(page.getByText(/is open to: \w+/), path).toBeVisible();
     }
-    expect(await faultsOnScreens(page, closed[0] ?? '')).toEqual([]);
+    expect(await faultsOnScreens(page, page.url())).toEqual([]);
   });
 }

@@ -1,4 +1,5 @@
 import { type Page } from '@playwright/test';
+import { demoPlaces } from './support/demo-places';
 import { settling } from './support/settling';
 import { expect, signIn, test } from './support/site';
 
@@ -16,7 +17,9 @@ async function weighing(page: Page): Promise<() => number> {
 test('the sign-in page transfers at most 200 kB, the way from there to a bench at most 350 kB', async ({
   browser,
   server,
+  api,
 }) => {
+  const placeOf = await demoPlaces(await api('quality'));
   const context = await browser.newContext();
   const page = await context.newPage();
   const weight = await weighing(page);
@@ -25,7 +28,7 @@ test('the sign-in page transfers at most 200 kB, the way from there to a bench a
   await shown();
   const first = weight();
   await signIn(page, server.address, 'inspector');
-  await page.goto(`${server.address}/bench/59`);
+  await page.goto(server.address + placeOf('/bench/{measuring}'));
   await expect(page.getByRole('grid')).toBeVisible();
   await shown();
   const further = weight() - first;
