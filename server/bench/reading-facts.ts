@@ -8,7 +8,7 @@ import { expectedBand } from '#shared/plan/expected-band';
 import { expandedUncertainty } from '#shared/uncertainty/expanded-uncertainty';
 import { readingBudget } from '#shared/uncertainty/reading-budget';
 import { type RevisionRules } from '#server/judging/lot-judging';
-import { chosenRange, rangesOf } from './chosen-range';
+import { rangeOfReading, rangesOf } from './range-of-reading';
 
 type Measured = Extract<Characteristic, { kind: 'measured' }>;
 
@@ -49,7 +49,7 @@ export function readingFacts(
 ): ReadingFacts {
   const { value, entry, instrumentId, rangeId } = given;
   const ranges = instrumentId === null ? [] : rangesOf(db, instrumentId);
-  const range = chosenRange(ranges, rangeId, { value, entry, unit: characteristic.unit });
+  const range = rangeOfReading(ranges, rangeId, { value, entry, unit: characteristic.unit });
   if (!range) {
     holdUncertainty(rules, instrumentId);
     return { rangeId: null, expandedUncertainty: null };

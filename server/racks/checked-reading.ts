@@ -1,6 +1,6 @@
 import { type Db } from '#db/open-database';
 import { instruments } from '#db/schema/instruments';
-import { rangesOf } from '#server/bench/chosen-range';
+import { rangesOf } from '#server/bench/range-of-reading';
 import { expectedOf } from '#server/bench/expected-of';
 import { type FreshReading } from '#server/bench/insert-reading';
 import { questionOf, readingFacts } from '#server/bench/reading-facts';

@@ -1,11 +1,17 @@
 import { chosenRange, fittingRanges, RangeRefused, type ChoosableRange } from '#shared/uncertainty/range-choice';
 import { describe, expect, it } from 'vitest';
 
-const digital = (id: number, name: string, fullScale: number, current: 'dc' | 'ac' = 'dc'): ChoosableRange => ({
+const digital = (
+  id: number,
+  name: string,
+  fullScale: number,
+  current: 'dc' | 'ac' = 'dc',
+  unit: 'V' | 'K' = 'V',
+): ChoosableRange => ({
   id,
   form: 'digital',
   name,
-  unit: 'V',
+  unit,
   current,
   fullScale,
   resolution: fullScale / 20_000,
@@ -54,7 +60,7 @@ describe('the range of a reading', () => {
   });
 
   it('of a temperature in °C is one in kelvins', () => {
-    const thermometer: ChoosableRange = { ...digital(4, 'Probe', 150), unit: 'K' };
+    const thermometer = digital(4, 'Probe', 150, 'dc', 'K');
     expect(chosenRange([thermometer], null, 45, { unit: '°C', readAs: 'direct' })?.name).toBe('Probe');
   });
 });

@@ -17,13 +17,14 @@ const body = {
   calibrationDue: '2026-09-30',
   status: 'in-service',
 } as const;
-const row = { ...body, id: 1, version: 1, usable: true, daysLeft: 12 };
+const stands = { ranges: [], dailyReference: null, dailyCheck: 'not-asked', openReview: null } as const;
+const row = { ...body, ...stands, ranges: [], id: 1, version: 1, usable: true, daysLeft: 12 };
 
 serve(router, readInstrument, ({ params }) => ({ ...row, id: params.id }));
 serve(router, listInstruments, () => ({ items: [row] }));
-serve(router, addInstrument, ({ body: given }) => Promise.resolve({ ...row, ...given }));
+serve(router, addInstrument, ({ body: given }) => Promise.resolve({ ...row, ...given, ranges: [] }));
 // @ts-expect-error the reply lacks `usable`
-serve(router, readInstrument, () => ({ ...body, id: 1, version: 1, daysLeft: 12 }));
+serve(router, readInstrument, () => ({ ...body, ...stands, ranges: [], id: 1, version: 1, daysLeft: 12 }));
 // @ts-expect-error params.id is a number
 serve(router, readInstrument, ({ params }) => ({ ...row, place: params.id }));
 // @ts-expect-error the body has no such field
