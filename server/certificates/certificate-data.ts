@@ -2,9 +2,8 @@ import { type Db } from '#db/open-database';
 import { type JudgedLot } from '#server/judging/sample-judging';
 import { type Caller } from '#server/caller';
 import { conditionsOf } from '#server/bench/lot-conditions';
-import { characteristicResults } from '#server/judging/characteristic-results';
 import { instrumentsUsed, readingsThatCount, repeatsOf } from '#server/judging/counting';
-import { largestUncertainty } from '#server/judging/largest-uncertainty';
+import { uncertainResults } from '#server/judging/largest-uncertainty';
 import { fixedSampling } from '#server/lots/lot-sampling-queries';
 import { signerOf } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
@@ -32,11 +31,8 @@ const NOTHING_NOTED: LotConditions = {
   note: '',
 };
 
-function resultOf(
-  result: ReturnType<typeof characteristicResults>[number],
-  expandedUncertainty: number | null,
-): CertificateResult {
-  const { characteristic, n, found, min, mean, max, failReasons, acceptance, rejection } = result;
+function resultOf(result: ReturnType<typeof uncertainResults>[number]): CertificateResult {
+  const { characteristic, n, found, min, mean, max, expandedUncertainty, failReasons, acceptance, rejection } = result;
   const { name, condition, class: nonconformityClass, kind } = characteristic;
   const measured = characteristic.kind === 'attribute' ? null : characteristic;
   return {
@@ -59,12 +55,6 @@ function resultOf(
     acceptance,
     rejection,
   };
-}
-
-/** Every characteristic with the largest U of its readings. */
-function resultsOf(db: Db, judged: JudgedLot): CertificateResult[] {
-  const uncertainties = judged.rules.characteristics.map((one) => largestUncertainty(db, judged, one));
-  return characteristicResults(judged).map((result, index) => resultOf(result, uncertainties[index] ?? null));
 }
 
 /** What was noted last of the conditions; null where nothing was noted and the plan asks for no warm-up. */
@@ -131,7 +121,7 @@ export function certificateData(db: Db, number: string, release: Release): Certi
     sampleSize: sampling.sampleSize,
     unitsJudged: lot.unitsJudged,
     groups: groupsOf(judged),
-    results: resultsOf(db, judged),
+    results: uncertainResults(db, judged).map(resultOf),
     decisionRule: judged.rules.revision.decisionRule,
     coverageFactor: judged.rules.revision.coverageFactor,
     conditions: conditionsFor(db, lot.id, judged),

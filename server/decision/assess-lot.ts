@@ -6,7 +6,7 @@ import { readLot } from '#server/lots/lot-queries';
 import { findLot, type LotRow } from '#server/lots/lot-rows';
 import { Conflict } from '#server/problems';
 import { type Assessment } from '#shared/contract/decision';
-import { characteristicResults } from '#server/judging/characteristic-results';
+import { uncertainResults } from '#server/judging/largest-uncertainty';
 import { instrumentsUsed, readingsThatCount, repeatsOf } from '#server/judging/counting';
 import { releaseObjection } from './release-objection';
 
@@ -70,7 +70,9 @@ export function assessLot(db: Db, id: number, caller: Caller): Assessment {
       verdict: word,
       reason,
     })),
-    characteristics: characteristicResults(judged),
+    characteristics: uncertainResults(db, judged),
+    decisionRule: judged.rules.revision.decisionRule,
+    coverageFactor: judged.rules.revision.coverageFactor,
     instruments: instrumentsUsed(db, counting),
     takenBy: [
       ...new Set(

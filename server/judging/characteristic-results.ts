@@ -4,7 +4,8 @@ import { type Assessment } from '#shared/contract/decision';
 import { type Characteristic } from '#shared/contract/plans';
 import { summary } from '#shared/statistics/summary';
 
-type Result = Assessment['characteristics'][number];
+/** What the sample shows of a characteristic, without its uncertainty, which takes the instruments to tell. */
+type Result = Omit<Assessment['characteristics'][number], 'expandedUncertainty'>;
 
 /** How far a value lies outside its limits, or (negative) inside the nearest one. */
 function excess(value: number, lower: number | null, upper: number | null): number {

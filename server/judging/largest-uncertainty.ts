@@ -1,9 +1,11 @@
 import { type Db } from '#db/open-database';
+import { type Assessment } from '#shared/contract/decision';
 import { type ComputedCharacteristic } from '#shared/plan/plan-content';
 import { judgedCharacteristic } from '#shared/plan/judged-characteristic';
 import { combinedStandardUncertainty } from '#shared/uncertainty/combine';
 import { type Component } from '#shared/uncertainty/component';
 import { computedUncertainty } from '#shared/verdict/computed-uncertainty';
+import { characteristicResults } from './characteristic-results';
 import { countingReadings, type LotRules, type ReadingRow } from './lot-judging';
 import { readingComponents } from './reading-components';
 import { type JudgedLot } from './sample-judging';
@@ -50,7 +52,7 @@ function ofComputed(
  * The largest U of the counting readings of a characteristic, in SI base units: what a summary of the sample may state for all
  * of them. Null where that of one reading is not known.
  */
-export function largestUncertainty(
+function largestUncertainty(
   db: Db,
   { rules, units }: JudgedLot,
   { id, content }: LotRules['characteristics'][number],
@@ -62,4 +64,13 @@ export function largestUncertainty(
     return rows.get(id)?.expandedUncertainty;
   });
   return largest(found.filter((value) => value !== undefined));
+}
+
+/** What the sample showed of each characteristic, with the largest U of its readings. */
+export function uncertainResults(db: Db, judged: JudgedLot): Assessment['characteristics'] {
+  const uncertainties = judged.rules.characteristics.map((one) => largestUncertainty(db, judged, one));
+  return characteristicResults(judged).map((result, index) => ({
+    ...result,
+    expandedUncertainty: uncertainties[index] ?? null,
+  }));
 }

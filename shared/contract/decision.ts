@@ -2,7 +2,7 @@ import * as z from 'zod';
 import { byId, done, endpoint } from './endpoint';
 import { moment, prose, reason } from './fields';
 import { lot, samplingGroup } from './lots';
-import { characteristic } from './plans';
+import { characteristic, decisionRule } from './plans';
 import { LOT_READERS, type Role } from './roles';
 
 const READERS = LOT_READERS.filter((one) => one !== 'receiving') as readonly Role[];
@@ -20,6 +20,8 @@ export const characteristicResult = z.object({
   s: z.number().nullable(),
   /** Worst reading, the farthest outside or the nearest to a limit. */
   worst: z.number().nullable(),
+  /** The largest U of the counting readings; null where that of one is not known. */
+  expandedUncertainty: z.number().nullable(),
   failedUnits: z.array(z.int()),
   failReasons: z.array(z.string()),
   /** Every counting reading in draw order, null where missing. */
@@ -42,6 +44,9 @@ export const assessment = z.object({
     z.object({ group: samplingGroup, found: z.int(), undecided: z.int(), verdict: z.string(), reason: z.string() }),
   ),
   characteristics: z.array(characteristicResult),
+  /** How the plan lets measurement uncertainty enter, and its k. */
+  decisionRule,
+  coverageFactor: z.number(),
   instruments: z.array(
     z.object({
       assetNumber: z.string(),

@@ -117,6 +117,8 @@ export function assessmentOf(
       reason: '',
     })),
     characteristics: [],
+    decisionRule: 'simple',
+    coverageFactor: 2,
     instruments: [],
     takenBy: ['I. Sandvær'],
     repeats: 0,

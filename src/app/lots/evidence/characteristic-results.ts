@@ -6,6 +6,7 @@ import { LimitsPipe } from '../../ui/values/limits-pipe';
 import { ReadingPipe } from '../../ui/values/reading-pipe';
 import { readingDigits } from '../../ui/values/reading-text';
 import { displayUnit } from '#shared/quantities/format-quantity';
+import { uncertaintyDigits } from '#shared/quantities/format-uncertainty';
 import { characteristicRow, type CharacteristicRow } from './characteristic-row';
 import { ReadingTable } from './reading-table';
 import { unitNumbers } from './unit-look';
@@ -31,6 +32,11 @@ export class CharacteristicResults {
   /** A figure without its unit, which stands under the characteristic's name; a mean has one decimal more. */
   protected digits(value: number | null, { unit, decimals }: { unit: string; decimals: number }, more = 0): string {
     return value === null ? '' : readingDigits(value, unit, decimals + more);
+  }
+
+  /** The largest U of a row's readings, as its figures stand; empty where it is not known. */
+  protected uncertainty({ uncertainty }: CharacteristicRow, unit: string): string {
+    return uncertainty === null ? '' : `±\u00a0${uncertaintyDigits(uncertainty, unit)}`;
   }
 
   protected unitLine({ scale, condition }: CharacteristicRow): string {

@@ -20,6 +20,8 @@ export interface CharacteristicRow {
   readonly max: number | null;
   readonly s: number | null;
   readonly worst: number | null;
+  /** The largest U of its readings; null where that of one is not known. */
+  readonly uncertainty: number | null;
   readonly failedUnits: readonly number[];
   readonly failReasons: readonly string[];
   readonly readings: Result['readings'];
@@ -45,6 +47,7 @@ export function characteristicRow(result: Result): CharacteristicRow {
         },
     requirement: attribute ? characteristic.requirement : '',
     rug: readings.flatMap(({ value, unit }) => (value === null ? [] : [{ value, nonconforming: failed.has(unit) }])),
+    uncertainty: result.expandedUncertainty,
     ...{ n, min, mean, max, s, worst, failedUnits, failReasons, readings },
   };
 }

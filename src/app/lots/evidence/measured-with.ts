@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { type Assessment } from '#shared/contract/decision';
+import { DECISION_RULE_TITLES } from '#shared/contract/plans';
 import { CountPipe } from '../../ui/values/count-pipe';
 import { MomentPipe } from '../../ui/values/moment-pipe';
 
@@ -32,5 +33,6 @@ import { MomentPipe } from '../../ui/values/moment-pipe';
 export class MeasuredWith {
   readonly assessment = input.required<Assessment>();
 
+  protected readonly rule = computed(() => DECISION_RULE_TITLES[this.assessment().decisionRule]);
   protected readonly takers = computed(() => this.assessment().takenBy.join(', '));
 }
