@@ -29,6 +29,7 @@ export async function openPage<Page>(
   inputs: Readonly<Record<string, unknown>> = {},
 ): Promise<OpenPage<Page>> {
   TestBed.configureTestingModule({
+    imports: [page],
     providers: [
       provideRouter([]),
       provideHttpClient(withInterceptors([problemInterceptor])),
@@ -36,6 +37,8 @@ export async function openPage<Page>(
       materialDefaults,
     ],
   });
+  // What a page defers is known only once it is compiled.
+  await TestBed.compileComponents();
   const http = TestBed.inject(HttpTestingController);
   TestBed.inject(Session).restore().subscribe();
   http

@@ -1,3 +1,4 @@
+import { vi } from 'vitest';
 import { openPage } from '../../../testing/open-page';
 import { PartPage } from './part-page';
 
@@ -22,6 +23,7 @@ const ADAPTER = {
   form: 'wall-adapter',
   model: MODEL,
   active: true,
+  expected: null,
   plan: null,
 };
 
@@ -66,5 +68,22 @@ describe('PartPage', () => {
     await page.press('Save part');
     const { body } = page.http.expectOne('/api/parts/1').request;
     expect(body).toMatchObject({ model: { secondaryPeakVolts: null, sourceOhms: null, diodeDropVolts: null } });
+  });
+
+  it('says what it ought to give, beside the textbook', async () => {
+    const page = await openPart('inspector');
+    await vi.waitFor(async () => {
+      await page.fixture.whenStable();
+      expect(page.text()).toContain('Ripple, peak to peak');
+    });
+    expect(page.text()).toContain('Too high: the formula charges in an instant');
+  });
+
+  it('says why it says nothing of a switch-mode supply', async () => {
+    const page = await openPart('inspector', { ...MODEL, topology: 'switch-mode', filterFarads: null });
+    await vi.waitFor(async () => {
+      await page.fixture.whenStable();
+      expect(page.text()).toContain('does not follow from its mains side');
+    });
   });
 });

@@ -12,14 +12,28 @@ import { type HoldsTyping } from '../../shell/leave-guard';
 import { ElectricalFacts } from '../../ui/electrical-facts';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
+import { LoadingRows } from '../../ui/states/loading-rows';
 import { ReadOnlyNote } from '../../ui/states/read-only-note';
+import { ExpectedOutputSheet } from '../expected-output/expected-output-sheet';
 import { PartForm } from '../part-form/part-form';
 
-/** One part: a form for quality, the values as text for everybody else, and the way to its plan. */
+/** One part: a form for quality, the values as text for everybody else, what it ought to give, and the way to its plan. */
 @Component({
   selector: 'qr-part-page',
-  imports: [BackLink, ElectricalFacts, Loaded, MatButton, PageState, PartForm, ReadOnlyNote, RouterLink],
+  imports: [
+    BackLink,
+    ElectricalFacts,
+    ExpectedOutputSheet,
+    Loaded,
+    LoadingRows,
+    MatButton,
+    PageState,
+    PartForm,
+    ReadOnlyNote,
+    RouterLink,
+  ],
   templateUrl: './part-page.html',
+  styleUrl: './part-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PartPage implements HoldsTyping {
