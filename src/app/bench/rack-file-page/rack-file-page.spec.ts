@@ -12,7 +12,7 @@ import { problemInterceptor } from '../../data/problem-interceptor';
 import { Session } from '../../session/session';
 import { materialDefaults } from '../../ui/material-defaults';
 import { benchReply } from '../testing/bench-reply';
-import { FileDrop } from './file-drop';
+import { FileDrop } from '../../ui/file-drop';
 import { RackFilePage } from './rack-file-page';
 
 const PREVIEW = '/api/lots/12/rack-file/preview';
@@ -67,7 +67,10 @@ describe('the rack file page', () => {
 
   async function pick(): Promise<void> {
     const drop = fixture.debugElement.query(By.directive(FileDrop)).componentInstance as FileDrop;
-    drop.picked.emit({ name: 'rack.csv', text: 'unit,no_load\n1,17.2' });
+    const text = 'unit,no_load\n1,17.2';
+    // The files of the test's browser do not know how to give their text.
+    const file = Object.assign(new File([text], 'rack.csv'), { text: () => Promise.resolve(text) });
+    drop.picked.emit(file);
     await fixture.whenStable();
   }
 

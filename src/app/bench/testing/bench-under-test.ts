@@ -1,9 +1,9 @@
-import { provideHttpClient, withInterceptors } from '@angular/common/http';
+import { type HttpInterceptorFn, HttpResponse, provideHttpClient, withInterceptors } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting, type TestRequest } from '@angular/common/http/testing';
 import { inputBinding, signal } from '@angular/core';
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
-import { Subject } from 'rxjs';
+import { of, Subject } from 'rxjs';
 import { type Bench, type Kept, type Reading, type ReadingBody } from '#shared/contract/bench';
 import { type Role } from '#shared/contract/roles';
 import { LiveCounts } from '../../data/live-counts';
@@ -14,6 +14,10 @@ import { BenchPage } from '../bench-page/bench-page';
 import { benchReply, readingOf } from './bench-reply';
 
 const LOT = '/api/lots/12';
+
+/** No waveform was captured of the lot; what the bench asks of them is answered at once. */
+const noWaveforms: HttpInterceptorFn = (request, next) =>
+  request.url === `${LOT}/waveforms` ? of(new HttpResponse({ body: { items: [] } })) : next(request);
 
 /** The bench page of lot 12 with its real children, and the hands of a person at its keys. */
 export class BenchUnderTest {
@@ -29,7 +33,7 @@ export class BenchUnderTest {
     const mayCall = ({ who }: { who: Role[] }) => who.includes(role);
     TestBed.configureTestingModule({
       providers: [
-        provideHttpClient(withInterceptors([problemInterceptor])),
+        provideHttpClient(withInterceptors([problemInterceptor, noWaveforms])),
         provideHttpClientTesting(),
         provideRouter([]),
         materialDefaults,

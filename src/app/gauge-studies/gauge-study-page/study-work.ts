@@ -42,6 +42,11 @@ export class StudyWork {
   save(saved: (study: GaugeStudy) => void): void {
     const draft = this.draft();
     if (draft === null || this.saving.busy()) return;
+    // A cell that nobody can read would be saved as an empty one.
+    if (draft.faults().length > 0) {
+      this.saving.said.set(['Mend what is marked first.']);
+      return;
+    }
     const { id, version, number } = draft.study;
     this.saving.run(
       this.api.call(changeGaugeStudy, { params: { id }, body: bodyOf(draft), version }),

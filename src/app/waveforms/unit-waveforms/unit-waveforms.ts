@@ -68,11 +68,11 @@ export class UnitWaveforms {
   readonly taken = output<WaveformReading>();
 
   protected readonly mayWrite = may(keepWaveform);
-  protected readonly list = lotWaveforms(() => this.lotId());
   protected readonly isReadOff = computed(() => {
     const characteristic = this.characteristic();
     return characteristic.kind === 'measured' && READ_OFF.includes(characteristic.measurand);
   });
+  protected readonly list = lotWaveforms(() => (this.isReadOff() ? this.lotId() : undefined));
   protected readonly lines = computed(() => {
     const items = this.list.hasValue() ? this.list.value().items : [];
     return items
