@@ -1,5 +1,6 @@
 import { type Routes } from '@angular/router';
-import { addInstrument } from '#shared/contract/instruments';
+import { recordCalibration } from '#shared/contract/calibrations';
+import { addInstrument, changeInstrument } from '#shared/contract/instruments';
 import { areaFor } from '../session/role-guard';
 import { leaveGuard } from '../shell/leave-guard';
 
@@ -18,7 +19,20 @@ export default [
   {
     path: ':id',
     title: 'Instrument',
-    canDeactivate: [leaveGuard],
     loadComponent: () => import('./instrument-page/instrument-page').then((file) => file.InstrumentPage),
   },
+  ...areaFor(changeInstrument.who, {
+    path: ':id/facts',
+    title: 'Instrument',
+    canDeactivate: [leaveGuard],
+    loadComponent: () =>
+      import('./instrument-facts-page/instrument-facts-page').then((file) => file.InstrumentFactsPage),
+  }),
+  ...areaFor(recordCalibration.who, {
+    path: ':id/calibrations/new',
+    title: 'Record a calibration',
+    canDeactivate: [leaveGuard],
+    loadComponent: () =>
+      import('./record-calibration-page/record-calibration-page').then((file) => file.RecordCalibrationPage),
+  }),
 ] satisfies Routes;

@@ -1,4 +1,5 @@
 import { listAudit } from '#shared/contract/audit';
+import { listReviews } from '#shared/contract/calibrations';
 import { listCertificates } from '#shared/contract/certificates';
 import { type readRecordCounts } from '#shared/contract/counts';
 import { type Who } from '#shared/contract/endpoint';
@@ -31,6 +32,7 @@ export const RECORDS: readonly (readonly RecordArea[])[] = [
     { path: 'parts', title: 'Parts', who: listParts.who, count: 'parts' },
     { path: 'suppliers', title: 'Suppliers', who: listSuppliers.who, count: 'suppliers' },
     { path: 'instruments', title: 'Instruments', who: listInstruments.who, count: 'instruments' },
+    { path: 'reviews', title: 'Reviews', who: listReviews.who },
     { path: 'gauge-studies', title: 'Gauge studies', who: listGaugeStudies.who },
     { path: 'racks', title: 'Racks', who: listRacks.who, count: 'racks' },
   ],

@@ -2,6 +2,7 @@ import { inject } from '@angular/core';
 import { type Routes } from '@angular/router';
 import { listAudit } from '#shared/contract/audit';
 import { readBench } from '#shared/contract/bench';
+import { listReviews } from '#shared/contract/calibrations';
 import { listCertificates } from '#shared/contract/certificates';
 import { readAssessment } from '#shared/contract/decision';
 import { listGaugeStudies } from '#shared/contract/gauge-studies';
@@ -57,6 +58,11 @@ export default [
         path: 'instruments',
         title: 'Instruments',
         loadChildren: () => import('../instruments/instruments.routes'),
+      }),
+      ...areaFor(listReviews.who, {
+        path: 'reviews',
+        title: 'Reviews',
+        loadChildren: () => import('../reviews/reviews.routes'),
       }),
       ...areaFor(listGaugeStudies.who, {
         path: 'gauge-studies',

@@ -4,7 +4,7 @@ import {
   INSTRUMENT_KIND_TITLES,
   type InstrumentKind,
   type InstrumentRange,
-  RANGE_UNITS,
+  type RANGE_UNITS,
 } from '#shared/contract/instruments';
 import { formatQuantity } from '#shared/quantities/format-quantity';
 import { type FieldsOf } from '../../data/record-form';

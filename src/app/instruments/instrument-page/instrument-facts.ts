@@ -1,6 +1,6 @@
-import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { type Instrument, INSTRUMENT_KIND_TITLES } from '#shared/contract/instruments';
-import { STATUS_TITLES } from '../instrument-form/instrument-fields';
+import { referenceWords, STATUS_TITLES } from '../instrument-form/instrument-fields';
 
 /** An instrument's values as text. */
 @Component({
@@ -21,6 +21,8 @@ import { STATUS_TITLES } from '../instrument-form/instrument-fields';
       <dd class="mono">{{ instrument().calibrationDue }}</dd>
       <dt>Status</dt>
       <dd>{{ statuses[instrument().status] }}</dd>
+      <dt>Daily check</dt>
+      <dd>{{ reference() }}</dd>
     </dl>
   `,
   styles: `
@@ -35,4 +37,5 @@ export class InstrumentFacts {
 
   protected readonly kinds = INSTRUMENT_KIND_TITLES;
   protected readonly statuses = STATUS_TITLES;
+  protected readonly reference = computed(() => referenceWords(this.instrument().dailyReference));
 }

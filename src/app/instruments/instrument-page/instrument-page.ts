@@ -1,5 +1,7 @@
-import { ChangeDetectionStrategy, Component, effect, inject, input, numberAttribute, viewChild } from '@angular/core';
-import { MatSnackBar } from '@angular/material/snack-bar';
+import { ChangeDetectionStrategy, Component, effect, inject, input, numberAttribute } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { RouterLink } from '@angular/router';
+import { readInstrumentHistory, recordCalibration } from '#shared/contract/calibrations';
 import {
   changeInstrument,
   type Instrument,
@@ -10,30 +12,48 @@ import { endpointResource } from '../../data/api';
 import { PageTitle } from '../../page-title';
 import { may } from '../../session/may';
 import { BackLink } from '../../shell/back-link';
-import { type HoldsTyping } from '../../shell/leave-guard';
-import { InstrumentDue } from '../../ui/marks/instrument-due';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
+import { MessageNote } from '../../ui/states/message-note';
 import { ReadOnlyNote } from '../../ui/states/read-only-note';
-import { InstrumentForm } from '../instrument-form/instrument-form';
+import { MomentPipe } from '../../ui/values/moment-pipe';
+import { InstrumentState, obstacleOf } from '../instrument-state';
+import { CalibrationsSheet } from './calibrations-sheet';
+import { ChecksSheet } from './checks-sheet';
 import { InstrumentFacts } from './instrument-facts';
+import { RangesSheet } from './ranges-sheet';
 
-/** One instrument: a form for quality, the values as text for everybody else. */
+/** One instrument: what it reads and how well, its calibrations and checks, and the reviews that rest on them. */
 @Component({
   selector: 'qr-instrument-page',
-  imports: [BackLink, InstrumentDue, InstrumentFacts, InstrumentForm, Loaded, PageState, ReadOnlyNote],
+  imports: [
+    BackLink,
+    CalibrationsSheet,
+    ChecksSheet,
+    InstrumentFacts,
+    InstrumentState,
+    Loaded,
+    MatButton,
+    MessageNote,
+    MomentPipe,
+    PageState,
+    RangesSheet,
+    ReadOnlyNote,
+    RouterLink,
+  ],
   templateUrl: './instrument-page.html',
+  styleUrl: './instrument-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class InstrumentPage implements HoldsTyping {
+export class InstrumentPage {
   private readonly title = inject(PageTitle);
-  private readonly snackBar = inject(MatSnackBar);
-  private readonly form = viewChild(InstrumentForm);
 
   readonly id = input.required({ transform: numberAttribute });
 
   protected readonly instrument = endpointResource(readInstrument, () => ({ params: { id: this.id() } }));
+  protected readonly history = endpointResource(readInstrumentHistory, () => ({ params: { id: this.id() } }));
   protected readonly mayChange = may(changeInstrument);
+  protected readonly mayCalibrate = may(recordCalibration);
   protected readonly kinds = INSTRUMENT_KIND_TITLES;
 
   constructor() {
@@ -42,12 +62,15 @@ export class InstrumentPage implements HoldsTyping {
     });
   }
 
-  hasUnsaved(): boolean {
-    return this.form()?.hasUnsaved() ?? false;
+  /** Whether a reading may name it today, in words. */
+  protected standing(instrument: Instrument): string {
+    if (instrument.usable) return 'Can be chosen for a reading';
+    const obstacle = obstacleOf(instrument)?.words ?? 'past its calibration date';
+    return `Cannot be chosen for a reading: ${obstacle}`;
   }
 
-  protected show(instrument: Instrument): void {
-    this.instrument.set(instrument);
-    this.snackBar.open(`Instrument ${instrument.assetNumber} saved`);
+  protected reload(): void {
+    this.history.reload();
+    this.instrument.reload();
   }
 }
