@@ -5,21 +5,34 @@ import { planCharacteristics } from '#db/schema/plans';
 import { readings } from '#db/schema/readings';
 import { wholeCharacteristic } from '#server/plans/whole-characteristic';
 import { type CalibrationPoint, type DoubtfulReading } from '#shared/contract/calibrations';
+import { type Characteristic } from '#shared/contract/plans';
 import { and, asc, eq } from 'drizzle-orm';
 import { type Doubt, inDoubt } from './doubt';
 import { couldTurn, foundError } from './found-error';
 
-/** Every reading of a lot that is in doubt, in the order of its units; with whether the error found could have turned it. */
+/** A reading in doubt with the lot it is of. */
+export interface LotReading {
+  lotId: number;
+  reading: DoubtfulReading;
+}
+
+/**
+ * Every reading in doubt, lot by lot in the order of their units; with whether the error found could have turned it.
+ *
+ * @param lotId of the lot to be looked at; all where undefined
+ */
 export function doubtfulReadings(
   db: Db,
   doubt: Doubt,
   points: readonly CalibrationPoint[],
-  lotId: number,
-): DoubtfulReading[] {
+  lotId?: number,
+): LotReading[] {
   const rows = db
     .select({
       id: readings.id,
+      lotId: readings.lotId,
       unit: sampleUnits.unit,
+      characteristicId: planCharacteristics.id,
       content: planCharacteristics.content,
       value: readings.value,
       pass: readings.pass,
@@ -30,29 +43,26 @@ export function doubtfulReadings(
     .innerJoin(sampleUnits, eq(sampleUnits.id, readings.unitId))
     .innerJoin(planCharacteristics, eq(planCharacteristics.id, readings.characteristicId))
     .leftJoin(people, eq(people.id, readings.takenById))
-    .where(and(eq(readings.lotId, lotId), inDoubt(doubt)))
-    .orderBy(asc(sampleUnits.unit), asc(planCharacteristics.position), asc(readings.attempt))
+    .where(and(lotId === undefined ? undefined : eq(readings.lotId, lotId), inDoubt(doubt)))
+    .orderBy(asc(readings.lotId), asc(sampleUnits.unit), asc(planCharacteristics.position), asc(readings.attempt))
     .all();
-  return rows.map(({ content, ...row }) => {
-    const whole = wholeCharacteristic(content);
-    const { key, name } = whole;
-    if (whole.kind === 'attribute')
-      return {
-        ...row,
-        characteristic: { key, name, unit: '', decimals: 0 },
-        lowerLimit: null,
-        upperLimit: null,
-        nearLimit: null,
-      };
-    const { unit, decimals, lowerLimit, upperLimit } = whole;
-    const share = foundError(points, unit);
-    const isKnown = share !== null && row.value !== null;
-    return {
-      ...row,
-      characteristic: { key, name, unit, decimals },
-      lowerLimit,
-      upperLimit,
-      nearLimit: isKnown ? couldTurn(row.value ?? 0, [lowerLimit, upperLimit], share) : null,
-    };
+  const known = new Map<number, Characteristic>();
+  return rows.map(({ lotId: of, characteristicId, content, ...row }) => {
+    const whole = known.get(characteristicId) ?? wholeCharacteristic(content);
+    known.set(characteristicId, whole);
+    return { lotId: of, reading: { ...row, ...judged(whole, row.value, points) } };
   });
+}
+
+/** The limits of a reading, and whether the error found could have carried it over one of them. */
+function judged(whole: Characteristic, value: number | null, points: readonly CalibrationPoint[]) {
+  const { key, name } = whole;
+  if (whole.kind === 'attribute') {
+    const none = { lowerLimit: null, upperLimit: null, nearLimit: null };
+    return { characteristic: { key, name, unit: '', decimals: 0 }, ...none };
+  }
+  const { unit, decimals, lowerLimit, upperLimit } = whole;
+  const share = foundError(points, unit);
+  const nearLimit = share === null || value === null ? null : couldTurn(value, [lowerLimit, upperLimit], share);
+  return { characteristic: { key, name, unit, decimals }, lowerLimit, upperLimit, nearLimit };
 }

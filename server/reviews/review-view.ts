@@ -2,15 +2,14 @@ import { type Db } from '#db/open-database';
 import { calibrations, instrumentReviews, reviewLots } from '#db/schema/calibrations';
 import { instruments } from '#db/schema/instruments';
 import { people } from '#db/schema/people';
-import { readings } from '#db/schema/readings';
 import { findCalibration } from '#server/calibrations/calibration-view';
 import { certificatesOfLot } from '#server/certificates/certificate-queries';
 import { findLot } from '#server/lots/lot-rows';
 import { NotFound } from '#server/problems';
 import { type DoubtfulReading, type Review } from '#shared/contract/calibrations';
 import { and, asc, desc, eq, isNotNull, sql } from 'drizzle-orm';
-import { type Doubt, inDoubt } from './doubt';
-import { doubtfulReadings } from './doubtful-readings';
+import { type Doubt } from './doubt';
+import { doubtfulReadings, type LotReading } from './doubtful-readings';
 
 type ReviewHead = Omit<Review, 'calibration' | 'closedBy' | 'conclusion' | 'affected' | 'version'>;
 
@@ -81,12 +80,22 @@ function countNear(items: readonly DoubtfulReading[]): number | null {
   return measured.filter(({ nearLimit }) => nearLimit === true).length;
 }
 
+function readingsByLot(items: readonly LotReading[]): Map<number, DoubtfulReading[]> {
+  const byLot = new Map<number, DoubtfulReading[]>();
+  for (const { lotId, reading } of items) {
+    const known = byLot.get(lotId);
+    if (known) known.push(reading);
+    else byLot.set(lotId, [reading]);
+  }
+  return byLot;
+}
+
 /** A review with every lot and certificate that rests on the instrument. @throws {NotFound} */
 export function findReview(db: Db, id: number): Review {
   const row = found(db, id);
   const { review, instrument, closedBy } = row;
-  const doubt = doubtOf(row);
   const calibration = findCalibration(db, instrument.id, review.calibrationId);
+  const readings = readingsByLot(doubtfulReadings(db, doubtOf(row), calibration.points));
   const affected = db
     .select({ row: reviewLots, assessedBy: people.name })
     .from(reviewLots)
@@ -96,21 +105,14 @@ export function findReview(db: Db, id: number): Review {
     .all()
     .map(({ row: { lotId, readings: count, effect, note }, assessedBy }) => {
       const { lot, part, supplier } = findLot(db, lotId);
-      const span = db
-        .select({
-          first: sql<string | null>`min(${readings.takenAt})`,
-          last: sql<string | null>`max(${readings.takenAt})`,
-        })
-        .from(readings)
-        .where(and(eq(readings.lotId, lotId), inDoubt(doubt)))
-        .get();
-      const near = countNear(doubtfulReadings(db, doubt, calibration.points, lotId));
+      const items = readings.get(lotId) ?? [];
+      const times = items.map(({ takenAt }) => takenAt).sort();
       return {
         lot: { id: lot.id, number: lot.number, status: lot.status, part: part.number, supplier: supplier.name },
         readings: count,
-        firstAt: span?.first ?? lot.arrivedAt,
-        lastAt: span?.last ?? lot.arrivedAt,
-        nearLimit: near,
+        firstAt: times[0] ?? lot.arrivedAt,
+        lastAt: times.at(-1) ?? lot.arrivedAt,
+        nearLimit: countNear(items),
         certificates: certificatesOfLot(db, lotId),
         ...{ effect, note, assessedBy },
       };
@@ -131,5 +133,5 @@ export function readingsInDoubt(db: Db, id: number, lotId: number): DoubtfulRead
   const of = and(eq(reviewLots.reviewId, id), eq(reviewLots.lotId, lotId));
   if (!db.select().from(reviewLots).where(of).get()) throw new NotFound('This lot of the review');
   const { points } = findCalibration(db, row.instrument.id, row.review.calibrationId);
-  return doubtfulReadings(db, doubtOf(row), points, lotId);
+  return doubtfulReadings(db, doubtOf(row), points, lotId).map(({ reading }) => reading);
 }
