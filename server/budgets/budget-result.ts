@@ -23,12 +23,16 @@ function lineOf({
   return { ...line, divisor: divisor.text, degreesOfFreedom: finite(degreesOfFreedom) };
 }
 
-/** What a budget combines to and how the plan's rule judges by it. SI base units. */
+/**
+ * What a budget combines to and how the plan's rule judges by it. SI base units.
+ *
+ * @param nominal what the part's model gives, for a characteristic without a target; null where it says nothing of it
+ */
 export function budgetResult(
   value: number,
   components: readonly WeightedComponent[],
   { lowerLimit: lower, upperLimit: upper, target }: LimitedCharacteristic,
-  { decisionRule: rule, coverageFactor }: RevisionRules,
+  { revision: { decisionRule: rule, coverageFactor }, nominal }: { revision: RevisionRules; nominal: number | null },
 ): Result {
   const { lines, combined } = budgetLines(components);
   const limits = { lower, upper };
@@ -42,7 +46,8 @@ export function budgetResult(
     coverage: coverageSentence(combined, coverageFactor),
     guardBand: guardBand(rule, expandedUncertainty),
     accepted: acceptanceLimits(limits, guardBand(rule, expandedUncertainty)),
-    fineness: expandedUncertainty > 0 ? measurementFineness(limits, expandedUncertainty, target) : { kind: 'none' },
+    fineness:
+      expandedUncertainty > 0 ? measurementFineness(limits, expandedUncertainty, target ?? nominal) : { kind: 'none' },
     conformityProbability: hasLimit ? conformityProbability(value, combined.standardUncertainty, limits) : null,
     ...judgeReading(value, limits, { rule, expandedUncertainty }),
   };

@@ -1,10 +1,12 @@
 import { type Db } from '#db/open-database';
+import { expectedOf } from '#server/bench/expected-of';
 import { namesOf } from '#server/bench/bench-names';
 import { countingReadings, rulesOf, unitOf, type LotRules, type UnitRows } from '#server/judging/lot-judging';
 import { readingComponents } from '#server/judging/reading-components';
 import { findLot } from '#server/lots/lot-rows';
 import { Conflict, NotFound } from '#server/problems';
 import { type Budget } from '#shared/contract/budgets';
+import { expectedNominal } from '#shared/plan/expected-band';
 import { judgedCharacteristic } from '#shared/plan/judged-characteristic';
 import { type ComputedCharacteristic, type LimitedCharacteristic } from '#shared/plan/plan-content';
 import { type Component, unweighted, type WeightedComponent } from '#shared/uncertainty/component';
@@ -119,7 +121,10 @@ export function readBudget(db: Db, asked: AskedBudget): Budget {
     result:
       value === null || components === undefined
         ? null
-        : budgetResult(value, components, characteristic, rules.revision),
+        : budgetResult(value, components, characteristic, {
+            revision: rules.revision,
+            nominal: expectedNominal(characteristic, expectedOf(db, lot.partId)),
+          }),
     unknown,
   };
 }

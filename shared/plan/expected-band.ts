@@ -9,6 +9,18 @@ const BANDS: Partial<Record<string, BandName>> = {
   'no-load-voltage': 'noLoad',
 };
 
+const NOMINALS: Readonly<Record<BandName, keyof ExpectedBands['nominal']>> = {
+  ripple: 'rippleVolts',
+  loaded: 'loadedVolts',
+  noLoad: 'noLoadVolts',
+};
+
+/** What the part's rectifier model gives for a characteristic at nominal values, in volts; null where it says nothing of it. */
+export function expectedNominal(characteristic: Characteristic, expected: ExpectedBands | null): number | null {
+  const name = characteristic.kind === 'measured' ? BANDS[characteristic.measurand] : undefined;
+  return name === undefined || expected === null ? null : expected.nominal[NOMINALS[name]];
+}
+
 /**
  * The band that the part's rectifier model gives for a characteristic, in volts; null where there is no model or it says
  * nothing of what is measured.

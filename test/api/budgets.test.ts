@@ -1,4 +1,5 @@
 import { calibrations } from '#db/schema/calibrations';
+import { parts } from '#db/schema/parts';
 import { type Budget } from '#shared/contract/budgets';
 import { type Lot } from '#shared/contract/lots';
 import { randomUUID } from 'node:crypto';
@@ -164,6 +165,27 @@ describe('the budget of a reading', () => {
     const { result, unknown } = await budgetOf('loaded');
     expect(result).toBeNull();
     expect(unknown).toMatch(/no range with an accuracy/);
+  });
+});
+
+describe('how fine a measurement is for one limit', () => {
+  it('is told by the target, or else by what the part’s model gives', async () => {
+    const unloaded = { instrumentKind: 'multimeter', measurand: 'no-load-voltage' } as const;
+    const references = addPlannedPart(
+      site.db,
+      site.people.quality.id,
+      planOf(measured('no_load', 'major', { upper: 18 }, unloaded)),
+    );
+    const band = { low: 14, high: 18 };
+    const nominal = { rippleVolts: 1, loadedVolts: 12, noLoadVolts: 16 };
+    site.db
+      .update(parts)
+      .set({ expected: { ripple: band, loaded: band, noLoad: band, nominal } })
+      .run();
+    lot = await drawnLot(site, references, 100);
+    await keep('no_load', '16.20');
+    const { result } = await budgetOf('no_load');
+    expect(result?.fineness).toMatchObject({ kind: 'distance', distance: 2 });
   });
 });
 

@@ -33,7 +33,10 @@ const QUALITY_RECORDS = [
 const PEOPLE: Record<string, { sees: readonly string[]; closed: readonly string[] }> = {
   receiving: {
     sees: [...LOT_PAGES, '/arrivals/new', '/arrivals/{arrived}/correct', ...RECORD_PAGES, '/suppliers/new', '/plans'],
-    closed: ['/bench', '/decision', '/trends', '/people', '/mail', '/site', '/parts/new'],
+    closed: [
+      ...['/bench', '/decision', '/trends', '/people', '/mail', '/site', '/parts/new'],
+      '/lots/{released}/units/1/budgets/v_loaded',
+    ],
   },
   inspector: {
     sees: [
@@ -45,6 +48,7 @@ const PEOPLE: Record<string, { sees: readonly string[]; closed: readonly string[
       '/bench/{measuring}/rack-file',
       '/waveforms/{waveform}',
       '/lots/{measuring}',
+      '/lots/{measuring}/units/1/budgets/ripple_pp',
       '/trends',
       '/plans/1',
     ],
@@ -89,7 +93,18 @@ const PEOPLE: Record<string, { sees: readonly string[]; closed: readonly string[
     closed: ['/people', '/bench/{measuring}/rack-file', '/plans/new', '/mail'],
   },
   auditor: {
-    sees: ['/audit', '/people', '/people/1', '/mail', '/mail/1', '/mail/received/1', '/decision', '/site', '/racks/1'],
+    sees: [
+      '/audit',
+      '/people',
+      '/people/1',
+      '/mail',
+      '/mail/1',
+      '/mail/received/1',
+      '/decision',
+      '/site',
+      '/racks/1',
+      '/lots/{submitted}/units/1/budgets/regulation',
+    ],
     closed: ['/people/new', '/instruments/new', '/racks/new'],
   },
   admin: {

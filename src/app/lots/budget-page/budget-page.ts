@@ -75,7 +75,7 @@ export class BudgetPage {
       { name: 'Accepted', value: limitsText(result.accepted, characteristic, result.guardBand) },
       { name: 'Verdict', value: verdictSentence(result, budget.decisionRule, hasLimits) },
       { name: 'Probability of conformity', value: probability === null ? 'no limit' : probabilityText(probability) },
-      { name: 'Test uncertainty ratio', value: finenessText(result.fineness, unit) },
+      { name: 'Test uncertainty ratio', value: finenessText(result.fineness, characteristic) },
       { name: 'Coverage', value: result.coverage },
     ];
   });

@@ -71,7 +71,7 @@ export function verdictSentence({ verdict, side }: Result, rule: Budget['decisio
 }
 
 /** How fine the measurement is for its limits, with what that means. */
-export function finenessText(fineness: Result['fineness'], unit: string): string {
+export function finenessText(fineness: Result['fineness'], { unit, target }: Limited): string {
   switch (fineness.kind) {
     case 'ratio': {
       const ratio = formatNumber(fineness.ratio, fineness.ratio < 10 ? 1 : 0);
@@ -79,10 +79,10 @@ export function finenessText(fineness: Result['fineness'], unit: string): string
     }
     case 'distance': {
       const share = formatNumber(inDisplayUnit(fineness.share, '%'), 0);
-      return `not defined for one limit; U is ${share}\u00a0% of the ${smallQuantity(fineness.distance, unit)} from target to limit`;
+      return `not defined for one limit; U is ${share}\u00a0% of the ${smallQuantity(fineness.distance, unit)} from ${target === null ? 'the model’s value' : 'target'} to limit`;
     }
     case 'none':
-      return 'not defined without a second limit or a target';
+      return 'not defined without a second limit or a typical value';
   }
 }
 

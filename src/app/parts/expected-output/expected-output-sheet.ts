@@ -62,7 +62,10 @@ import { RippleChart } from './ripple-chart';
       white-space: nowrap;
     }
     tbody th {
-      font-weight: 400;
+      height: 26px;
+      border-bottom-color: var(--qr-line);
+      color: var(--qr-ink);
+      font: var(--qr-t-small);
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -1,4 +1,4 @@
-import { type Characteristic, DECISION_RULE_TITLES, type RevisionBody } from '#shared/contract/plans';
+import { type Characteristic, type DecisionRule, type RevisionBody } from '#shared/contract/plans';
 import { formatLimits, inDisplayUnit } from '#shared/quantities/format-quantity';
 import { type SamplingGroup } from '#shared/sampling/lot-sampling';
 
@@ -10,6 +10,13 @@ export interface CharacteristicLine {
   readonly sampleSize: number | null;
   readonly rule: string;
 }
+
+/** The decision rules as short as a column of the table; they are explained beside it. */
+const RULE_WORDS: Readonly<Record<DecisionRule, string>> = {
+  simple: 'Simple',
+  guarded: 'Guarded',
+  'non-binary': 'Both sides',
+};
 
 /** The line of a characteristic in the table of its plan. */
 export function characteristicLine(
@@ -26,7 +33,7 @@ export function characteristicLine(
     unit: characteristic.kind === 'attribute' ? '' : characteristic.unit,
     aql: aql ?? 'none',
     sampleSize: group?.sampleSize ?? null,
-    rule: characteristic.kind === 'attribute' ? 'Pass or fail' : DECISION_RULE_TITLES[plan.decisionRule],
+    rule: characteristic.kind === 'attribute' ? 'Pass or fail' : RULE_WORDS[plan.decisionRule],
   };
 }
 
