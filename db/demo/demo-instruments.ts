@@ -1,8 +1,18 @@
 import { type RangeBody } from '#shared/contract/instruments';
 import { type InstrumentBody } from './demo-bodies';
 
-/** An instrument of the demo: its calibration is due so many days after the last day of the quarter. */
-export type DemoInstrument = Omit<InstrumentBody, 'status'> & { dueInDays: number; ranges: readonly RangeBody[] };
+/** An instrument of the demo: its calibration is due so many days after the last day of the year. */
+export type DemoInstrument = Omit<InstrumentBody, 'status'> & {
+  dueInDays: number;
+  /** Days from one calibration to the next. */
+  everyDays: number;
+  /** Whether the last calibration found it out of tolerance; it was used up to the day before. */
+  isOutAtLast: boolean;
+  ranges: readonly RangeBody[];
+};
+
+type Usual = Omit<DemoInstrument, 'everyDays' | 'isOutAtLast'>;
+const yearly = (instrument: Usual): DemoInstrument => ({ ...instrument, everyDays: 365, isOutAtLast: false });
 
 type Digital = Extract<RangeBody, { form: 'digital' }>;
 
@@ -48,7 +58,7 @@ const METER_RANGES: readonly RangeBody[] = [
   }),
 ];
 
-export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
+const USUAL_INSTRUMENTS: readonly Usual[] = [
   {
     assetNumber: 'OS-03',
     kind: 'oscilloscope',
@@ -162,5 +172,21 @@ export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
     dailyReference: null,
     ranges: [digital({ name: '2 m', unit: 'm', fullScale: 2, resolution: 0.0005, counts: 1 })],
     dueInDays: 310,
+  },
+];
+
+export const DEMO_INSTRUMENTS: readonly DemoInstrument[] = [
+  ...USUAL_INSTRUMENTS.map(yearly),
+  {
+    assetNumber: 'OS-01',
+    kind: 'oscilloscope',
+    description: 'Two-channel oscilloscope, 60 MHz',
+    serialNumber: 'Z22-11873',
+    place: 'Bench 2',
+    dailyReference: null,
+    ranges: SCOPE_RANGES,
+    dueInDays: 119,
+    everyDays: 182,
+    isOutAtLast: true,
   },
 ];

@@ -1,9 +1,9 @@
 import { type StagedInstrument } from './stage';
 
-/** Oscilloscope and multimeter of each of the two benches; everything else is there once. */
+/** Oscilloscopes and multimeter of each of the two benches, the first one while it is in use; all else is there once. */
 const OF_BENCH = [
   ['OS-03', 'DM-11'],
-  ['OS-02', 'DM-12'],
+  ['OS-01', 'OS-02', 'DM-12'],
 ] as const;
 
 /** The instrument of a kind that is used at a bench on a day: its own, or another one once that is past its calibration date. */
@@ -14,7 +14,9 @@ export function benchInstrument(
   day: string,
 ): number | null {
   if (kind === null) return null;
-  const good = instruments.filter((one) => one.kind === kind && one.calibrationDue >= day);
-  const own = good.find(({ assetNumber }) => OF_BENCH[bench].some((other) => other === assetNumber));
-  return (own ?? good[0])?.id ?? null;
+  const inUse = ({ calibrationDue, usedUntil }: StagedInstrument) =>
+    calibrationDue >= day && (usedUntil === null || usedUntil >= day);
+  const good = instruments.filter((one) => one.kind === kind && inUse(one));
+  const own = OF_BENCH[bench].flatMap((name) => good.filter(({ assetNumber }) => assetNumber === name));
+  return (own[0] ?? good[0])?.id ?? null;
 }

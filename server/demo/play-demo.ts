@@ -2,6 +2,7 @@ import { type DemoSpan, quarterOf } from '#db/demo/quarter';
 import { type Context } from '#server/context';
 import { RunningVerdicts } from '#server/judging/running-verdicts';
 import { Agenda } from './agenda';
+import { addCalibrationSteps } from './calibration-steps';
 import { addCast } from './cast';
 import { DemoClock } from './demo-clock';
 import { startDemoMail } from './demo-mail';
@@ -26,6 +27,7 @@ async function playQuarter(context: Context, clock: DemoClock, span: DemoSpan): 
   const cast = await addCast(context);
   const stage = setStage(context, clock, cast, until);
   addPlanSteps(context, clock, agenda, { cast, stage, quarter });
+  addCalibrationSteps(context, agenda, { cast, instruments: stage.instruments, until, seed });
   addStudySteps(context, clock, agenda, { cast, stage, quarter, seed });
   const verdicts = new RunningVerdicts();
   const noticesSent = async () => {

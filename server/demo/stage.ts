@@ -1,4 +1,5 @@
 import { DEMO_SITE, DEMO_SUPPLIERS } from '#db/demo/companies';
+import { type DemoCalibration, demoCalibrations } from '#db/demo/demo-calibrations';
 import { DEMO_INSTRUMENTS } from '#db/demo/demo-instruments';
 import { DEMO_PARTS } from '#db/demo/demo-parts';
 import { DEMO_RACK } from '#db/demo/rack-file';
@@ -23,7 +24,12 @@ export interface StagedInstrument {
   id: number;
   assetNumber: string;
   kind: InstrumentKind;
+  /** Due date of the last of its calibrations. */
   calibrationDue: string;
+  /** The last day it was used; null while it is. */
+  usedUntil: string | null;
+  /** Oldest first. */
+  calibrations: readonly DemoCalibration[];
 }
 
 /** Ids of what the lots of the quarter name. */
@@ -37,14 +43,16 @@ export interface Stage {
 }
 
 function addInstruments(context: Context, cast: Cast, until: Date): StagedInstrument[] {
-  return DEMO_INSTRUMENTS.map(({ dueInDays, ranges, ...instrument }) => {
-    const calibrationDue = dayOf(new Date(until.getTime() + dueInDays * DAY));
-    return addInstrument(context, cast.quality[0], {
-      ...instrument,
-      ranges: [...ranges],
-      calibrationDue,
-      status: 'in-service',
-    });
+  const dayIn = (days: number) => dayOf(new Date(until.getTime() + days * DAY));
+  const beginsInDays = Math.ceil((context.clock.now().getTime() - until.getTime()) / DAY);
+  return DEMO_INSTRUMENTS.map((demo) => {
+    const { dueInDays, everyDays, isOutAtLast, ranges, ...instrument } = demo;
+    const calibrations = demoCalibrations(demo, beginsInDays);
+    const calibrationDue = dayIn(calibrations[0]?.dueInDays ?? dueInDays);
+    const body = { ...instrument, ranges: [...ranges], calibrationDue, status: 'in-service' as const };
+    const { id, assetNumber, kind } = addInstrument(context, cast.quality[0], body);
+    const usedUntil = isOutAtLast ? dayIn(dueInDays - everyDays - 1) : null;
+    return { id, assetNumber, kind, calibrationDue: dayIn(dueInDays), usedUntil, calibrations };
   });
 }
 
