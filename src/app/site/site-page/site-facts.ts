@@ -20,6 +20,8 @@ import { type Site } from '#shared/contract/site';
       <dd>{{ site().approveOwnPlans ? 'waived' : 'required' }}</dd>
       <dt>Lot released by another person</dt>
       <dd>{{ site().releaseOwnReadings ? 'waived' : 'required' }}</dd>
+      <dt>Instruments checked each day</dt>
+      <dd>{{ site().dailyChecks ? 'asked' : 'not asked' }}</dd>
     </dl>
   `,
   styles: `

@@ -6,6 +6,8 @@ import { type Difference } from '../../ui/conflict-note';
 const text = () => new FormControl('', { nonNullable: true });
 const yesOrNo = () => new FormControl(false, { nonNullable: true });
 const said = (yes: boolean) => (yes ? 'waived' : 'holds');
+const asked = (yes: boolean) => (yes ? 'asked' : 'not asked');
+const hoursText = (hours: number | null) => (hours === null ? '' : `${hours}\u00a0h`);
 
 /** The settings of the site as fields; addresses stand one a line. */
 export class SiteFields implements FieldsOf<Site> {
@@ -14,29 +16,30 @@ export class SiteFields implements FieldsOf<Site> {
     department: text(),
     address: text(),
     engineeringList: text(),
-    waitingTargetHours: text(),
+    waitingTargetHours: new FormControl<number | null>(null),
     approveOwnPlans: yesOrNo(),
     releaseOwnReadings: yesOrNo(),
+    dailyChecks: yesOrNo(),
   });
 
   show(site: Site): void {
-    const { name, department, address, approveOwnPlans, releaseOwnReadings } = site;
+    const { name, department, address, approveOwnPlans, releaseOwnReadings, dailyChecks, waitingTargetHours } = site;
     this.group.reset({
       name,
       department,
       address,
       approveOwnPlans,
       releaseOwnReadings,
+      dailyChecks,
+      waitingTargetHours,
       engineeringList: site.engineeringList.join('\n'),
-      waitingTargetHours: String(site.waitingTargetHours),
     });
   }
 
   /** As it is sent. */
   value() {
-    const { engineeringList, waitingTargetHours, ...rest } = this.group.getRawValue();
-    const hours = waitingTargetHours.trim() === '' ? NaN : Number(waitingTargetHours);
-    return { ...rest, engineeringList: linesOf(engineeringList), waitingTargetHours: hours };
+    const { engineeringList, ...rest } = this.group.getRawValue();
+    return { ...rest, engineeringList: linesOf(engineeringList) };
   }
 
   differences(theirs: Site): Difference[] {
@@ -50,13 +53,18 @@ export class SiteFields implements FieldsOf<Site> {
         mine: linesOf(mine.engineeringList).join(', '),
         theirs: theirs.engineeringList.join(', '),
       },
-      { label: 'Waiting target', mine: mine.waitingTargetHours, theirs: String(theirs.waitingTargetHours) },
+      {
+        label: 'Waiting target',
+        mine: hoursText(mine.waitingTargetHours),
+        theirs: hoursText(theirs.waitingTargetHours),
+      },
       { label: 'Approval by another person', mine: said(mine.approveOwnPlans), theirs: said(theirs.approveOwnPlans) },
       {
         label: 'Release by another person',
         mine: said(mine.releaseOwnReadings),
         theirs: said(theirs.releaseOwnReadings),
       },
+      { label: 'Daily checks', mine: asked(mine.dailyChecks), theirs: asked(theirs.dailyChecks) },
     ];
     return rows.filter((row) => row.mine !== row.theirs);
   }

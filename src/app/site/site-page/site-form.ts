@@ -9,13 +9,23 @@ import { ApiClient } from '../../data/api';
 import { RecordForm } from '../../data/record-form';
 import { ConflictNote } from '../../ui/conflict-note';
 import { FormFoot } from '../../ui/form-foot';
+import { QuantityField } from '../../ui/quantity-field/quantity-field';
 import { FieldErrorPipe } from '../../ui/values/field-error-pipe';
 import { SiteFields } from './site-fields';
 
 /** Changes the settings of the site. */
 @Component({
   selector: 'qr-site-form',
-  imports: [ConflictNote, FieldErrorPipe, FormFoot, MatCheckbox, MatFormFieldModule, MatInput, ReactiveFormsModule],
+  imports: [
+    ConflictNote,
+    FieldErrorPipe,
+    FormFoot,
+    MatCheckbox,
+    MatFormFieldModule,
+    MatInput,
+    QuantityField,
+    ReactiveFormsModule,
+  ],
   templateUrl: './site-form.html',
   styles: `
     .waivers {
