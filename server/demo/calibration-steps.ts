@@ -44,11 +44,10 @@ function assessmentOf({ nearLimit }: Review['affected'][number]) {
 }
 
 function assess(context: Context, caller: Caller, reviewId: number): void {
-  const { affected } = findReview(context.db, reviewId);
-  for (const one of affected.slice(0, -LEFT)) {
-    const { version } = findReview(context.db, reviewId);
-    assessLot(context, caller, { id: reviewId, version, lotId: one.lot.id }, assessmentOf(one));
-  }
+  const review = findReview(context.db, reviewId);
+  let { version } = review;
+  for (const one of review.affected.slice(0, -LEFT))
+    ({ version } = assessLot(context, caller, { id: reviewId, version, lotId: one.lot.id }, assessmentOf(one)));
 }
 
 /**

@@ -46,23 +46,30 @@ export function doubtfulReadings(
     .where(and(lotId === undefined ? undefined : eq(readings.lotId, lotId), inDoubt(doubt)))
     .orderBy(asc(readings.lotId), asc(sampleUnits.unit), asc(planCharacteristics.position), asc(readings.attempt))
     .all();
-  const known = new Map<number, Characteristic>();
+  const known = new Map<number, Judged>();
   return rows.map(({ lotId: of, characteristicId, content, ...row }) => {
-    const whole = known.get(characteristicId) ?? wholeCharacteristic(content);
-    known.set(characteristicId, whole);
-    return { lotId: of, reading: { ...row, ...judged(whole, row.value, points) } };
+    const judged = known.get(characteristicId) ?? judgedBy(wholeCharacteristic(content), points);
+    known.set(characteristicId, judged);
+    return { lotId: of, reading: { ...row, ...judged.shown, nearLimit: judged.isNear(row.value) } };
   });
 }
 
-/** The limits of a reading, and whether the error found could have carried it over one of them. */
-function judged(whole: Characteristic, value: number | null, points: readonly CalibrationPoint[]) {
+/** What is shown of a characteristic, and whether the error found could have carried a value over one of its limits. */
+interface Judged {
+  shown: Pick<DoubtfulReading, 'characteristic' | 'lowerLimit' | 'upperLimit'>;
+  isNear(value: number | null): boolean | null;
+}
+
+function judgedBy(whole: Characteristic, points: readonly CalibrationPoint[]): Judged {
   const { key, name } = whole;
   if (whole.kind === 'attribute') {
-    const none = { lowerLimit: null, upperLimit: null, nearLimit: null };
-    return { characteristic: { key, name, unit: '', decimals: 0 }, ...none };
+    const characteristic = { key, name, unit: '', decimals: 0 };
+    return { shown: { characteristic, lowerLimit: null, upperLimit: null }, isNear: () => null };
   }
   const { unit, decimals, lowerLimit, upperLimit } = whole;
   const share = foundError(points, unit);
-  const nearLimit = share === null || value === null ? null : couldTurn(value, [lowerLimit, upperLimit], share);
-  return { characteristic: { key, name, unit, decimals }, lowerLimit, upperLimit, nearLimit };
+  return {
+    shown: { characteristic: { key, name, unit, decimals }, lowerLimit, upperLimit },
+    isNear: (value) => (share === null || value === null ? null : couldTurn(value, [lowerLimit, upperLimit], share)),
+  };
 }

@@ -2,14 +2,9 @@ import { type Db } from '#db/open-database';
 import { calibrations, instrumentReviews, reviewLots } from '#db/schema/calibrations';
 import { instruments } from '#db/schema/instruments';
 import { readings } from '#db/schema/readings';
+import { type LotDoubt } from '#shared/contract/calibrations';
 import { and, eq, isNull, ne, or } from 'drizzle-orm';
 import { inDoubt } from './doubt';
-
-/** A review that has not cleared a lot. */
-export interface LotDoubt {
-  number: string;
-  assetNumber: string;
-}
 
 /**
  * Reviews that keep a lot from being released: they have not said what their doubt means for it, or asked that it be
@@ -17,7 +12,7 @@ export interface LotDoubt {
  */
 export function lotInDoubt(db: Db, lotId: number): LotDoubt[] {
   return db
-    .select({ review: instrumentReviews, instrument: instruments })
+    .select({ review: instrumentReviews, instrument: instruments, effect: reviewLots.effect, note: reviewLots.note })
     .from(reviewLots)
     .innerJoin(instrumentReviews, eq(instrumentReviews.id, reviewLots.reviewId))
     .innerJoin(calibrations, eq(calibrations.id, instrumentReviews.calibrationId))
@@ -35,5 +30,8 @@ export function lotInDoubt(db: Db, lotId: number): LotDoubt[] {
           .get() !== undefined
       );
     })
-    .map(({ review, instrument }) => ({ number: review.number, assetNumber: instrument.assetNumber }));
+    .map(({ review, instrument, effect, note }) => ({
+      ...{ reviewId: review.id, number: review.number, assetNumber: instrument.assetNumber },
+      ...{ effect, note },
+    }));
 }

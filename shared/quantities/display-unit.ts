@@ -35,12 +35,24 @@ export interface DisplayUnit {
   base: string;
 }
 
+/** Units are few and asked for with every value; so many of them are remembered. */
+const MOST_REMEMBERED = 500;
+const remembered = new Map<string, UnitParts>();
+
 /**
  * Takes a display unit apart. An empty unit is a plain number.
  *
  * @throws {UnitNotKnown}
  */
 export function unitParts(unit: string): UnitParts {
+  const known = remembered.get(unit);
+  if (known) return known;
+  const parts = takenApart(unit);
+  if (remembered.size < MOST_REMEMBERED) remembered.set(unit, parts);
+  return parts;
+}
+
+function takenApart(unit: string): UnitParts {
   const text = plainText(unit);
   if (text === '') return { unit: null, qualifier: null, places: 0 };
   const { readings, qualifier } = readUnitText(text);
