@@ -48,6 +48,7 @@ export async function demoPlaces(api: APIRequestContext): Promise<(address: stri
     certificate: ids(await itemsOf(api, '/api/certificates?limit=1'), 'certificate'),
     nonconformance: ids(await itemsOf(api, '/api/nonconformances?limit=1'), 'nonconformance'),
     waveform: ids(captured.flat(), 'waveform'),
+    review: ids(await itemsOf(api, '/api/reviews'), 'review'),
     study: ids(await itemsOf(api, '/api/gauge-studies?limit=1'), 'gauge study'),
   };
   return (address) =>
