@@ -212,6 +212,27 @@ export const listDoubtfulReadings = endpoint({
   params: z.object({ id: z.coerce.number().int().positive(), lot: z.coerce.number().int().positive() }),
   reply: z.object({ items: z.array(doubtfulReading) }),
 });
+
+/** A review that has not cleared a lot: it says nothing of it yet, or asks that something be done about it. */
+export const lotDoubt = z.object({
+  reviewId: id,
+  number: z.string(),
+  assetNumber: z.string(),
+  effect: z.enum(REVIEW_EFFECTS).nullable(),
+  note: z.string(),
+});
+export type LotDoubt = z.infer<typeof lotDoubt>;
+
+export const listLotDoubts = endpoint({
+  method: 'GET',
+  path: '/api/lots/:id/doubts',
+  who: READERS,
+  summary:
+    'Reviews of instruments found out of tolerance that have not cleared a lot, as long as a doubtful reading counts.',
+  params: byId,
+  reply: z.object({ items: z.array(lotDoubt) }),
+});
+
 export const assessReviewLot = endpoint({
   method: 'PUT',
   path: '/api/reviews/:id/lots/:lot',

@@ -5,6 +5,7 @@ import { remindDue } from '#server/calibrations/remind-due';
 import {
   type Calibration,
   type InstrumentCheck,
+  type LotDoubt,
   type readInstrumentHistory,
   type Review,
 } from '#shared/contract/calibrations';
@@ -276,9 +277,14 @@ describe('an instrument found out of tolerance', () => {
     expect(refused.status).toBe(409);
     expect(problem(refused)).toMatchObject({ code: 'readings-in-doubt' });
     expect(problem(refused).title).toContain('IR-26-001');
+    const doubts = async () =>
+      (await site.as('inspector').get(`/api/lots/${lot.id}/doubts`).expect(200)).body as { items: LotDoubt[] };
+    expect((await doubts()).items).toMatchObject([{ reviewId, number: 'IR-26-001', effect: null }]);
     await assess(reviewId, 1, { effect: 'measure-again', note: 'Measured again on DM-12.' }).expect(200);
     expect((await decide()).status).toBe(409);
+    expect((await doubts()).items).toMatchObject([{ effect: 'measure-again', note: 'Measured again on DM-12.' }]);
     await assess(reviewId, 2, { effect: 'none', note: '' }).expect(200);
+    expect((await doubts()).items).toEqual([]);
     expect((await decide()).status).toBe(200);
     expect((await review(reviewId)).affected[0]?.certificates).toMatchObject([{ number: 'CC-26-0001' }]);
   });

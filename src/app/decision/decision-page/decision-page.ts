@@ -11,6 +11,7 @@ import { MeasuredWith } from '../../lots/evidence/measured-with';
 import { PlateOfLot } from '../../lots/evidence/plate-of-lot';
 import { SampleSheet } from '../../lots/evidence/sample-sheet';
 import { PageTitle } from '../../page-title';
+import { LotDoubts } from '../../reviews/lot-doubts';
 import { Loaded } from '../../ui/page-state/loaded';
 import { PageState } from '../../ui/page-state/page-state';
 import { ReadOnlyNote } from '../../ui/states/read-only-note';
@@ -22,6 +23,7 @@ import { SigningPanel } from './signing-panel';
   imports: [
     CharacteristicResults,
     Loaded,
+    LotDoubts,
     LotHead,
     LotHistory,
     MatButton,

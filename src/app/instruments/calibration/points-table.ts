@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import { type CalibrationPoint } from '#shared/contract/calibrations';
 import { VerdictMark } from '../../ui/marks/verdict-mark';
 import { ScrollRegion } from '../../ui/scroll-region';
-import { pointError, pointText } from './point-error';
+import { pointDigits, pointError, pointText } from './point-error';
 
 /** The points of a calibration: what was applied, what the instrument showed, and how far off it was and might be. */
 @Component({
@@ -67,10 +67,10 @@ export class PointsTable {
       const { text, isWithin } = pointError(one);
       return {
         point: one.point,
-        reference: pointText(one.reference, one.unit),
-        found: pointText(one.found, one.unit),
+        reference: pointText(one.reference, one.unit, pointDigits(one.reference, one.limit)),
+        found: pointText(one.found, one.unit, pointDigits(one.found, one.limit)),
         error: text,
-        limit: pointText(one.limit, one.unit, {}),
+        limit: pointText(one.limit, one.unit),
         isWithin,
       };
     }),

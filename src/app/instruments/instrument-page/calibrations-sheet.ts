@@ -49,6 +49,7 @@ const FIRST = 3;
   styles: `
     :host {
       display: grid;
+      grid-template-columns: minmax(0, 1fr);
       gap: 16px;
     }
     qr-calibration-entry + qr-calibration-entry,

@@ -2,12 +2,7 @@ import { ChangeDetectionStrategy, Component, effect, inject, input, numberAttrib
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { readInstrumentHistory, recordCalibration } from '#shared/contract/calibrations';
-import {
-  changeInstrument,
-  type Instrument,
-  INSTRUMENT_KIND_TITLES,
-  readInstrument,
-} from '#shared/contract/instruments';
+import { changeInstrument, INSTRUMENT_KIND_TITLES, readInstrument } from '#shared/contract/instruments';
 import { endpointResource } from '../../data/api';
 import { PageTitle } from '../../page-title';
 import { may } from '../../session/may';
@@ -17,7 +12,7 @@ import { PageState } from '../../ui/page-state/page-state';
 import { MessageNote } from '../../ui/states/message-note';
 import { ReadOnlyNote } from '../../ui/states/read-only-note';
 import { MomentPipe } from '../../ui/values/moment-pipe';
-import { InstrumentState, obstacleOf } from '../instrument-state';
+import { InstrumentState } from '../instrument-state';
 import { CalibrationsSheet } from './calibrations-sheet';
 import { ChecksSheet } from './checks-sheet';
 import { InstrumentFacts } from './instrument-facts';
@@ -60,13 +55,6 @@ export class InstrumentPage {
     effect(() => {
       if (this.instrument.hasValue()) this.title.show(this.instrument.value().assetNumber);
     });
-  }
-
-  /** Whether a reading may name it today, in words. */
-  protected standing(instrument: Instrument): string {
-    if (instrument.usable) return 'Can be chosen for a reading';
-    const obstacle = obstacleOf(instrument)?.words ?? 'past its calibration date';
-    return `Cannot be chosen for a reading: ${obstacle}`;
   }
 
   protected reload(): void {

@@ -21,6 +21,7 @@ import { MeasuredWith } from '../evidence/measured-with';
 import { PlateOfLot } from '../evidence/plate-of-lot';
 import { SampleSheet } from '../evidence/sample-sheet';
 import { SamplingFacts } from '../evidence/sampling-facts';
+import { LotDoubts } from '../../reviews/lot-doubts';
 import { AskReason } from '../../shell/reason-dialog/ask-reason';
 import { LotWaveformsPanel } from '../../waveforms/lot-waveforms-panel';
 import { CertificatePanel } from './certificate-panel';
@@ -35,6 +36,7 @@ import { placeOf } from './lot-place';
     CertificatePanel,
     CharacteristicResults,
     Loaded,
+    LotDoubts,
     LotFacts,
     LotHead,
     LotHistory,

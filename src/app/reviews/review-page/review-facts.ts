@@ -50,6 +50,7 @@ import { doubtWords } from '../doubt-words';
   styles: `
     :host {
       display: grid;
+      grid-template-columns: minmax(0, 1fr);
       gap: 12px;
     }
     .columns {
@@ -59,6 +60,7 @@ import { doubtWords } from '../doubt-words';
     }
     .found {
       display: grid;
+      grid-template-columns: minmax(0, 1fr);
       gap: 12px;
       align-content: start;
       min-width: 0;
