@@ -2,7 +2,13 @@ import { type Endpoint } from '#shared/contract/endpoint';
 import { ENDPOINTS } from '#shared/contract/index';
 import * as racks from '#shared/contract/racks';
 import { escape } from '#server/description/escape';
-import { EXAMPLE_ANSWER, EXAMPLE_LOT, EXAMPLE_READINGS, EXAMPLE_WAVEFORM_ANSWER, RACK_STEPS } from '#server/description/rack-example';
+import {
+  EXAMPLE_ANSWER,
+  EXAMPLE_LOT,
+  EXAMPLE_READINGS,
+  EXAMPLE_WAVEFORM_ANSWER,
+  RACK_STEPS,
+} from '#server/description/rack-example';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { testSite, type TestSite } from '../support/test-site';
 
