@@ -97,7 +97,7 @@ test('an instrument past its date is refused; one found out of tolerance is with
   await expect(assessment.getByText('Say in a few words what is done about it.')).toBeVisible();
   await assessment.getByLabel('Note').fill('Unit 1 is measured again on DM-11.');
   await assessment.getByRole('button', { name: 'Save' }).click();
-  await expect(assessment.getByText('Assessed by M. Aldoush')).toBeVisible();
+  await expect(page.getByText('Assessed by M. Aldoush')).toBeVisible();
   await page.getByLabel('What the review found').fill('One reading, measured again.');
   await page.getByRole('button', { name: 'Close review' }).click();
   await page.getByRole('dialog').getByRole('button', { name: 'Close review' }).click();

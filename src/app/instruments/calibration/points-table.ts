@@ -40,6 +40,9 @@ import { pointDigits, pointError, pointText } from './point-error';
     </div>
   `,
   styles: `
+    div {
+      position: relative;
+    }
     td {
       white-space: nowrap;
     }

@@ -21,6 +21,9 @@ const WARNED_BEFORE = 30;
   imports: [EmptyState, FigureBlock, Icon, InstrumentState, Loaded, MatButton, PageState, RouterLink],
   templateUrl: './instrument-list-page.html',
   styles: `
+    .serial {
+      overflow-wrap: anywhere;
+    }
     .state {
       display: grid;
       gap: 2px;

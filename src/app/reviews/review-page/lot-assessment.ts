@@ -1,9 +1,12 @@
 import {
+  afterNextRender,
   ChangeDetectionStrategy,
   Component,
   computed,
   effect,
+  ElementRef,
   inject,
+  Injector,
   input,
   output,
   signal,
@@ -57,6 +60,8 @@ const LOOKS: Readonly<Record<Effect, VerdictLook>> = { none: 'ok', 'measure-agai
 })
 export class LotAssessment {
   private readonly api = inject(ApiClient);
+  private readonly element = inject<ElementRef<HTMLElement>>(ElementRef);
+  private readonly injector = inject(Injector);
 
   readonly review = input.required<Review>();
   readonly affected = input.required<Affected>();
@@ -71,6 +76,9 @@ export class LotAssessment {
   protected readonly titles = REVIEW_EFFECT_TITLES;
   protected readonly looks = LOOKS;
   protected readonly saving = new RecordSave();
+  /** Whether what is said already is being changed. */
+  protected readonly changing = signal(false);
+  protected readonly isTyping = computed(() => this.editable() && (this.affected().effect === null || this.changing()));
   protected readonly readingsOpen = signal(false);
   protected readonly form = new FormGroup({
     effect: new FormControl<Effect | null>(null),
@@ -99,6 +107,17 @@ export class LotAssessment {
     return this.editable() && this.form.dirty;
   }
 
+  /** Shows what is said as text again. The focus stays at this lot. */
+  protected leave(): void {
+    const { effect: said, note } = this.affected();
+    this.form.reset({ effect: said, note });
+    this.saving.said.set([]);
+    this.changing.set(false);
+    afterNextRender(() => this.element.nativeElement.querySelector<HTMLElement>('.change')?.focus(), {
+      injector: this.injector,
+    });
+  }
+
   protected save(): void {
     const { id, version } = this.review();
     const lot = this.affected().lot.id;
@@ -107,8 +126,8 @@ export class LotAssessment {
       value: this.form.getRawValue(),
       call: (body) => this.api.call(assessReviewLot, { params: { id, lot }, body, version }),
       saved: (review) => {
-        this.form.markAsPristine();
         this.changed.emit(review);
+        this.leave();
       },
       overtaken: () => {
         this.saving.said.set([

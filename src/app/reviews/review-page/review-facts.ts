@@ -55,7 +55,7 @@ import { doubtWords } from '../doubt-words';
     }
     .columns {
       display: grid;
-      grid-template-columns: repeat(auto-fit, minmax(min(320px, 100%), 1fr));
+      grid-template-columns: repeat(auto-fit, minmax(min(420px, 100%), 1fr));
       gap: 16px 32px;
     }
     .found {

@@ -69,6 +69,16 @@ describe('ReviewPage', () => {
     expect(close()?.getAttribute('aria-disabled')).not.toBe('true');
   });
 
+  it('shows what is said of a lot as text until it is to be changed', async () => {
+    const page = await openReview('quality');
+    expect(page.element.querySelectorAll('qr-lot-assessment form')).toHaveLength(1);
+    await page.press('Change');
+    expect(page.element.querySelectorAll('qr-lot-assessment form')).toHaveLength(2);
+    await page.press('Cancel');
+    expect(page.element.querySelectorAll('qr-lot-assessment form')).toHaveLength(1);
+    expect(page.fixture.componentInstance.hasUnsaved()).toBe(false);
+  });
+
   it('reads the review again where somebody else worked on it, and keeps what was typed', async () => {
     const page = await openReview('quality');
     await chooseEffect(page.element, 'Recall the lot');
