@@ -45,7 +45,10 @@ import { doubtWords } from '../doubt-words';
         <qr-certificate-file [instrumentId]="shown.instrument.id" [calibration]="calibration" [readOnly]="true" />
       </div>
     </div>
-    <p class="small quiet">{{ why() }} Readings that were withdrawn are left out; repeats that stand are counted.</p>
+    <p class="small quiet">
+      {{ why() }} Readings that were withdrawn are left out; repeats that stand are counted. What is computed from
+      readings is not weighed against the error here; it stands on the page of the lot.
+    </p>
   `,
   styles: `
     :host {
