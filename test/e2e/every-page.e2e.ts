@@ -180,24 +180,34 @@ async function faultsOnScreens(page: Page, path: string): Promise<string[]> {
 
 test.describe.configure({ mode: 'parallel' });
 
+/** So many pages are looked at in one test: each is seen on four screens, and slow machines need their time. */
+const PAGES_AT_ONCE = 5;
+
+function portionsOf(pages: readonly string[]): string[][] {
+  const count = Math.ceil(pages.length / PAGES_AT_ONCE);
+  return Array.from({ length: count }, (_, at) => pages.slice(at * PAGES_AT_ONCE, (at + 1) * PAGES_AT_ONCE));
+}
+
 for (const [who, { sees, closed }] of Object.entries(PEOPLE)) {
-  test(`every page of ${who} has one heading, fits the screen and can be read by everybody`, async ({
-    pageOf,
-    api,
-  }) => {
-    const placeOf = await demoPlaces(await api('quality'));
-    const page = await pageOf(who);
-    const shown = settling(page);
-    const faults: string[] = [];
-    for (const path of sees.map(placeOf)) {
-      await page.setViewportSize(SCREENS[0]);
-      await page.goto(path);
-      await shown();
-      await expect(page.getByText('is open to:'), path).toHaveCount(0);
-      await expect(page.getByText(/did not load/), path).toHaveCount(0);
-      faults.push(...(await faultsOnScreens(page, path)));
-    }
-    expect(faults).toEqual([]);
+  portionsOf(sees).forEach((pages, at, { length }) => {
+    test(`every page of ${who} has one heading, fits the screen and can be read by everybody, ${at + 1} of ${length}`, async ({
+      pageOf,
+      api,
+    }) => {
+      const placeOf = await demoPlaces(await api('quality'));
+      const page = await pageOf(who);
+      const shown = settling(page);
+      const faults: string[] = [];
+      for (const path of pages.map(placeOf)) {
+        await page.setViewportSize(SCREENS[0]);
+        await page.goto(path);
+        await shown();
+        await expect(page.getByText('is open to:'), path).toHaveCount(0);
+        await expect(page.getByText(/did not load/), path).toHaveCount(0);
+        faults.push(...(await faultsOnScreens(page, path)));
+      }
+      expect(faults).toEqual([]);
+    });
   });
 
   test(`pages closed to ${who} say who may open them`, async ({ pageOf, api }) => {
