@@ -6,6 +6,7 @@ import { formatQuantity } from '#shared/quantities/format-quantity';
 import { waveformValue } from '#shared/waveform/waveform-value';
 import { may } from '../../session/may';
 import { lotWaveforms } from '../lot-waveforms';
+import { isReadOff } from '../read-off';
 import { WaveformUpload } from '../waveform-upload/waveform-upload';
 import { WaveformLine } from './waveform-line';
 
@@ -15,9 +16,6 @@ export interface WaveformReading {
   /** SI base unit. */
   readonly value: number;
 }
-
-/** What can be read off a waveform. */
-const READ_OFF: readonly string[] = ['ripple', 'ripple-rms', 'loaded-voltage', 'no-load-voltage', 'frequency'];
 
 /** The waveforms of one unit: one more is taken in, and what one gives is taken as a reading. */
 @Component({
@@ -68,10 +66,7 @@ export class UnitWaveforms {
   readonly taken = output<WaveformReading>();
 
   protected readonly mayWrite = may(keepWaveform);
-  protected readonly isReadOff = computed(() => {
-    const characteristic = this.characteristic();
-    return characteristic.kind === 'measured' && READ_OFF.includes(characteristic.measurand);
-  });
+  protected readonly isReadOff = computed(() => isReadOff(this.characteristic()));
   protected readonly list = lotWaveforms(() => (this.isReadOff() ? this.lotId() : undefined));
   protected readonly lines = computed(() => {
     const items = this.list.hasValue() ? this.list.value().items : [];

@@ -11,6 +11,7 @@ import { RouterLink } from '@angular/router';
 import { expectedBand } from '#shared/plan/expected-band';
 import { cautionOf, methodNote } from '#shared/plan/method-notes';
 import { UnitWaveforms } from '../../../waveforms/unit-waveforms/unit-waveforms';
+import { isReadOff } from '../../../waveforms/read-off';
 import { narrowerThan } from '../../../shell/screen-width';
 import { ScopeReader } from '../../../ui/scope-reader/scope-reader';
 import { type ScopeText } from '../../../ui/scope-reader/scope-text';
@@ -71,6 +72,8 @@ import { RefusedReading } from './refused-reading';
 })
 export class ReadingPanel {
   protected readonly sheet = inject(BenchSheet);
+  /** Waveforms are loaded where a reading can be taken from one. */
+  protected readonly readsOff = isReadOff;
   private readonly settings = inject(BenchSettings);
   protected readonly commands = inject(DeskCommands);
   protected readonly cursor = inject(BenchCursor);
