@@ -193,10 +193,9 @@ function acknowledge(db: Db, row: ReadingRow, body: ReadingBody, running: Runnin
     people: new Map([[row.takenById ?? 0, nameOf(db, row.takenById)]]),
     racks: new Map<number, string>(),
   };
-  const verdict = running.unit.characteristics.get(body.characteristicKey)?.verdict;
   return {
     reading: readingView(row, body.unit, body.characteristicKey, names),
-    verdict: verdict === undefined || verdict === 'not judged' ? 'conforming' : verdict,
+    verdict: running.unit.characteristics.get(body.characteristicKey)?.verdict ?? 'not judged',
     unitVerdict: running.unit.verdict,
     stop: running.lot.stop,
     lotReason: running.lot.reason,

@@ -200,7 +200,8 @@ export const readBenchChanges = endpoint({
 /** What is acknowledged when a reading is kept; the verdicts are the server's. */
 export const kept = z.object({
   reading,
-  verdict: z.enum(['conforming', 'conditional', 'nonconforming']),
+  /** "not judged" for a reading withdrawn meanwhile, or one whose uncertainty a guard band needs and nobody knows. */
+  verdict: z.enum(['conforming', 'conditional', 'nonconforming', 'not judged']),
   unitVerdict: z.enum(['conforming', 'nonconforming', 'undecided', 'not judged']),
   stop: z.boolean(),
   lotReason: z.string(),

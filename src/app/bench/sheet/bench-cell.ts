@@ -2,6 +2,7 @@ import { type ExpectedBands } from '#shared/contract/parts';
 import { type Characteristic } from '#shared/contract/plans';
 import { formatLimits } from '#shared/quantities/format-quantity';
 import { type CharacteristicVerdict, type UnitVerdict } from '#shared/verdict/sample-verdict';
+import { unjudgedReason } from '#shared/verdict/verdict-reason';
 import { readingDigits, readingText } from '../../ui/values/reading-text';
 import { lookOf, LOOK_WORDS, type VerdictLook } from '../../ui/verdict-look';
 import { type BenchColumn, type BenchStop } from './bench-column';
@@ -107,13 +108,13 @@ function cellLabel(
 ): string {
   if (refusal !== null) return `${characteristic.name}: refused. ${refusal}`;
   if (typeof value === 'boolean') return `${characteristic.name}: ${value ? 'pass' : 'fail'}`;
-  const unread = verdict === 'not judged' && value === null;
-  if (characteristic.kind === 'attribute' || unread) return `${characteristic.name}: no reading`;
+  const unjudged = unjudgedReason({ verdict, value });
+  if (characteristic.kind === 'attribute' || unjudged === 'no reading') return `${characteristic.name}: no reading`;
   const { unit, decimals, lowerLimit, upperLimit } = characteristic;
   const parts = [
     value === null ? 'no value' : readingText(value, unit, decimals),
     formatLimits(lowerLimit, upperLimit, unit, decimals),
-    verdict === 'conditional' ? 'conditional' : LOOK_WORDS[lookOf(verdict)].toLowerCase(),
+    verdict === 'conditional' ? 'conditional' : (unjudged ?? LOOK_WORDS[lookOf(verdict)].toLowerCase()),
     mark?.words ?? '',
     waiting ? 'not sent yet' : '',
   ];
